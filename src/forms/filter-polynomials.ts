@@ -1,0 +1,28 @@
+/** A complex number as plain data. */
+export interface Complex {
+  readonly re: number;
+  readonly im: number;
+}
+
+/** Which ripple law a transfer function obeys; decides which certificates apply. */
+export type Family = 'generalizedChebyshev' | 'butterworth';
+
+/**
+ * A lossless reciprocal two-port response in product form, low-pass prototype variable s = j*omega.
+ *
+ * `S21 = P/(epsilon*E)`, `S11 = F/(epsilonR*E)`; E and F are monic with the roots `poles` and
+ * `reflectionZeros`; P has the roots `transmissionZeros` (finite ones only) and the leading coefficient
+ * `transmissionLead`, which is +-1 or +-j.
+ */
+export interface FilterPolynomials {
+  readonly family: Family;
+  readonly order: number;
+  readonly poles: readonly Complex[];
+  readonly reflectionZeros: readonly Complex[];
+  readonly transmissionZeros: readonly Complex[];
+  readonly transmissionLead: Complex;
+  readonly epsilon: number;
+  readonly epsilonR: number;
+  /** Return-loss level of the equiripple band, dB; absent where the family has none. */
+  readonly returnLossDb?: number;
+}

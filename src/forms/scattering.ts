@@ -1,0 +1,9 @@
+import type { Complex } from './filter-polynomials.js';
+
+/** The four scattering parameters of a two-port at one frequency. */
+export interface Scattering {
+  readonly s11: Complex;
+  readonly s21: Complex;
+  readonly s12: Complex;
+  readonly s22: Complex;
+}

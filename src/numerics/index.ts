@@ -1,0 +1,2 @@
+export type { FailureDetail } from './failure.js';
+export { FilterFailure } from './failure.js';
