@@ -1,8 +1,4 @@
-/** A complex number as plain data. */
-export interface Complex {
-  readonly re: number;
-  readonly im: number;
-}
+import type { Complex } from '../numerics/index.js';
 
 /** Which ripple law a transfer function obeys; decides which certificates apply. */
 export type Family = 'generalizedChebyshev' | 'butterworth';

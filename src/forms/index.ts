@@ -5,7 +5,8 @@
  *  Source   R. J. Cameron, Advanced coupling matrix synthesis techniques for microwave filters, IEEE Trans. MTT 51(1), 2003 (the (N+2) matrix; from memory) */
 export type { Certificate } from './certificate.js';
 export type { CouplingMatrix, Rotation } from './coupling-matrix.js';
-export type { Complex, Family, FilterPolynomials } from './filter-polynomials.js';
+export type { Complex } from '../numerics/index.js';
+export type { Family, FilterPolynomials } from './filter-polynomials.js';
 export type { Band } from './frequency-map.js';
 export { bandFromEdges, edgesOfBand, hzFromOmega, omegaFromHz } from './frequency-map.js';
 export type { Level, MaskLine, MaskRow, Span } from './mask.js';

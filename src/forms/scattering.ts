@@ -1,4 +1,4 @@
-import type { Complex } from './filter-polynomials.js';
+import type { Complex } from '../numerics/index.js';
 
 /** The four scattering parameters of a two-port at one frequency. */
 export interface Scattering {

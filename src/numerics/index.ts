@@ -1,2 +1,30 @@
+/** Numerics: arithmetic that knows no trade word.
+ *  Takes    numbers, plain complex numbers, arrays of doubles
+ *  Gives    complex arithmetic, monotone roots, doubled-precision sums, complex solves, symmetric eigenvalues, the failure class
+ *  Refuses  through FilterFailure only
+ *  Source   T. J. Dekker, A floating-point technique for extending the available precision, Numer. Math. 18, 1971 (from memory) */
+export {
+  add,
+  complex,
+  conjugate,
+  divide,
+  logarithm,
+  magnitude,
+  multiply,
+  powerOfJ,
+  scale,
+  squareRoot,
+  subtract,
+} from './complex.js';
+export type { ComplexVector, ShiftedMatrix } from './complex-solve.js';
+export { inverseColumns } from './complex-solve.js';
+export type { Complex } from './complex-type.js';
 export type { FailureDetail } from './failure.js';
 export { FilterFailure } from './failure.js';
+export { EPS } from './limits.js';
+export type { Doubled } from './doubled.js';
+export { doubledDot } from './doubled.js';
+export type { RisingFunction } from './monotone-root.js';
+export { monotoneRoot } from './monotone-root.js';
+export type { SymmetricEigen } from './symmetric-eigen.js';
+export { symmetricEigen } from './symmetric-eigen.js';

@@ -1,0 +1,8 @@
+/** Approximation: from order, return loss and transmission zeros to a transfer function in product form.
+ *  Takes    order, return loss in dB, transmission zeros (normalized)
+ *  Gives    FilterPolynomials: poles, reflection zeros, transmission zeros, ripple constants
+ *  Refuses  E_ORDER_RANGE, E_RL_RANGE, E_ZERO_COUNT, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR, E_ZERO_RANGE
+ *  Source   R. J. Cameron, General coupling matrix synthesis methods for Chebyshev filtering functions, IEEE Trans. MTT 47(4), 1999 (from memory) */
+export { butterworth } from './butterworth.js';
+export type { GeneralizedChebyshevRequest, TransmissionZero } from './generalized-chebyshev.js';
+export { chebyshev, generalizedChebyshev } from './generalized-chebyshev.js';

@@ -1,0 +1,47 @@
+import type { CouplingMatrix, FilterPolynomials } from '../forms/index.js';
+import { FilterFailure } from '../numerics/index.js';
+
+/** Anything with a response: a transfer function in product form or a coupling matrix. */
+export type Model = FilterPolynomials | CouplingMatrix;
+
+export function isMatrix(model: Model): model is CouplingMatrix {
+  return 'values' in model;
+}
+
+/** One failure in the package's message form. */
+export function argumentFailure(code: string, argument: string, value: unknown, limit: string, hint: string): FilterFailure {
+  const shown = String(value).slice(0, 40);
+  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, { argument, value, limit, hint });
+}
+
+/** @throws FilterFailure E_TYPE, E_NOT_FINITE */
+export function checkFrequencies(omega: ArrayLike<number>, name: string): Float64Array {
+  if (omega === null || typeof omega !== 'object' || !Number.isInteger(omega.length)) {
+    throw argumentFailure('E_TYPE', name, omega, 'an array of numbers', 'give an array, also for one frequency');
+  }
+  return Float64Array.from({ length: omega.length }, (_, n) => checkFrequency(omega[n], `${name}[${n}]`));
+}
+
+/** @throws FilterFailure E_TYPE, E_NOT_FINITE */
+export function checkFrequency(omega: unknown, name: string): number {
+  if (typeof omega !== 'number') throw argumentFailure('E_TYPE', name, omega, 'numbers only', 'replace the entry by a number');
+  if (!Number.isFinite(omega)) throw argumentFailure('E_NOT_FINITE', name, omega, 'finite numbers', 'replace the entry');
+  return omega;
+}
+
+/** Loss `f0/(B*Qu)`: one number, or one a resonator. @throws FilterFailure E_TYPE, E_NOT_FINITE, E_LOSS */
+export function checkLoss(loss: number | readonly number[] | undefined, order: number): number | Float64Array {
+  if (loss === undefined) return 0;
+  if (typeof loss === 'number') return checkOneLoss(loss, 'loss');
+  if (!Array.isArray(loss) || loss.length !== order) {
+    throw argumentFailure('E_LOSS', 'loss', Array.isArray(loss) ? `${loss.length} values` : loss, `a number or ${order} numbers, one a resonator`, 'match the order');
+  }
+  const values = Float64Array.from(loss, (value, n) => checkOneLoss(value, `loss[${n}]`));
+  return values.every((value) => value === values[0]) ? (values[0] as number) : values;
+}
+
+function checkOneLoss(value: number, name: string): number {
+  checkFrequency(value, name);
+  if (value < 0) throw argumentFailure('E_LOSS', name, value, 'numbers >= 0', 'drop the sign: loss is f0/(B*Qu)');
+  return value;
+}

@@ -1,0 +1,39 @@
+import type { FilterPolynomials, Scattering } from '../forms/index.js';
+import { type Complex, complex, divide, multiply, scale } from '../numerics/index.js';
+
+/**
+ * Scattering parameters of a product form at any complex s. Factors are taken in quotients, so that nothing overflows; S22
+ * follows from losslessness, `S22 = prod(s + conj f)/(epsilonR*E)`, and is continued to complex s.
+ */
+export function scatteringOfPolynomials(polynomials: FilterPolynomials, s: Complex): Scattering {
+  const { poles, reflectionZeros, transmissionZeros, transmissionLead, epsilon, epsilonR } = polynomials;
+  let s11 = complex(1 / epsilonR, 0);
+  let s22 = s11;
+  let s21 = scale(transmissionLead, 1 / epsilon);
+  poles.forEach((pole, n) => {
+    const below = complex(s.re - pole.re, s.im - pole.im);
+    const reflection = reflectionZeros[n] as Complex;
+    const transmission = transmissionZeros[n];
+    s11 = multiply(s11, divide(complex(s.re - reflection.re, s.im - reflection.im), below));
+    s22 = multiply(s22, divide(complex(s.re + reflection.re, s.im - reflection.im), below));
+    const above = transmission === undefined ? complex(1, 0) : complex(s.re - transmission.re, s.im - transmission.im);
+    s21 = multiply(s21, divide(above, below));
+  });
+  return { s11, s21, s12: s21, s22 };
+}
+
+/**
+ * Group delay of S21 at `s = loss + j*omega`, `-d phase/d omega = -sum Re 1/(s - z) + sum Re 1/(s - p)`.
+ *
+ * Without loss, zeros on the axis or in mirrored pairs add nothing and are left out, so that the delay stays finite at a
+ * transmission zero.
+ */
+export function delayOfPolynomials(polynomials: FilterPolynomials, omega: number, loss: number): number {
+  let delay = 0;
+  for (const pole of polynomials.poles) delay += realOfInverse(loss - pole.re, omega - pole.im);
+  if (loss === 0) return delay;
+  for (const zero of polynomials.transmissionZeros) delay -= realOfInverse(loss - zero.re, omega - zero.im);
+  return delay;
+}
+
+const realOfInverse = (re: number, im: number): number => re / (re * re + im * im);

@@ -1,0 +1,69 @@
+import type { CouplingMatrix } from '../forms/index.js';
+import { FilterFailure } from '../numerics/index.js';
+
+/** Working copy of a coupling matrix: rows of doubles that a routine may write. */
+export type Rows = Float64Array[];
+
+/**
+ * Checks a coupling matrix at the room's door and copies it into rows of doubles.
+ *
+ * @throws FilterFailure E_MATRIX_SHAPE, E_TYPE, E_NOT_FINITE, E_NOT_SYMMETRIC
+ */
+export function rowsOf(matrix: CouplingMatrix): Rows {
+  const size = matrix?.order + 2;
+  if (!Number.isInteger(matrix?.order) || matrix.order < 1) {
+    throw shapeFailure('matrix.order', matrix?.order, 'a whole number of resonators, 1 or more', 'give order and values of one matrix');
+  }
+  if (!Array.isArray(matrix.values) || matrix.values.length !== size) {
+    throw shapeFailure('matrix.values', matrix.values?.length, `${size} rows for order ${matrix.order}`, 'add or remove rows');
+  }
+  const rows = matrix.values.map((row, i) => rowOf(row, i, size));
+  rows.forEach((row, i) => {
+    for (let j = 0; j < i; j++) checkSymmetry(rows, row, i, j);
+  });
+  return rows;
+}
+
+function rowOf(row: readonly number[], i: number, size: number): Float64Array {
+  if (!Array.isArray(row) || row.length !== size) {
+    throw shapeFailure(`matrix.values[${i}]`, row?.length, `${size} entries in every row`, 'make the matrix square');
+  }
+  return Float64Array.from({ length: size }, (_, j) => {
+    const value: unknown = row[j];
+    const where = `matrix.values[${i}][${j}]`;
+    if (typeof value !== 'number') throw entryFailure('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
+    if (!Number.isFinite(value)) throw entryFailure('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
+    return value === 0 ? 0 : value;
+  });
+}
+
+function checkSymmetry(rows: Rows, row: Float64Array, i: number, j: number): void {
+  const mirror = rows[j]?.[i];
+  if (row[j] !== mirror) {
+    throw entryFailure('E_NOT_SYMMETRIC', `matrix.values[${i}][${j}]`, row[j], `${mirror}, the value of entry (${j},${i})`, 'make the two entries equal: the network is reciprocal');
+  }
+}
+
+function shapeFailure(argument: string, value: unknown, limit: string, hint: string): FilterFailure {
+  return entryFailure('E_MATRIX_SHAPE', argument, value, limit, hint);
+}
+
+/** One failure in the package's message form. */
+export function entryFailure(code: string, argument: string, value: unknown, limit: string, hint: string): FilterFailure {
+  const shown = String(value).slice(0, 40);
+  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, { argument, value, limit, hint });
+}
+
+/** Rows back to a frozen-by-type coupling matrix; the upper triangle rules, so that (i,j) and (j,i) never differ. */
+export function matrixFrom(rows: Rows, finiteZeros: number | undefined): CouplingMatrix {
+  const values = rows.map((_, i) => rows.map((_, j) => normalZero((i <= j ? rows[i]?.[j] : rows[j]?.[i]) as number)));
+  const order = rows.length - 2;
+  return finiteZeros === undefined ? { order, values } : { order, values, finiteZeros };
+}
+
+const normalZero = (value: number): number => (value === 0 ? 0 : value);
+
+/** Largest absolute row sum: a bound of the 2-norm that costs nothing. */
+export function normOf(rows: Rows): number {
+  return Math.max(...rows.map((row) => row.reduce((sum, value) => sum + Math.abs(value), 0)));
+}

@@ -1,0 +1,120 @@
+import type { CouplingMatrix, Rotation } from '../forms/index.js';
+import { annihilationAngle, clear } from './annihilate.js';
+import { matrixFrom, normOf, type Rows, rowsOf } from './matrix-shape.js';
+import { refine } from './refine.js';
+import { flip } from './rotate.js';
+
+/**
+ * One step of a fixed elimination: `element` = [kept, turned] is annihilated by turning `pivot`, which contains `turned`;
+ * `against` is the node whose coupling to `kept` survives, so that later corrections have something to divide by.
+ */
+export interface EliminationStep {
+  readonly element: readonly [number, number];
+  readonly pivot: readonly [number, number];
+  readonly against: number;
+}
+
+/** What distinguishes one fixed form from another. */
+export interface ReductionPlan {
+  readonly steps: readonly EliminationStep[];
+  /** Entries that vanish because the response has few finite zeros, outermost first. */
+  readonly structuralZeros: (finiteZeros: number) => readonly (readonly [number, number])[];
+  /** Couplings that the choice of resonator signs makes non-negative, each with the resonator whose sign decides it, in order. */
+  readonly positive: readonly { readonly entry: readonly [number, number]; readonly by: number }[];
+}
+
+/** A matrix in a new form, the rotations that led there, and the largest structural zero before it was cleared, relative to the norm. */
+export interface Reduced {
+  readonly matrix: CouplingMatrix;
+  readonly rotations: readonly Rotation[];
+  readonly leftover: number;
+}
+
+/**
+ * Runs an elimination in doubles, corrects its rounding with sums of doubled precision, clears the structural zeros and
+ * chooses the resonator signs.
+ */
+export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
+  const original = rowsOf(matrix);
+  const { rows, basis, rotations } = eliminate(original, plan.steps);
+  const exact = refine(original, basis, plan.steps) ?? rows;
+  const leftover = clearStructure(exact, plan, matrix.finiteZeros);
+  clearSynchronous(exact);
+  const flips = normalSigns(exact, plan);
+  if (flips.length > 0) rotations.push({ pivot: [1, matrix.order], angle: 0, flip: flips });
+  return { matrix: matrixFrom(exact, matrix.finiteZeros), rotations, leftover };
+}
+
+function eliminate(original: Rows, steps: readonly EliminationStep[]): { rows: Rows; basis: Rows; rotations: Rotation[] } {
+  const rows = original.map((row) => Float64Array.from(row));
+  const basis = original.map((_, i) => Float64Array.from({ length: original.length }, (__, j) => (i === j ? 1 : 0)));
+  const rotations = steps.map(({ element, pivot }) => {
+    const rotation = { pivot, angle: annihilationAngle(rows, pivot, element) };
+    clear(rows, rotation, element);
+    turnBasis(basis, pivot, rotation.angle);
+    return rotation;
+  });
+  return { rows, basis, rotations };
+}
+
+/** `Q <- R Q`: row i of the basis holds the new resonator i in terms of the old ones. */
+function turnBasis(basis: Rows, [i, j]: readonly [number, number], angle: number): void {
+  if (angle === 0) return;
+  const c = Math.cos(angle);
+  const s = Math.sin(angle);
+  const rowI = basis[i] as Float64Array;
+  const rowJ = basis[j] as Float64Array;
+  for (let k = 1; k < rowI.length - 1; k++) {
+    const a = rowI[k] as number;
+    const b = rowJ[k] as number;
+    rowI[k] = c * a - s * b;
+    rowJ[k] = s * a + c * b;
+  }
+}
+
+/** Room for rounding in an entry that theory makes zero: the matrix is known to N*eps of its norm, and a reduction may spread that once more. */
+const roundingRoom = (rows: Rows): number => 8 * rows.length * 2 ** -52 * normOf(rows);
+
+/**
+ * Writes exact zeros where the number of finite zeros demands them. Where that number is unknown, entries are cleared from
+ * the outermost inward as long as they are within rounding of zero.
+ */
+function clearStructure(rows: Rows, plan: ReductionPlan, finiteZeros: number | undefined): number {
+  const room = roundingRoom(rows);
+  const candidates = plan.structuralZeros(finiteZeros ?? 0);
+  let largest = 0;
+  for (const [i, j] of candidates) {
+    const value = Math.abs(rows[i]?.[j] ?? 0);
+    if (finiteZeros === undefined && value > room) break;
+    largest = Math.max(largest, value);
+    (rows[i] as Float64Array)[j] = (rows[j] as Float64Array)[i] = 0;
+  }
+  return largest / normOf(rows);
+}
+
+/**
+ * A response symmetric about the center needs no coupling between nodes of equal parity, diagonal included. When all such
+ * entries are within rounding of zero they are zero.
+ */
+function clearSynchronous(rows: Rows): void {
+  const room = roundingRoom(rows);
+  const equalParity = (i: number, j: number): boolean => (i + j) % 2 === 0;
+  const synchronous = rows.every((row, i) => row.every((value, j) => !equalParity(i, j) || Math.abs(value) <= room));
+  if (!synchronous) return;
+  rows.forEach((row, i) => {
+    for (let j = 0; j < row.length; j++) if (equalParity(i, j)) row[j] = 0;
+  });
+}
+
+/** Chooses resonator signs so that the plan's couplings are >= 0; gives the resonators that were flipped. */
+function normalSigns(rows: Rows, plan: ReductionPlan): readonly number[] {
+  const flipped: number[] = [];
+  for (const { entry, by } of plan.positive) {
+    if (((rows[entry[0]] as Float64Array)[entry[1]] as number) < 0) {
+      flip(rows, by);
+      flipped.push(by);
+    }
+  }
+  return flipped.sort((a, b) => a - b);
+}
+
