@@ -1,8 +1,30 @@
-/** Specification: text or a plain object to a checked, frozen specification.
- *  Takes    design-file text | plain object; single values from other rooms' doors
- *  Gives    checked values, remarks on what was adjusted
- *  Refuses  E_ORDER_RANGE, E_RL_RANGE, E_ZERO_*, E_TYPE, E_NOT_FINITE, E_MISSING
- *  Source   RFC 8259 (JSON), RFC 3629 (UTF-8) */
+/** Specification: text or a plain object to a checked, frozen specification; the doors for single values.
+ *  Takes    bytes | design-file text (JSON) | plain object; frequencies in hertz or as text with a unit
+ *  Gives    Specification: every default filled in, hertz, zeros in the normalized s-plane, remarks; JSON Schema; JSON with places
+ *  Refuses  E_ENCODING, E_FILE_SIZE, E_JSON_*, E_FORBIDDEN_KEY, E_NUMBER_OVERFLOW, E_MISSING, E_UNKNOWN_KEY, E_TYPE, E_NOT_FINITE,
+ *           E_CHOICE, E_QUANTITY, E_NAME, E_BAND, E_ORDER_RANGE, E_RL_RANGE, E_ZERO_*, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
+ *  Source   T. Bray (ed.), RFC 8259, 2017 (JSON); F. Yergeau, RFC 3629, 2003 (UTF-8) */
+export { checkSpecification } from './check.js';
+export type { Position } from './faults.js';
+export type { JsonText, JsonValue } from './json-reader.js';
+export { readJson } from './json-reader.js';
 export { checkOrder, checkReturnLoss } from './order-and-level.js';
+export { parseSpecification } from './parse.js';
+export { specificationJsonSchema } from './schema.js';
+export type {
+  FrequencyInput,
+  LevelInput,
+  MaskLineInput,
+  PassbandInput,
+  PortCouplings,
+  Specification,
+  SpecificationFamily,
+  SpecificationInput,
+  SweepInput,
+  SweepRange,
+  Topology,
+  ZeroInput,
+} from './specification.js';
+export { decodeUtf8 } from './utf8.js';
 export type { CheckedZeros } from './zeros.js';
 export { checkTransmissionZeros } from './zeros.js';

@@ -32,7 +32,7 @@ export function orderFault(value: unknown, path: Path = ['order']): Fault | unde
 
 function levelAdvice(value: number): string {
   if (value <= 0) return `drop the sign: did you mean ${value === 0 ? 20 : -value}?`;
-  if (value > MAX_RETURN_LOSS_DB) return 'lower it: abs(S11)^2 falls under the rounding unit near 157 dB';
+  if (value > MAX_RETURN_LOSS_DB) return 'lower it';
   return 'raise it: below this level the filter reflects nearly everything';
 }
 
@@ -81,4 +81,12 @@ export function checkReturnLoss(value: unknown): number {
   const fault = returnLossFault(value);
   if (fault !== undefined) throw failureOf(fault);
   return value as number;
+}
+
+/** A remark on a return loss that is hard to hold, or that looks like another quantity. */
+export function levelRemarks(returnLossDb: number | undefined): readonly string[] {
+  if (returnLossDb === undefined || (returnLossDb >= 6 && returnLossDb <= 40)) return [];
+  const hard = 'couplings would have to be held far better than is usual';
+  const odd = 'low for a filter: check that it is dB and not a ratio or a ripple';
+  return [`returnLossDb: ${returnLossDb} dB is ${returnLossDb > 40 ? `high, ${hard}` : odd}`];
 }

@@ -101,8 +101,16 @@ export function readZero(value: unknown, path: Path, name: string, band?: Band):
   return snapped(re, im, name);
 }
 
-function atHz(band: Band | undefined, omega: number): string {
-  return band === undefined ? '' : `, at ${hzFromOmega(band, omega)} Hz`;
+/** Hertz without the last digit or two, which conversion leaves noisy. */
+function hertzText(hertz: number): string {
+  return String(Number(hertz.toPrecision(14)));
+}
+
+function placeText(zero: Complex, band: Band | undefined): string {
+  if (band === undefined) return echoComplex(zero);
+  const { lowerHz, upperHz } = edgesOfBand(band);
+  const passband = `passband ${hertzText(lowerHz)} to ${hertzText(upperHz)} Hz`;
+  return `${echoComplex(zero)}, at ${hertzText(hzFromOmega(band, zero.im))} Hz (${passband})`;
 }
 
 /** The fault of a zero's place: too far out, inside the passband, or on its edge. */
@@ -112,7 +120,7 @@ export function placeFault(read: ZeroRead, value: unknown, path: Path, band?: Ba
   const base = { path, value };
   if (size > MAX_MAGNITUDE) return { ...infiniteFault(path, value), found: echoComplex(zero) };
   if (zero.re !== 0) return undefined;
-  const found = `${echoComplex(zero)}${atHz(band, zero.im)}`;
+  const found = placeText(zero, band);
   if (read.onEdge === true || size === 1) {
     const advice = 'move it outward: S21 cannot be 0 where the return loss is asked for';
     return { ...base, code: 'E_ZERO_ON_EDGE', found, allowed: 'abs(w) above 1', advice, limit: 1 };

@@ -40,6 +40,7 @@ function closeRemarks(zeros: readonly Complex[]): string[] {
   const remarks: string[] = [];
   zeros.forEach((zero, index) => {
     const size = magnitude(zero);
+    if (zeros.findIndex((each) => each.re === zero.re && each.im === zero.im) < index) return;
     for (let other = index + 1; other < zeros.length; other += 1) {
       const near = zeros[other] ?? zero;
       const distance = magnitude({ re: zero.re - near.re, im: zero.im - near.im });

@@ -1,0 +1,90 @@
+import type { Fault } from './faults.js';
+import type { PortCouplings, SpecificationFamily, Topology } from './specification.js';
+
+/** What decides how many zeros a coupling form can hold. */
+export interface FormRequest {
+  readonly order: number;
+  readonly zeros: number;
+  readonly family: SpecificationFamily;
+  readonly topology: Topology;
+  readonly portCouplings: PortCouplings;
+}
+
+/** How many zeros fewer than the order the ports leave room for. */
+const PORT_COST: Readonly<Record<PortCouplings, number>> = { any: 0, noDirect: 1, single: 2 };
+
+function familyFault({ zeros, family }: FormRequest): Fault | undefined {
+  if (family === 'generalizedChebyshev' || zeros === 0) return undefined;
+  return {
+    code: 'E_ZERO_COUNT',
+    path: ['transmissionZeros'],
+    found: `${zeros} zeros with family "${family}"`,
+    allowed: 'none: this family has all its zeros at infinity',
+    advice: 'remove the zeros, or set family to "generalizedChebyshev"',
+    value: zeros,
+    limit: 0,
+  };
+}
+
+function inlineFault({ order, zeros, topology }: FormRequest): Fault | undefined {
+  if (topology !== 'inline' || zeros === 0) return undefined;
+  return {
+    code: 'E_TOPOLOGY_ZEROS',
+    path: ['topology'],
+    found: `${zeros} zeros for an in-line chain, whose shortest path from source to load passes k = ${order} resonators`,
+    allowed: `at most N-k = ${order}-${order} = 0 zeros`,
+    advice: `remove ${zeros} zeros, or set topology to "folded"`,
+    value: zeros,
+    limit: 0,
+  };
+}
+
+function portAdvice(order: number, zeros: number, portCouplings: PortCouplings, limit: number): string {
+  const remove = `remove ${zeros - limit}`;
+  const wider = portCouplings === 'single' && zeros <= order - 1 ? '"noDirect" or "any"' : '"any"';
+  const why =
+    zeros === order ? ' to turn the direct source-load coupling on' : ' to let the ports touch more resonators';
+  return `set portCouplings to ${wider}${why}, or ${remove}`;
+}
+
+function portFault({ order, zeros, portCouplings }: FormRequest): Fault | undefined {
+  const limit = Math.max(0, order - PORT_COST[portCouplings]);
+  if (zeros <= limit) return undefined;
+  const kind =
+    portCouplings === 'single' ? 'source and load touching one resonator each' : 'no direct source-load coupling';
+  return {
+    code: 'E_ZERO_TOPOLOGY',
+    path: ['portCouplings'],
+    found: `${zeros} zeros for order ${order} with ${kind}`,
+    allowed: `at most N-${PORT_COST[portCouplings]} = ${limit}`,
+    advice: portAdvice(order, zeros, portCouplings, limit),
+    value: zeros,
+    limit,
+  };
+}
+
+/** A form whose ports touch several resonators by definition contradicts `single`. */
+function singleFault({ order, zeros, topology, portCouplings }: FormRequest): Fault | undefined {
+  if (portCouplings !== 'single' || order === 1) return undefined;
+  const spread = topology === 'transversal' || (topology === 'arrow' && zeros > 0);
+  if (!spread) return undefined;
+  const touched =
+    topology === 'transversal'
+      ? 'both ports touch every resonator'
+      : 'the load touches one resonator more for each zero';
+  return {
+    code: 'E_ZERO_TOPOLOGY',
+    path: ['portCouplings'],
+    found: `"single" with topology "${topology}", where ${touched}`,
+    allowed: '"any" or "noDirect" with this topology',
+    advice: 'turn on more port couplings, or set topology to "folded"',
+    value: portCouplings,
+  };
+}
+
+/** What the family, the form of the matrix and its ports refuse about the number of zeros; the first reason only. */
+export function formFaults(request: FormRequest): readonly Fault[] {
+  if (request.zeros > request.order) return [];
+  const fault = familyFault(request) ?? inlineFault(request) ?? portFault(request) ?? singleFault(request);
+  return fault === undefined ? [] : [fault];
+}
