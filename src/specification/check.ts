@@ -6,15 +6,15 @@ import { kindFault, refuseAny } from './faults.js';
 import { formFaults } from './form-rules.js';
 import { nameFault, notesFault } from './labels.js';
 import { lossRemarks, readSweep, readUnloadedQ } from './losses-and-sweep.js';
-import { readMask } from './mask-lines.js';
+import { readMask } from './mask/lines.js';
 import { levelRemarks, orderFault, returnLossFault } from './order-and-level.js';
 import { plainCopy } from './plain-copy.js';
 import type { Specification, SpecificationInput } from './specification.js';
 import type { Structured } from './structure.js';
 import { faultyElements, readStructure } from './structure.js';
 import { VOCABULARY } from './vocabulary.js';
-import type { ReadZeros } from './zeros.js';
-import { readZeros } from './zeros.js';
+import type { ReadZeros } from './zeros/zeros.js';
+import { readZeros } from './zeros/zeros.js';
 
 type Parts = Partial<SpecificationInput>;
 

@@ -70,3 +70,8 @@ export function echoComplex(value: { readonly re: number; readonly im: number })
   if (value.re === 0) return `${value.im}j`;
   return value.im < 0 ? `${value.re}-${-value.im}j` : `${value.re}+${value.im}j`;
 }
+
+/** Hertz without the last digit or two, which conversion leaves noisy. */
+export function hertzText(hertz: number): string {
+  return String(Number(hertz.toPrecision(14)));
+}

@@ -10,6 +10,10 @@ export interface FormRequest {
   readonly portCouplings: PortCouplings;
 }
 
+function zerosText(count: number): string {
+  return `${count} ${count === 1 ? 'zero' : 'zeros'}`;
+}
+
 /** How many zeros fewer than the order the ports leave room for. */
 const PORT_COST: Readonly<Record<PortCouplings, number>> = { any: 0, noDirect: 1, single: 2 };
 
@@ -18,7 +22,7 @@ function familyFault({ zeros, family }: FormRequest): Fault | undefined {
   return {
     code: 'E_ZERO_COUNT',
     path: ['transmissionZeros'],
-    found: `${zeros} zeros with family "${family}"`,
+    found: `${zerosText(zeros)} with family "${family}"`,
     allowed: 'none: this family has all its zeros at infinity',
     advice: 'remove the zeros, or set family to "generalizedChebyshev"',
     value: zeros,
@@ -31,9 +35,9 @@ function inlineFault({ order, zeros, topology }: FormRequest): Fault | undefined
   return {
     code: 'E_TOPOLOGY_ZEROS',
     path: ['topology'],
-    found: `${zeros} zeros for an in-line chain, whose shortest path from source to load passes k = ${order} resonators`,
+    found: `${zerosText(zeros)} for an in-line chain, whose shortest path from source to load passes k = ${order} resonators`,
     allowed: `at most N-k = ${order}-${order} = 0 zeros`,
-    advice: `remove ${zeros} zeros, or set topology to "folded"`,
+    advice: `remove ${zerosText(zeros)}, or set topology to "folded"`,
     value: zeros,
     limit: 0,
   };
@@ -55,7 +59,7 @@ function portFault({ order, zeros, portCouplings }: FormRequest): Fault | undefi
   return {
     code: 'E_ZERO_TOPOLOGY',
     path: ['portCouplings'],
-    found: `${zeros} zeros for order ${order} with ${kind}`,
+    found: `${zerosText(zeros)} for order ${order} with ${kind}`,
     allowed: `at most N-${PORT_COST[portCouplings]} = ${limit}`,
     advice: portAdvice(order, zeros, portCouplings, limit),
     value: zeros,

@@ -5,9 +5,11 @@
  *           E_CHOICE, E_QUANTITY, E_NAME, E_BAND, E_ORDER_RANGE, E_RL_RANGE, E_ZERO_*, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
  *  Source   T. Bray (ed.), RFC 8259, 2017 (JSON); F. Yergeau, RFC 3629, 2003 (UTF-8) */
 export { checkSpecification } from './check.js';
-export type { Position } from './faults.js';
-export type { JsonText, JsonValue } from './json-reader.js';
-export { readJson } from './json-reader.js';
+export { checkBand, checkMask, checkUnloadedQ } from './doors.js';
+export type { Path, Position } from './faults.js';
+export type { JsonText, JsonValue } from './json/reader.js';
+export { readJson } from './json/reader.js';
+export { decodeUtf8 } from './json/utf8.js';
 export { checkOrder, checkReturnLoss } from './order-and-level.js';
 export { parseSpecification } from './parse.js';
 export { specificationJsonSchema } from './schema.js';
@@ -25,6 +27,5 @@ export type {
   Topology,
   ZeroInput,
 } from './specification.js';
-export { decodeUtf8 } from './utf8.js';
-export type { CheckedZeros } from './zeros.js';
-export { checkTransmissionZeros } from './zeros.js';
+export type { CheckedZeros } from './zeros/zeros.js';
+export { checkTransmissionZeros } from './zeros/zeros.js';

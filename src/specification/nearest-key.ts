@@ -24,7 +24,7 @@ export function nearestKey(wrong: string, known: readonly string[]): string | un
   if (wrong.length > LENGTH_LIMIT || wrong === '') return undefined;
   const word = wrong.toLowerCase();
   let best: string | undefined;
-  let least = Math.max(2, Math.floor(word.length / 3)) + 1;
+  let least = Math.min(Math.max(2, Math.floor(word.length / 3)) + 1, word.length);
   for (const key of known) {
     const whole = key.toLowerCase();
     const bare = whole.replace(/(hz|db|seconds)$/, '');

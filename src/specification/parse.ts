@@ -1,5 +1,5 @@
 import { checkCopied } from './check.js';
-import { readJson } from './json-reader.js';
+import { readJson } from './json/reader.js';
 import { plainCopy } from './plain-copy.js';
 import type { Specification } from './specification.js';
 

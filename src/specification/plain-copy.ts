@@ -3,7 +3,7 @@ import { MAX_ORDER } from './order-and-level.js';
 
 const DEPTH_LIMIT = 16;
 const LIST_LIMIT = 10_000;
-const NODE_LIMIT = 100_000;
+const NODE_LIMIT = 50_000;
 
 /** Keys that could reach an object's prototype. */
 export const FORBIDDEN_KEYS: readonly string[] = ['__proto__', 'constructor', 'prototype'];
@@ -42,7 +42,9 @@ function copyList(list: readonly unknown[], path: Path, state: Copying): unknown
     return undefined;
   }
   const out: unknown[] = [];
-  for (let index = 0; index < length; index += 1) out.push(copyNode(list[index], [...path, index], state));
+  for (let index = 0; index < length; index += 1) {
+    out.push(copyField(() => list[index], [...path, index], state));
+  }
   return out;
 }
 
@@ -66,7 +68,7 @@ function copyObject(value: object, path: Path, state: Copying): unknown {
   for (const key of Object.keys(value)) {
     const inner = [...path, key];
     if (FORBIDDEN_KEYS.includes(key)) state.faults.push(forbiddenKeyFault(inner));
-    else out[key] = copyNode(Reflect.get(value, key), inner, state);
+    else out[key] = copyField(() => Reflect.get(value, key), inner, state);
   }
   return out;
 }
@@ -76,15 +78,21 @@ function copyNode(value: unknown, path: Path, state: Copying): unknown {
   state.nodes += 1;
   if (path.length > DEPTH_LIMIT || state.nodes > NODE_LIMIT) {
     const limit = `at most ${DEPTH_LIMIT} levels and ${NODE_LIMIT} objects`;
-    if (!state.full) state.faults.push(typeFault([], 'more than that', limit, 'look for an object inside itself'));
+    const advice = 'look for an object inside itself';
+    if (!state.full) state.faults.push(typeFault([], 'too many levels or objects', limit, advice));
     state.full = true;
     return undefined;
   }
+  const isBoxed = value instanceof Number || value instanceof String || value instanceof Boolean;
+  return isBoxed ? value : copyObject(value, path, state);
+}
+
+/** Whatever reading or inspecting a field throws becomes a fault at its place. */
+function copyField(read: () => unknown, path: Path, state: Copying): unknown {
   try {
-    if (value instanceof Number || value instanceof String || value instanceof Boolean) return value;
-    return copyObject(value, path, state);
+    return copyNode(read(), path, state);
   } catch {
-    state.faults.push(typeFault(path, 'an object that cannot be read', 'plain data', 'pass plain data'));
+    state.faults.push(typeFault(path, 'a value that cannot be read', 'plain data', 'pass plain data'));
     return undefined;
   }
 }
@@ -95,5 +103,5 @@ function copyNode(value: unknown, path: Path, state: Copying): unknown {
  */
 export function plainCopy(value: unknown, path: Path): { readonly value: unknown; readonly faults: readonly Fault[] } {
   const state: Copying = { faults: [], nodes: 0, full: false };
-  return { value: copyNode(value, path, state), faults: state.faults };
+  return { value: copyField(() => value, path, state), faults: state.faults };
 }

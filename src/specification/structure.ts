@@ -40,6 +40,7 @@ function allowedAt(path: Path): string {
 }
 
 function adviceAt(path: Path, value: unknown): string {
+  if (path.length === 0) return 'give an object';
   if (value === undefined) return typeof path.at(-1) === 'number' ? 'fill the hole' : `add "${lastKey(path)}"`;
   return typeof value === 'number' ? 'write a finite number, or leave the key out' : 'write one of these';
 }
@@ -60,7 +61,7 @@ function unknownKeyFault(path: Path, key: string): Fault {
     code: 'E_UNKNOWN_KEY',
     path: [...path, key],
     found: 'a key that is not known here',
-    allowed: known.join(', '),
+    allowed: nearest === undefined ? known.join(', ') : `the keys of ${place === '' ? 'a specification' : place}`,
     advice,
     value: key,
     limit: nearest ?? known,

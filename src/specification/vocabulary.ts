@@ -1,6 +1,6 @@
 import { MAX_ORDER } from './order-and-level.js';
 import { FREQUENCY_ALLOWED } from './quantity.js';
-import { ZERO_ALLOWED } from './zero-values.js';
+import { ZERO_ALLOWED } from './zeros/values.js';
 
 /** What a key means (for the JSON Schema) and what it may hold (for messages). */
 export interface Term {

@@ -1,11 +1,11 @@
-import type { Band, Level, MaskLine, Span } from '../forms/index.js';
-import { edgesOfBand } from '../forms/index.js';
-import { readFrequency } from './band.js';
-import { definedOnly } from './defined.js';
-import type { Fault, Path } from './faults.js';
-import type { LevelKey, PlacedLine } from './mask-contradictions.js';
-import { contradictionFaults, LEVELS } from './mask-contradictions.js';
-import type { MaskLineInput } from './specification.js';
+import type { Band, Level, MaskLine, Span } from '../../forms/index.js';
+import { edgesOfBand } from '../../forms/index.js';
+import { readFrequency } from '../band.js';
+import { definedOnly } from '../defined.js';
+import type { Fault, Path } from '../faults.js';
+import type { MaskLineInput } from '../specification.js';
+import type { LevelKey, PlacedLine } from './contradictions.js';
+import { contradictionFaults, LEVELS } from './contradictions.js';
 
 const MOST_DB = 1000;
 const MOST_LINES = 1000;

@@ -1,5 +1,6 @@
-import type { Level, Span } from '../forms/index.js';
-import type { Fault } from './faults.js';
+import type { Level, Span } from '../../forms/index.js';
+import { hertzText } from '../echo.js';
+import type { Fault } from '../faults.js';
 
 /** Keys that hold the level of a mask line. */
 export const LEVELS = [
@@ -19,6 +20,9 @@ export interface PlacedLine {
   readonly key: LevelKey;
   readonly level: Level;
 }
+
+/** A line may end at a band edge, which comes from the center and width with this relative rounding. */
+const EDGE_ROUNDING = 8 * Number.EPSILON;
 
 interface Edges {
   readonly lowerHz: number;
@@ -54,12 +58,13 @@ function spanText(span: Span): string {
 function inPassband(line: PlacedLine, edges: Edges): Fault | undefined {
   const [from, to] = endsOf(line.span);
   if (line.key !== 'rejectionDb' || most(line.level) === 0) return undefined;
-  if (!(from < edges.upperHz && to > edges.lowerHz)) return undefined;
+  const { lowerHz, upperHz } = edges;
+  if (!(from < upperHz * (1 - EDGE_ROUNDING) && to > lowerHz * (1 + EDGE_ROUNDING))) return undefined;
   return {
     code: 'E_MASK',
     path: ['mask', line.index],
     found: `rejection ${spanText(line.span)}, within the passband`,
-    allowed: `rejection below ${edges.lowerHz} Hz or above ${edges.upperHz} Hz`,
+    allowed: `rejection below ${hertzText(lowerHz)} Hz or above ${hertzText(upperHz)} Hz`,
     advice: `end mask[${line.index}] outside the passband`,
     value: line.level,
   };

@@ -1,7 +1,7 @@
-import type { Complex } from '../forms/index.js';
-import { echoComplex } from './echo.js';
-import type { Fault, Path } from './faults.js';
-import { isRounding, magnitude, ULPS } from './zero-values.js';
+import type { Complex } from '../../forms/index.js';
+import { echoComplex } from '../echo.js';
+import type { Fault, Path } from '../faults.js';
+import { isRounding, magnitude, ULPS } from './values.js';
 
 /** A partner this close, relative to its size, was meant as the partner. */
 const NEAR_MISS = 1e-3;

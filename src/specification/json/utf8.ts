@@ -1,5 +1,5 @@
-import { FilterFailure } from '../numerics/index.js';
-import { failureOf, kindFault } from './faults.js';
+import { FilterFailure } from '../../numerics/index.js';
+import { failureOf, kindFault } from '../faults.js';
 
 const CHUNK = 4096;
 

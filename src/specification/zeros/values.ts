@@ -1,9 +1,9 @@
-import type { Band, Complex } from '../forms/index.js';
-import { edgesOfBand, hzFromOmega, omegaFromHz } from '../forms/index.js';
-import { echo, echoComplex } from './echo.js';
-import type { Fault, Path } from './faults.js';
-import { isQuotedNumber, kindFault } from './faults.js';
-import { frequencyFromText } from './quantity.js';
+import type { Band, Complex } from '../../forms/index.js';
+import { edgesOfBand, hzFromOmega, omegaFromHz } from '../../forms/index.js';
+import { echo, echoComplex, hertzText } from '../echo.js';
+import type { Fault, Path } from '../faults.js';
+import { isQuotedNumber, kindFault } from '../faults.js';
+import { frequencyFromText } from '../quantity.js';
 
 /** Largest magnitude of a finite zero; farther out it cannot be told from one at infinity. */
 const MAX_MAGNITUDE = 1e4;
@@ -99,11 +99,6 @@ export function readZero(value: unknown, path: Path, name: string, band?: Band):
   if (typeof re !== 'number') return re;
   if (typeof im !== 'number') return im;
   return snapped(re, im, name);
-}
-
-/** Hertz without the last digit or two, which conversion leaves noisy. */
-function hertzText(hertz: number): string {
-  return String(Number(hertz.toPrecision(14)));
 }
 
 function placeText(zero: Complex, band: Band | undefined): string {

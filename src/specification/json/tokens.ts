@@ -1,6 +1,6 @@
-import { escapeText } from './echo.js';
-import type { Path } from './faults.js';
-import { jsonFailure, LENGTH_LIMIT, sizeFailure, syntaxFailure } from './json-faults.js';
+import { escapeText } from '../echo.js';
+import type { Path } from '../faults.js';
+import { jsonFailure, LENGTH_LIMIT, sizeFailure, syntaxFailure } from './faults.js';
 
 /** Where reading stands. `path` is the way to the value being read. */
 export interface Cursor {
@@ -109,6 +109,7 @@ function readEscape(cursor: Cursor): string {
 }
 
 function refuseStray(cursor: Cursor, start: number, code: number): never {
+  if (cursor.at > LENGTH_LIMIT) throw sizeFailure(cursor.text, cursor.at);
   if (Number.isNaN(code)) {
     const found = 'a text without its closing quote';
     const allowed = 'texts in double quotes';
@@ -139,11 +140,10 @@ export function readString(cursor: Cursor): string {
   for (;;) {
     const code = cursor.text.charCodeAt(cursor.at);
     if (code === QUOTE) break;
-    if (code === BACKSLASH) {
-      if (cursor.at > LENGTH_LIMIT) throw sizeFailure(cursor.text, cursor.at);
+    if (code === BACKSLASH && cursor.at <= LENGTH_LIMIT) {
       pieces.push(cursor.text.slice(from, cursor.at), readEscape(cursor));
       from = cursor.at;
-    } else if (code >= 32) cursor.at += 1;
+    } else if (code >= 32 && cursor.at <= LENGTH_LIMIT) cursor.at += 1;
     else refuseStray(cursor, start, code);
   }
   pieces.push(cursor.text.slice(from, cursor.at));

@@ -1,14 +1,14 @@
-import type { FilterFailure } from '../numerics/index.js';
-import { escapeText } from './echo.js';
-import type { Path, Position } from './faults.js';
-import { failureOf } from './faults.js';
+import type { FilterFailure } from '../../numerics/index.js';
+import { escapeText } from '../echo.js';
+import type { Path, Position } from '../faults.js';
+import { failureOf } from '../faults.js';
 
 const TOKEN_LIMIT = 40;
 
 /** Longest text read, in UTF-16 code units. */
 export const LENGTH_LIMIT = 1_048_576;
 /** Most values read from one text. */
-export const VALUE_LIMIT = 100_000;
+export const VALUE_LIMIT = 50_000;
 
 const DELIMITERS = ' \t\r\n,:{}[]"';
 

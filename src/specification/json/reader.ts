@@ -1,5 +1,6 @@
-import type { Path, Position } from './faults.js';
-import { failureOf, kindFault } from './faults.js';
+import type { Path, Position } from '../faults.js';
+import { failureOf, kindFault } from '../faults.js';
+import { FORBIDDEN_KEYS, forbiddenKeyFault } from '../plain-copy.js';
 import {
   jsonFailure,
   LENGTH_LIMIT,
@@ -9,10 +10,9 @@ import {
   sizeFailure,
   syntaxFailure,
   VALUE_LIMIT,
-} from './json-faults.js';
-import type { Cursor } from './json-tokens.js';
-import { readNumber, readString, skipSpace } from './json-tokens.js';
-import { FORBIDDEN_KEYS, forbiddenKeyFault } from './plain-copy.js';
+} from './faults.js';
+import type { Cursor } from './tokens.js';
+import { readNumber, readString, skipSpace } from './tokens.js';
 
 /** What a JSON text holds; objects have no prototype. */
 export type JsonValue = null | boolean | number | string | readonly JsonValue[] | { readonly [key: string]: JsonValue };
@@ -31,8 +31,8 @@ const WORDS: readonly (readonly [string, boolean | null])[] = [
   ['null', null],
 ];
 
-/** Offsets of an object's or a list's members: of the key (of the value in a list) and of the value. */
-type Places = Map<string | number, readonly [number, number]>;
+/** Offsets of an object's keys, or of a list's elements. */
+type Places = Map<string, number> | number[];
 
 interface Reading extends Cursor {
   values: number;
@@ -46,14 +46,14 @@ function refuseDepth(reading: Reading): never {
   throw jsonFailure(reading.text, reading.at, fault);
 }
 
-function checkKey(reading: Reading, key: string, at: number, places: Places): void {
+function checkKey(reading: Reading, key: string, at: number, places: Map<string, number>): void {
   const path = [...reading.path, key];
   if (FORBIDDEN_KEYS.includes(key)) {
     throw failureOf(forbiddenKeyFault(path), () => positionAt(reading.text, at));
   }
   const earlier = places.get(key);
   if (earlier === undefined) return;
-  const first = positionAt(reading.text, earlier[0]);
+  const first = positionAt(reading.text, earlier);
   const found = `this key again, after (${first.line}:${first.column})`;
   const fault = { code: 'E_JSON_DUPLICATE', path, found, allowed: 'each key once', advice: 'remove one of the two' };
   throw jsonFailure(reading.text, at, fault);
@@ -77,26 +77,31 @@ function isEmpty(reading: Reading, close: string): boolean {
   return true;
 }
 
-function readMember(reading: Reading, depth: number, into: Record<string, JsonValue>, places: Places): void {
+function readMember(
+  reading: Reading,
+  depth: number,
+  into: Record<string, JsonValue>,
+  places: Map<string, number>,
+): void {
   skipSpace(reading);
   const keyAt = reading.at;
   if (reading.text.charAt(keyAt) !== '"')
     throw syntaxFailure(reading.text, keyAt, reading.path, 'a key in double quotes');
   const key = readString(reading);
   checkKey(reading, key, keyAt, places);
+  places.set(key, keyAt);
   reading.path.push(key);
   skipSpace(reading);
   if (reading.text.charAt(reading.at) !== ':') throw syntaxFailure(reading.text, reading.at, reading.path, '":"');
   reading.at += 1;
   skipSpace(reading);
-  places.set(key, [keyAt, reading.at]);
   into[key] = readValue(reading, depth);
   reading.path.pop();
 }
 
 function readObject(reading: Reading, depth: number): JsonValue {
   const value: Record<string, JsonValue> = Object.create(null);
-  const places: Places = new Map();
+  const places = new Map<string, number>();
   reading.places.set(value, places);
   if (isEmpty(reading, '}')) return value;
   do readMember(reading, depth, value, places);
@@ -106,12 +111,12 @@ function readObject(reading: Reading, depth: number): JsonValue {
 
 function readList(reading: Reading, depth: number): JsonValue {
   const value: JsonValue[] = [];
-  const places: Places = new Map();
+  const places: number[] = [];
   reading.places.set(value, places);
   if (isEmpty(reading, ']')) return value;
   do {
     skipSpace(reading);
-    places.set(value.length, [reading.at, reading.at]);
+    places.push(reading.at);
     reading.path.push(value.length);
     value.push(readValue(reading, depth));
     reading.path.pop();
@@ -141,13 +146,25 @@ function readValue(reading: Reading, depth: number): JsonValue {
   return mark === '-' || (mark >= '0' && mark <= '9') ? readNumber(reading) : readWord(reading);
 }
 
+/** Offset of the value behind the key at `keyAt`, found by reading the key again. */
+function behindKey(text: string, keyAt: number): number {
+  const cursor: Cursor = { text, path: [], at: keyAt };
+  readString(cursor);
+  skipSpace(cursor);
+  cursor.at += 1;
+  skipSpace(cursor);
+  return cursor.at;
+}
+
 function offsetOf(reading: Reading, root: JsonValue, start: number, path: Path, onKey: boolean): number {
   let value: JsonValue = root;
   let offset = start;
   for (const [index, step] of path.entries()) {
-    const place = typeof value === 'object' && value !== null ? reading.places.get(value)?.get(step) : undefined;
+    const places = typeof value === 'object' && value !== null ? reading.places.get(value) : undefined;
+    const place = Array.isArray(places) ? places[Number(step)] : places?.get(String(step));
     if (place === undefined) return offset;
-    offset = onKey && index === path.length - 1 ? place[0] : place[1];
+    const asKey = onKey && index === path.length - 1;
+    offset = asKey || Array.isArray(places) ? place : behindKey(reading.text, place);
     value = Reflect.get(Object(value), step) as JsonValue;
   }
   return offset;

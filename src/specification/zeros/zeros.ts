@@ -1,10 +1,10 @@
-import type { Band, Complex } from '../forms/index.js';
-import type { Fault, Path } from './faults.js';
-import { kindFault, refuseAny } from './faults.js';
-import { checkOrder, MAX_ORDER } from './order-and-level.js';
-import { plainCopy } from './plain-copy.js';
-import { pairZeros } from './zero-pairs.js';
-import { magnitude, placeFault, readZero } from './zero-values.js';
+import type { Band, Complex } from '../../forms/index.js';
+import type { Fault, Path } from '../faults.js';
+import { kindFault, refuseAny } from '../faults.js';
+import { checkOrder, MAX_ORDER } from '../order-and-level.js';
+import { plainCopy } from '../plain-copy.js';
+import { pairZeros } from './pairs.js';
+import { magnitude, placeFault, readZero } from './values.js';
 
 const NAME = 'transmissionZeros';
 const PATH: Path = [NAME];
