@@ -79,7 +79,9 @@ function traces(sums: PortSums, sourceSign: 1 | -1): Traces {
   const loaded = { re: g[0].re * a + 2 * g[1].re * b + g[2].re * c, im: g[0].im * a + 2 * g[1].im * b + g[2].im * c };
   const crossed = { re: g[0].re * u + 2 * g[1].re * v + g[2].re * w, im: g[0].im * u + 2 * g[1].im * v + g[2].im * w };
   const coupled = squareTrace(g, sums.products);
-  const largest = Math.max(...g.map((x) => Math.hypot(x.re, x.im)));
+  // The entries of G carry the relative error of det, which cancels where M_SL comes near 1.
+  const cancelled = (Math.abs(source * load) + 1 + direct * direct) / Math.sqrt(norm);
+  const largest = cancelled * Math.max(...g.map((x) => Math.hypot(x.re, x.im)));
   return {
     first: { re: sums.trace - loaded.re, im: -loaded.im },
     second: { re: sums.squares - 2 * crossed.re + coupled.re, im: -2 * crossed.im + coupled.im },

@@ -1,3 +1,4 @@
+import { Complex as ComplexNumber } from 'complex.js';
 import type { Complex } from './complex-type.js';
 
 export const complex = (re: number, im: number): Complex => ({ re, im });
@@ -29,13 +30,10 @@ export function divide(a: Complex, b: Complex): Complex {
   return { re: (a.re * ratio + a.im) / denominator, im: (a.im * ratio - a.re) / denominator };
 }
 
-/** Principal square root, real part >= 0, without cancellation in either part. */
+/** Principal square root, real part >= 0. */
 export function squareRoot(a: Complex): Complex {
-  if (a.re === 0 && a.im === 0) return { re: 0, im: 0 };
-  const larger = Math.sqrt((Math.abs(a.re) + Math.hypot(a.re, a.im)) / 2);
-  const smaller = a.im / (2 * larger);
-  if (a.re >= 0) return { re: larger, im: smaller };
-  return { re: Math.abs(smaller), im: a.im < 0 ? -larger : larger };
+  const { re, im } = new ComplexNumber(a.re, a.im).sqrt();
+  return { re, im };
 }
 
 /** `j^exponent` for any whole exponent, exact. */

@@ -37,3 +37,36 @@ export function doubledDot(a: Float64Array, bHi: Float64Array, bLo?: Float64Arra
   const value = hi + lo;
   return { hi: value, lo: hi - value + lo };
 }
+
+const ZERO: Doubled = { hi: 0, lo: 0 };
+
+/** Sum of two pairs, renormalized. */
+export function doubledAdd(a: Doubled, b: Doubled): Doubled {
+  const sum = a.hi + b.hi;
+  const part = sum - a.hi;
+  const error = a.hi - (sum - part) + (b.hi - part) + a.lo + b.lo;
+  const hi = sum + error;
+  return { hi, lo: sum - hi + error };
+}
+
+/** A pair times a double. */
+export function doubledTimes(a: Doubled, factor: number): Doubled {
+  return doubledDot(Float64Array.of(factor), Float64Array.of(a.hi), Float64Array.of(a.lo));
+}
+
+/** A complex number whose parts are pairs. */
+export interface DoubledComplex {
+  readonly re: Doubled;
+  readonly im: Doubled;
+}
+
+/** `a - b*root` for pairs a, b and a root in doubles: one step of multiplying a polynomial by (s - root). */
+export function doubledMinusProduct(a: DoubledComplex, b: DoubledComplex, root: { readonly re: number; readonly im: number }): DoubledComplex {
+  return {
+    re: doubledAdd(a.re, doubledAdd(doubledTimes(b.re, -root.re), doubledTimes(b.im, root.im))),
+    im: doubledAdd(a.im, doubledAdd(doubledTimes(b.re, -root.im), doubledTimes(b.im, -root.re))),
+  };
+}
+
+export const DOUBLED_ZERO: DoubledComplex = { re: ZERO, im: ZERO };
+export const DOUBLED_ONE: DoubledComplex = { re: { hi: 1, lo: 0 }, im: ZERO };

@@ -38,32 +38,32 @@ function readReturnLoss(parts: Parts, isPresent: boolean, faults: Fault[]): void
 }
 
 /** Zeros as frequencies wait for a sound passband; those are skipped without one. */
-function readPartZeros(parts: Parts, band: Band | undefined, structural: readonly Fault[]): ReadZeros {
+function readPartZeros(parts: Parts, band: Band | undefined, unsound: readonly Fault[]): ReadZeros {
   const list = parts.transmissionZeros ?? [];
-  const skip = new Set(faultyElements('transmissionZeros', structural));
+  const skip = new Set(faultyElements('transmissionZeros', unsound));
   for (const [index, zero] of list.entries()) if (band === undefined && typeof zero === 'string') skip.add(index);
   const order = orderFault(parts.order) === undefined ? parts.order : undefined;
   return readZeros(list, order, band, skip);
 }
 
 /** The rules on one part each, then those between parts. */
-function readParts({ parts, faults: structural }: Structured, faults: Fault[]): Specification {
+function readParts({ parts, unsound }: Structured, faults: Fault[]): Specification {
   const { name, notes, order = 0, family = 'generalizedChebyshev', returnLossDb, unloadedQ } = parts;
   const { topology = 'folded', portCouplings = 'any' } = parts;
-  const isBad = (key: string): boolean => structural.some(({ path }) => path.length === 0 || path[0] === key);
+  const isBad = (key: string): boolean => unsound.some(({ path }) => path.length === 0 || path[0] === key);
   if (name !== undefined) push(faults, nameFault(name));
   if (notes !== undefined) push(faults, notesFault(notes));
   const read = parts.passband === undefined ? undefined : readBand(parts.passband, faults);
   if (parts.order !== undefined) push(faults, orderFault(order));
   if (!isBad('family')) readReturnLoss(parts, returnLossDb !== undefined || isBad('returnLossDb'), faults);
-  const zeros = readPartZeros(parts, read?.band, structural);
+  const zeros = readPartZeros(parts, read?.band, unsound);
   faults.push(...zeros.faults);
   if (order > 0 && !['family', 'topology', 'portCouplings', 'transmissionZeros'].some(isBad)) {
     const count = parts.transmissionZeros?.length ?? 0;
     faults.push(...formFaults({ order, zeros: count, family, topology, portCouplings }));
   }
   if (unloadedQ !== undefined) readUnloadedQ(unloadedQ, parts.order, faults);
-  const mask = readMask(parts.mask ?? [], read?.band, faultyElements('mask', structural), faults);
+  const mask = readMask(parts.mask ?? [], read?.band, faultyElements('mask', unsound), faults);
   const sweep = parts.sweep === undefined ? undefined : readSweep(parts.sweep, faults);
   const band = read?.band ?? { centerHz: Number.NaN, bandwidthHz: Number.NaN };
   const remarks = [

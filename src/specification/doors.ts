@@ -8,6 +8,7 @@ import { readMask } from './mask/lines.js';
 import { orderFault } from './order-and-level.js';
 import { plainCopy } from './plain-copy.js';
 import type { SpecificationInput } from './specification.js';
+import type { Structured } from './structure.js';
 import { faultyElements, readStructure } from './structure.js';
 import { VOCABULARY } from './vocabulary.js';
 
@@ -15,15 +16,13 @@ import { VOCABULARY } from './vocabulary.js';
 const FRAME = { passband: { lowerHz: 1, upperHz: 2 }, order: 1 };
 
 /** One part of a specification through the structure checks that the whole goes through. */
-function readPart(key: keyof SpecificationInput, value: unknown, faults: Fault[]): Partial<SpecificationInput> {
+function readPart(key: keyof SpecificationInput, value: unknown): Structured {
   const copy = plainCopy(value, [key]);
   if (copy.value === undefined && copy.faults.length === 0) {
-    faults.push(kindFault([key], undefined, VOCABULARY[key]?.allowed ?? '', `give "${key}"`));
-    return {};
+    const missing = [kindFault([key], undefined, VOCABULARY[key]?.allowed ?? '', `give "${key}"`)];
+    return { parts: {}, faults: missing, unsound: missing };
   }
-  const { parts, faults: found } = readStructure({ ...FRAME, [key]: copy.value }, copy.faults);
-  faults.push(...found);
-  return parts;
+  return readStructure({ ...FRAME, [key]: copy.value }, copy.faults);
 }
 
 /**
@@ -36,9 +35,9 @@ function readPart(key: keyof SpecificationInput, value: unknown, faults: Fault[]
  * checkBand({ centerHz: '10 GHz', bandwidthHz: 40e6 }); // { centerHz: 10000000000, bandwidthHz: 40000000 }
  */
 export function checkBand(passband: unknown): Band {
-  const faults: Fault[] = [];
-  const { passband: part } = readPart('passband', passband, faults);
-  const read = part === undefined ? undefined : readBand(part, faults);
+  const { parts, faults: structural } = readPart('passband', passband);
+  const faults = [...structural];
+  const read = parts.passband === undefined ? undefined : readBand(parts.passband, faults);
   refuseAny(faults);
   return deepFreeze(read?.band ?? { centerHz: Number.NaN, bandwidthHz: Number.NaN });
 }
@@ -54,9 +53,9 @@ export function checkBand(passband: unknown): Band {
  * checkMask([{ fromHz: '3864 MHz', rejectionDb: 24 }]); // [{ fromHz: 3864000000, rejectionDb: 24 }]
  */
 export function checkMask(mask: unknown, band?: Band): readonly MaskLine[] {
-  const faults: Fault[] = [];
-  const { mask: part } = readPart('mask', mask, faults);
-  const lines = readMask(part ?? [], band, faultyElements('mask', faults), faults);
+  const { parts, faults: structural, unsound } = readPart('mask', mask);
+  const faults = [...structural];
+  const lines = readMask(parts.mask ?? [], band, faultyElements('mask', unsound), faults);
   refuseAny(faults);
   return deepFreeze(lines);
 }
@@ -73,9 +72,10 @@ export function checkMask(mask: unknown, band?: Band): readonly MaskLine[] {
  */
 export function checkUnloadedQ(unloadedQ: unknown, order: number): number | readonly number[] {
   const wrongOrder = orderFault(order);
-  const faults: Fault[] = wrongOrder === undefined ? [] : [wrongOrder];
-  const { unloadedQ: part = Number.NaN } = readPart('unloadedQ', unloadedQ, faults);
-  if (faults.length === 0) readUnloadedQ(part, order, faults);
+  const { parts, faults: structural } = readPart('unloadedQ', unloadedQ);
+  const faults: Fault[] = [...(wrongOrder === undefined ? [] : [wrongOrder]), ...structural];
+  const { unloadedQ: q = Number.NaN } = parts;
+  if (faults.length === 0) readUnloadedQ(q, order, faults);
   refuseAny(faults);
-  return deepFreeze(part);
+  return deepFreeze(q);
 }

@@ -16,6 +16,8 @@ const ISSUE_LIMIT = 200;
 export interface Structured {
   readonly parts: Partial<SpecificationInput>;
   readonly faults: readonly Fault[];
+  /** The same before repetitions were left out: whatever lies under one of these is not sound. */
+  readonly unsound: readonly Fault[];
 }
 
 function stepsOf(path: readonly PropertyKey[]): Path {
@@ -101,13 +103,15 @@ function withoutMisspelled(faults: readonly Fault[]): readonly Fault[] {
 /** Puts a copied value through the schema; `known` faults keep what lies under them from being reported again. */
 export function readStructure(value: unknown, known: readonly Fault[]): Structured {
   const result = specificationSchema.safeParse(value);
-  if (result.success) return { parts: known.length === 0 ? result.data : partsWithout(value, known), faults: known };
+  if (result.success) {
+    return { parts: known.length === 0 ? result.data : partsWithout(value, known), faults: known, unsound: known };
+  }
   const { issues } = result.error;
   const found = issues.slice(0, ISSUE_LIMIT).flatMap((issue) => faultsOf(issue, [], value));
   const fresh = found.filter((fault) => !known.some((each) => isUnder(each.path, fault.path)));
-  const faults = [...known, ...fresh];
-  const parts = issues.length > ISSUE_LIMIT ? {} : partsWithout(value, faults);
-  return { parts, faults: withoutMisspelled(faults) };
+  const unsound = [...known, ...found];
+  const parts = issues.length > ISSUE_LIMIT ? {} : partsWithout(value, unsound);
+  return { parts, faults: withoutMisspelled([...known, ...fresh]), unsound };
 }
 
 /** The outermost keys with no fault under them; a faulty list keeps its place for the rules on its sound elements. */

@@ -10,3 +10,5 @@ export { folded } from './folded.js';
 export type { Reduced } from './reduction.js';
 export { rowsOf } from './matrix-shape.js';
 export { applyRotations, rotate } from './rotate.js';
+export type { RotationRequest, RotationTrace, TraceStep } from './trace.js';
+export { traceRotations } from './trace.js';

@@ -27,9 +27,9 @@ function isDigit(code: number): boolean {
   return code >= 48 && code <= 57;
 }
 
-/** Moves past JSON white space. */
+/** Moves past JSON white space, but not on and on. */
 export function skipSpace(cursor: Cursor): void {
-  for (;;) {
+  while (cursor.at <= LENGTH_LIMIT) {
     const code = cursor.text.charCodeAt(cursor.at);
     if (code !== 32 && code !== 9 && code !== 10 && code !== 13) return;
     cursor.at += 1;
@@ -133,22 +133,23 @@ function refuseLoneSurrogate(cursor: Cursor, start: number, path: Path, value: s
 
 /** Reads a text in double quotes; escapes are resolved, half characters refused. */
 export function readString(cursor: Cursor): string {
+  const { text } = cursor;
   const start = cursor.at;
-  const pieces: string[] = [];
+  let value = '';
   cursor.at += 1;
   let from = cursor.at;
   for (;;) {
-    const code = cursor.text.charCodeAt(cursor.at);
+    const code = text.charCodeAt(cursor.at);
     if (code === QUOTE) break;
-    if (code === BACKSLASH && cursor.at <= LENGTH_LIMIT) {
-      pieces.push(cursor.text.slice(from, cursor.at), readEscape(cursor));
+    if (!(code >= 32) || cursor.at > LENGTH_LIMIT) refuseStray(cursor, start, code);
+    if (code === BACKSLASH) {
+      if (cursor.at > from) value += text.slice(from, cursor.at);
+      value += readEscape(cursor);
       from = cursor.at;
-    } else if (code >= 32 && cursor.at <= LENGTH_LIMIT) cursor.at += 1;
-    else refuseStray(cursor, start, code);
+    } else cursor.at += 1;
   }
-  pieces.push(cursor.text.slice(from, cursor.at));
+  value += text.slice(from, cursor.at);
   cursor.at += 1;
-  const value = pieces.join('');
   refuseLoneSurrogate(cursor, start, cursor.path, value);
   return value;
 }

@@ -1,0 +1,47 @@
+/**
+ * irisloom: microwave band-pass filter synthesis, from a specification to a certified coupling matrix and the numbers that
+ * hardware is made from. One call does it all (`design`); the steps are public too, in the order of the rooms.
+ *
+ * @packageDocumentation
+ */
+export type { GeneralizedChebyshevRequest, PolynomialCoefficients, TransmissionZero } from './approximation/index.js';
+export { butterworth, chebyshev, coefficients, generalizedChebyshev } from './approximation/index.js';
+export type {
+  CouplingRow,
+  HandOver,
+  LossyBand,
+  PortCouplingRow,
+  PortPair,
+  ResonatorRow,
+  SweepHz,
+} from './bandpass/index.js';
+export { denormalize, evaluateMask, sweepHz } from './bandpass/index.js';
+export type { CertificationContext } from './certification/index.js';
+export { certify } from './certification/index.js';
+export type { Design } from './design.js';
+export { design } from './design.js';
+export type {
+  Band,
+  Certificate,
+  Complex,
+  CouplingMatrix,
+  Family,
+  FilterPolynomials,
+  Level,
+  MaskLine,
+  MaskRow,
+  Rotation,
+  Scattering,
+  Span,
+} from './forms/index.js';
+export { bandFromEdges, edgesOfBand, hzFromOmega, omegaFromHz } from './forms/index.js';
+export type { FailureDetail, PolynomialRoot } from './numerics/index.js';
+export { FilterFailure, polynomialRoots } from './numerics/index.js';
+export type { ComplexSamples, Curves, Model, Sweep, SweepOptions } from './response/index.js';
+export { scatteringAt, sweep } from './response/index.js';
+export type { Specification, SpecificationInput } from './specification/index.js';
+export { checkSpecification, parseSpecification, specificationJsonSchema } from './specification/index.js';
+export { transversal } from './synthesis/index.js';
+export type { Annihilation, Reduced, RotationRequest, RotationTrace, TraceStep } from './topology/index.js';
+export { annihilate, applyRotations, arrow, folded, rotate, traceRotations } from './topology/index.js';
+export { VERSION } from './version.js';

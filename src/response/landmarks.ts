@@ -1,0 +1,59 @@
+import type { CouplingMatrix } from '../forms/index.js';
+import { type Complex, generalEigenvalues } from '../numerics/index.js';
+import { rowsOf } from '../topology/index.js';
+import { isMatrix, type Model } from './model.js';
+
+/** A place on the frequency axis near which the response may change quickly, and how quickly: half width in omega. */
+export interface Landmark {
+  readonly omega: number;
+  readonly halfWidth: number;
+}
+
+/**
+ * Poles and zeros of a model as landmarks: between the samples that they ask for, no narrow feature can hide.
+ *
+ * A transfer function lists them; for a matrix the poles are the eigenvalues of the resonator block loaded by the ports.
+ * `loss` moves every root away from the axis by that much.
+ */
+export function landmarks(model: Model, loss: number | readonly number[]): readonly Landmark[] {
+  if (isMatrix(model)) return matrixLandmarks(model, typeof loss === 'number' ? new Array<number>(model.order).fill(loss) : loss);
+  const shift = typeof loss === 'number' ? loss : 0;
+  const roots = [...model.poles, ...model.reflectionZeros, ...model.transmissionZeros];
+  return roots.map((root) => ({ omega: root.im, halfWidth: Math.abs(root.re) + shift }));
+}
+
+/**
+ * `det(omega*I + K) = 0` with `K = M_rr - j*loss - m (M_pp - j)^-1 m^T`; K is complex, so its eigenvalues come from the real
+ * matrix of twice the size, which has them and their conjugates.
+ */
+function matrixLandmarks(matrix: CouplingMatrix, loss: readonly number[]): readonly Landmark[] {
+  const rows = rowsOf(matrix);
+  const { order } = matrix;
+  const port = portInverse(rows);
+  const value = (i: number, j: number): number => rows[i]?.[j] as number;
+  const entry = (i: number, j: number, part: 're' | 'im'): number => {
+    const [si, li, sj, lj] = [value(0, i), value(order + 1, i), value(0, j), value(order + 1, j)];
+    const loaded = si * sj * port.ss[part] + (si * lj + li * sj) * port.sl[part] + li * lj * port.ll[part];
+    if (part === 're') return value(i, j) - loaded;
+    return (i === j ? -(loss[i - 1] as number) : 0) - loaded;
+  };
+  const doubled = Array.from({ length: 2 * order }, (_, i) =>
+    Array.from({ length: 2 * order }, (__, j) => {
+      const at = [(i % order) + 1, (j % order) + 1] as const;
+      if (i < order === j < order) return entry(...at, 're');
+      return i < order ? -entry(...at, 'im') : entry(...at, 'im');
+    }),
+  );
+  return generalEigenvalues(doubled).map(({ re, im }) => ({ omega: -re, halfWidth: Math.abs(im) }));
+}
+
+/** `(M_pp - j)^-1`, M_pp the 2 x 2 of source and load. */
+function portInverse(rows: readonly Float64Array[]): { ss: Complex; sl: Complex; ll: Complex } {
+  const last = rows.length - 1;
+  const [a, b, c] = [rows[0]?.[0] as number, rows[0]?.[last] as number, rows[last]?.[last] as number];
+  const re = a * c - b * b - 1;
+  const im = -(a + c);
+  const square = re * re + im * im;
+  const over = (x: number, y: number): Complex => ({ re: (x * re + y * im) / square, im: (y * re - x * im) / square });
+  return { ss: over(c, -1), sl: over(-b, 0), ll: over(a, -1) };
+}
