@@ -30,6 +30,7 @@ export function arrow(matrix: CouplingMatrix): Reduced {
   const { order } = matrix;
   const chased = reduce(start.matrix, {
     steps: arrowSteps(order),
+    refined: false,
     structuralZeros: (finiteZeros) =>
       Array.from({ length: order }, (_, k) => [k, order + 1] as const).filter(([k]) => k < order - finiteZeros),
     positive: Array.from({ length: order }, (_, n) => ({ entry: [n, n + 1] as const, by: n + 1 })),

@@ -17,6 +17,8 @@ export interface EliminationStep {
 /** What distinguishes one fixed form from another. */
 export interface ReductionPlan {
   readonly steps: readonly EliminationStep[];
+  /** Whether rounding is corrected afterwards; not where the elimination itself keeps structural zeros that a correction would fill. */
+  readonly refined: boolean;
   /** Entries that vanish because the response has few finite zeros, outermost first. */
   readonly structuralZeros: (finiteZeros: number) => readonly (readonly [number, number])[];
   /** Couplings that the choice of resonator signs makes non-negative, each with the resonator whose sign decides it, in order. */
@@ -37,7 +39,7 @@ export interface Reduced {
 export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
   const original = rowsOf(matrix);
   const { rows, basis, rotations } = eliminate(original, plan.steps);
-  const exact = refine(original, basis, plan.steps) ?? rows;
+  const exact = (plan.refined ? refine(original, basis, plan.steps) : undefined) ?? rows;
   const leftover = clearStructure(exact, plan, matrix.finiteZeros);
   clearSynchronous(exact);
   const flips = normalSigns(exact, plan);
