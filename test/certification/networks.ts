@@ -194,65 +194,49 @@ export function equirippleRoots(order: number, returnLossDb: number, zeros: read
   };
 }
 
-/** Transversal matrix of a symmetric two-port from its poles, which alternate between the even and the odd mode. */
+/**
+ * Transversal matrix of a symmetric two-port from its poles. S11 + S21 and S11 - S21 are all-pass; a pole belongs to the
+ * first where P/epsilon = F/epsilonR there, to the second where it is the negative. All-pass `S = -1` at an eigenvalue.
+ */
 export function transversalOf(polynomials: FilterPolynomials): CouplingMatrix {
-  const { order, poles, transmissionZeros, epsilon, epsilonR } = polynomials;
+  const { order, poles, transmissionZeros, transmissionLead, epsilon, epsilonR } = polynomials;
   const canonical = transmissionZeros.length === order;
-  const above = transmissionZeros.filter((z) => z.im > 0 && z.re === 0).length;
-  const turn = canonical ? (above % 2 === 0 ? 1 : -1) * Math.atan(epsilonR / epsilon) : 0;
-  const modes: { lambda: number; load: number; sign: number }[] = [];
+  const turn = canonical ? Math.sign(transmissionLead.im) * Math.atan(epsilonR / epsilon) : 0;
+  const size = order + 2;
+  const values = Array.from({ length: size }, () => new Array<number>(size).fill(0));
+  const set = (i: number, j: number, value: number): void => {
+    values[i]![j] = value;
+    values[j]![i] = value;
+  };
+  let node = 0;
   for (const sign of [1, -1]) {
-    const set = poles.filter((_, k) => (k % 2 === 0 ? 1 : -1) === sign);
-    const psi = (w: number): number => set.reduce((sum, p) => sum + Math.atan2(w - p.im, -p.re), 0);
-    const slope = (w: number): number => set.reduce((sum, p) => sum - p.re / (p.re ** 2 + (w - p.im) ** 2), 0);
-    for (let m = 0; m < set.length; m++) {
-      const target = (sign * turn + (set.length - 1) * Math.PI) / 2 - m * Math.PI;
+    const own = poles.filter((p) => modeOf(polynomials, p) === sign);
+    const psi = (w: number): number => own.reduce((sum, p) => sum + Math.atan2(w - p.im, -p.re), 0);
+    const slope = (w: number): number => own.reduce((sum, p) => sum - p.re / (p.re ** 2 + (w - p.im) ** 2), 0);
+    for (let m = 0; m < own.length; m++) {
+      const target = (sign * turn + (own.length - 1) * Math.PI) / 2 - m * Math.PI;
       let [low, high] = [-1e6, 1e6];
       for (let step = 0; step < 90; step++) {
         const middle = (low + high) / 2;
         if (psi(middle) < target) low = middle;
         else high = middle;
       }
-      const lambda = (low + high) / 2;
-      modes.push({ lambda, load: Math.sqrt(1 / (2 * slope(lambda))), sign });
+      const coupling = Math.sqrt(1 / (2 * slope((low + high) / 2)));
+      node++;
+      set(node, node, -(low + high) / 2);
+      set(node, order + 1, coupling);
+      set(0, node, sign * coupling);
     }
   }
-  const direct = canonical ? 1 / epsilon / (1 + 1 / epsilonR) : 0;
-  // The source row's common sign follows from the phase of S21 at omega = 0 and fixes that of the direct coupling.
-  const build = (common: number): CouplingMatrix => {
-    const size = order + 2;
-    const values = Array.from({ length: size }, () => new Array<number>(size).fill(0));
-    const set = (i: number, j: number, value: number): void => {
-      values[i]![j] = value;
-      values[j]![i] = value;
-    };
-    modes.forEach(({ lambda, load, sign }, k) => {
-      set(k + 1, k + 1, -lambda);
-      set(k + 1, order + 1, load);
-      set(0, k + 1, common * sign * load);
-    });
-    set(0, order + 1, direct === 0 ? 0 : -common * direct);
-    return { order, values, finiteZeros: transmissionZeros.length };
-  };
-  return build(sourceSign(polynomials, modes));
+  set(0, order + 1, canonical ? -Math.tan(turn / 2) : 0);
+  return { order, values, finiteZeros: transmissionZeros.length };
 }
 
-/** Sign of the source row that gives S21 of the matrix the sign of P/(epsilon*E) at a point inside the band. */
-function sourceSign(
-  polynomials: FilterPolynomials,
-  modes: readonly { lambda: number; load: number; sign: number }[],
-): number {
-  const w = 0.123;
-  // With even and odd all-pass S_e, S_o: S21 = (S_e - S_o)/2, y_e = -j sum 2 m^2/(w - lambda).
-  const y = (sign: number): number =>
-    modes.filter((mode) => mode.sign === sign).reduce((sum, mode) => sum + (2 * mode.load ** 2) / (w - mode.lambda), 0);
-  const allPass = (x: number): Complex => div({ re: 1, im: x }, { re: 1, im: -x });
-  const found = sub(allPass(y(1)), allPass(y(-1)));
-  const s: Complex = { re: 0, im: w };
-  let wanted = polynomials.transmissionLead;
-  for (const z of polynomials.transmissionZeros) wanted = mul(wanted, sub(s, z));
-  for (const p of polynomials.poles) wanted = div(wanted, sub(s, p));
-  return found.re * wanted.re + found.im * wanted.im > 0 ? 1 : -1;
+function modeOf(polynomials: FilterPolynomials, pole: Complex): number {
+  let ratio = polynomials.transmissionLead;
+  for (const z of polynomials.transmissionZeros) ratio = mul(ratio, sub(pole, z));
+  for (const f of polynomials.reflectionZeros) ratio = div(ratio, sub(pole, f));
+  return Math.sign(ratio.re);
 }
 
 /** R M R^T with pivot [i, j], R_ii = R_jj = cos, R_ij = -sin, R_ji = sin, symmetric by construction. */
