@@ -5,8 +5,9 @@ import type { Fault, Path } from './faults.js';
 import { frequencyFromText } from './quantity.js';
 import type { FrequencyInput, PassbandInput } from './specification.js';
 
-const LEAST_HZ = 1e-18;
-const MOST_HZ = 1e18;
+/** Frequencies outside this range are slips, and would overflow later. */
+export const LEAST_HZ = 1e-18;
+export const MOST_HZ = 1e18;
 /** Narrowest band that double precision still resolves with seven digits. */
 const LEAST_FRACTION = 1e-9;
 /** Above this fractional bandwidth the narrow-band model of couplings is questionable. */

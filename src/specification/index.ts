@@ -7,7 +7,8 @@
 export { checkSpecification } from './check.js';
 export { checkBand, checkMask, checkUnloadedQ } from './doors.js';
 export type { Path, Position } from './faults.js';
-export type { JsonText, JsonValue } from './json/reader.js';
+export type { JsonValue } from './json/places.js';
+export type { JsonText } from './json/reader.js';
 export { readJson } from './json/reader.js';
 export { decodeUtf8 } from './json/utf8.js';
 export { checkOrder, checkReturnLoss } from './order-and-level.js';

@@ -1,10 +1,12 @@
 import type { Band } from '../forms/index.js';
-import { readFrequency } from './band.js';
+import { LEAST_HZ, MOST_HZ, readFrequency } from './band.js';
 import type { Fault } from './faults.js';
 import type { SweepInput, SweepRange } from './specification.js';
 
 const LEAST_POINTS = 2;
 const MOST_POINTS = 100_001;
+/** Below this the dissipation f0/(B*Qu) could overflow. */
+const LEAST_Q = 1e-6;
 /** Above this dissipation f0/(B*Qu) the midband loss is so large that a unit was probably mistaken. */
 const LARGE_LOSS = 0.1;
 
@@ -18,7 +20,7 @@ export function readUnloadedQ(q: number | readonly number[], order: number | und
     faults.push({ code: 'E_Q_RANGE', path: ['unloadedQ'], found, allowed, advice, value: q.length, limit: order });
   }
   (isList ? q : [q]).forEach((value, index) => {
-    if (value > 0) return;
+    if (value >= LEAST_Q) return;
     const path = isList ? ['unloadedQ', index] : ['unloadedQ'];
     const advice = 'write a positive Q, or leave the key out for a lossless filter';
     faults.push({ code: 'E_Q_RANGE', path, found: String(value), allowed, advice, value });
@@ -47,9 +49,10 @@ export function readSweep(sweep: SweepInput, faults: Fault[]): SweepRange | unde
     faults.push({ ...base, path: ['sweep', 'points'], found: String(points), allowed, advice, value: points });
   }
   if (fromHz === undefined || toHz === undefined) return undefined;
-  if (!(fromHz > 0 && toHz > fromHz)) {
+  if (!(fromHz >= LEAST_HZ && toHz > fromHz && toHz <= MOST_HZ)) {
+    const allowed = `${LEAST_HZ} <= fromHz < toHz <= ${MOST_HZ}`;
     const advice = fromHz > toHz ? 'exchange fromHz and toHz?' : 'give two different positive frequencies';
-    faults.push({ ...base, found: `${fromHz} Hz to ${toHz} Hz`, allowed: '0 < fromHz < toHz', advice, value: sweep });
+    faults.push({ ...base, found: `${fromHz} Hz to ${toHz} Hz`, allowed, advice, value: sweep });
     return undefined;
   }
   return rightCount ? { fromHz, toHz, points } : undefined;

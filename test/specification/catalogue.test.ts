@@ -208,10 +208,12 @@ const ROWS: readonly Row[] = [
 ];
 
 describe('bad input', () => {
-  it.each(ROWS)('%s', (_name, run, code, ...fragments) => {
-    const failure = expectRefusal(run, code, ...fragments);
-    expect(failure.message.length).toBeLessThan(4000);
-  });
+  for (const [name, run, code, ...fragments] of ROWS) {
+    it(name, () => {
+      const failure = expectRefusal(run, code, ...fragments);
+      expect(failure.message.length).toBeLessThan(4000);
+    });
+  }
 });
 
 describe('input that looks bad and is not', () => {

@@ -143,7 +143,7 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     expect(failure.hint).toBeDefined();
   });
 
-  it.each<readonly [string, object, string, ...string[]]>([
+  const rows: readonly (readonly [name: string, more: object, code: string, ...fragments: string[]])[] = [
     [
       'zeros with an all-pole family',
       { family: 'chebyshev', transmissionZeros: [2] },
@@ -165,6 +165,10 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     ],
     ['Q of 0', { unloadedQ: 0 }, 'E_Q_RANGE', 'unloadedQ', 'positive'],
     ['Q negative in a list', { unloadedQ: [1, 1, 1, -1, 1, 1] }, 'E_Q_RANGE', 'unloadedQ[3]'],
+    ['Q that is nearly 0', { unloadedQ: 1e-320 }, 'E_Q_RANGE', 'unloadedQ'],
+    ['a sweep from nearly 0', { sweep: { fromHz: 1e-320, toHz: 2, points: 2 } }, 'E_SWEEP', '1e-18'],
+    ['a zero at nearly 0 Hz', { transmissionZeros: ['1e-300 Hz'] }, 'E_ZERO_RANGE', '10000'],
+    ['a zero at a negative frequency', { transmissionZeros: ['-3 GHz'] }, 'E_QUANTITY', 'positive'],
     ['Q list of the wrong length', { unloadedQ: [1, 2] }, 'E_Q_RANGE', '2 values for order 6'],
     [
       'edges and center mixed',
@@ -191,9 +195,12 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     ['typed arrays', { unloadedQ: new Float64Array(6) }, 'E_TYPE', 'typed array'],
     ['a function', { order: () => 6 }, 'E_TYPE', 'a function'],
     ['a symbol', { order: Symbol('6') }, 'E_TYPE', 'a symbol'],
-  ])('refuse %s', (_name, more, code, ...fragments) => {
-    expectRefusal(() => checkSpecification({ ...SOUND, ...more }), code, ...fragments);
-  });
+  ];
+  for (const [name, more, code, ...fragments] of rows) {
+    it(`refuse ${name}`, () => {
+      expectRefusal(() => checkSpecification({ ...SOUND, ...more }), code, ...fragments);
+    });
+  }
 
   it.each([undefined, null, 5, 'text', [], () => 0, new Map(), new Date(0), Symbol('x'), 5n])(
     'refuse %o as a whole',

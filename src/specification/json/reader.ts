@@ -11,11 +11,10 @@ import {
   syntaxFailure,
   VALUE_LIMIT,
 } from './faults.js';
+import type { JsonValue, Places } from './places.js';
+import { offsetOf } from './places.js';
 import type { Cursor } from './tokens.js';
 import { readNumber, readString, skipSpace } from './tokens.js';
-
-/** What a JSON text holds; objects have no prototype. */
-export type JsonValue = null | boolean | number | string | readonly JsonValue[] | { readonly [key: string]: JsonValue };
 
 /** A JSON text as read. */
 export interface JsonText {
@@ -30,9 +29,6 @@ const WORDS: readonly (readonly [string, boolean | null])[] = [
   ['false', false],
   ['null', null],
 ];
-
-/** Offsets of an object's keys, or of a list's elements. */
-type Places = Map<string, number> | number[];
 
 interface Reading extends Cursor {
   values: number;
@@ -146,30 +142,6 @@ function readValue(reading: Reading, depth: number): JsonValue {
   return mark === '-' || (mark >= '0' && mark <= '9') ? readNumber(reading) : readWord(reading);
 }
 
-/** Offset of the value behind the key at `keyAt`, found by reading the key again. */
-function behindKey(text: string, keyAt: number): number {
-  const cursor: Cursor = { text, path: [], at: keyAt };
-  readString(cursor);
-  skipSpace(cursor);
-  cursor.at += 1;
-  skipSpace(cursor);
-  return cursor.at;
-}
-
-function offsetOf(reading: Reading, root: JsonValue, start: number, path: Path, onKey: boolean): number {
-  let value: JsonValue = root;
-  let offset = start;
-  for (const [index, step] of path.entries()) {
-    const places = typeof value === 'object' && value !== null ? reading.places.get(value) : undefined;
-    const place = Array.isArray(places) ? places[Number(step)] : places?.get(String(step));
-    if (place === undefined) return offset;
-    const asKey = onKey && index === path.length - 1;
-    offset = asKey || Array.isArray(places) ? place : behindKey(reading.text, place);
-    value = Reflect.get(Object(value), step) as JsonValue;
-  }
-  return offset;
-}
-
 /**
  * Reads a JSON text strictly: RFC 8259 and nothing beside it, one pass, nothing guessed.
  *
@@ -209,7 +181,7 @@ export function readJson(text: string): JsonText {
     value,
     positionOf: (path, onKey = false) => {
       lines ??= lineStarts(text);
-      return positionIn(lines, offsetOf(reading, value, start, path, onKey));
+      return positionIn(lines, offsetOf(reading, { value, at: start }, path, onKey));
     },
   };
 }

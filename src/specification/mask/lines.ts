@@ -1,6 +1,6 @@
 import type { Band, Level, MaskLine, Span } from '../../forms/index.js';
 import { edgesOfBand } from '../../forms/index.js';
-import { readFrequency } from '../band.js';
+import { LEAST_HZ, MOST_HZ, readFrequency } from '../band.js';
 import { definedOnly } from '../defined.js';
 import type { Fault, Path } from '../faults.js';
 import type { MaskLineInput } from '../specification.js';
@@ -9,6 +9,7 @@ import { contradictionFaults, LEVELS } from './contradictions.js';
 
 const MOST_DB = 1000;
 const MOST_LINES = 1000;
+const ALLOWED_HZ = `a positive frequency, ${LEAST_HZ} to ${MOST_HZ} Hz`;
 
 function maskFault(path: Path, found: string, allowed: string, advice: string, value?: unknown): Fault {
   return { code: 'E_MASK', path, found, allowed, advice, value };
@@ -26,10 +27,8 @@ function readSpan(line: MaskLineInput, path: Path, faults: Fault[]): Span | unde
     ['fromHz', fromHz],
     ['toHz', toHz],
   ] as const) {
-    if (hertz === undefined || hertz > 0) continue;
-    faults.push(
-      maskFault([...path, key], `${hertz} Hz`, 'a positive frequency', 'leave the key out for an open end', hertz),
-    );
+    if (hertz === undefined || (hertz >= LEAST_HZ && hertz <= MOST_HZ)) continue;
+    faults.push(maskFault([...path, key], `${hertz} Hz`, ALLOWED_HZ, 'leave the key out for an open end', hertz));
   }
   if (fromHz !== undefined && toHz !== undefined && fromHz > toHz) {
     faults.push(maskFault(path, `fromHz ${fromHz} above toHz ${toHz}`, 'fromHz up to toHz', 'exchange them?'));
@@ -38,47 +37,38 @@ function readSpan(line: MaskLineInput, path: Path, faults: Fault[]): Span | unde
   return definedOnly({ fromHz, toHz, relativeTo: line.relativeTo });
 }
 
-function levelFault(key: LevelKey, level: Level, span: Span, path: Path): Fault | undefined {
-  const inner = [...path, key];
-  const most = key.endsWith('Db') ? MOST_DB : Number.MAX_VALUE;
+function sizeFault(key: LevelKey, level: Level, path: Path): Fault | undefined {
+  const inDb = key.endsWith('Db');
   const values = typeof level === 'number' ? [level] : level;
-  const wrong = values.find((value) => !(value >= 0 && value <= most));
-  if (wrong !== undefined) {
-    const allowed = key.endsWith('Db') ? `0 to ${MOST_DB} dB` : 'a positive number of seconds';
-    const advice = wrong < 0 ? 'drop the sign: levels are positive' : 'lower it';
-    return maskFault(inner, String(wrong), allowed, advice, level);
+  const wrong = values.find((value) => !(value >= 0 && value <= (inDb ? MOST_DB : Number.MAX_VALUE)));
+  if (wrong === undefined) return undefined;
+  const allowed = inDb ? `0 to ${MOST_DB} dB` : 'a positive number of seconds';
+  const advice = wrong < 0 ? 'drop the sign: levels are positive' : 'lower it';
+  return maskFault(path, String(wrong), allowed, advice, level);
+}
+
+/** A pair needs both ends, and a width to slope over. */
+function pairFault(level: Level, span: Span, path: Path): Fault | undefined {
+  if (typeof level === 'number') return undefined;
+  if (span.fromHz === undefined || span.toHz === undefined) {
+    const advice = 'give the other end, or one value';
+    return maskFault(path, 'a pair on an open span', 'a pair only with both ends', advice, level);
   }
-  const isPoint = span.fromHz === span.toHz;
-  if (typeof level !== 'number') {
-    const open = span.fromHz === undefined || span.toHz === undefined;
-    if (open)
-      return maskFault(
-        inner,
-        'a pair on an open span',
-        'a pair only with both ends',
-        'give the other end, or one value',
-        level,
-      );
-    if (isPoint && level[0] !== level[1]) {
-      return maskFault(
-        inner,
-        'two values at one frequency',
-        'one value at a point',
-        'widen the span, or give one value',
-        level,
-      );
-    }
-  }
+  if (span.fromHz !== span.toHz || level[0] === level[1]) return undefined;
+  const advice = 'widen the span, or give one value';
+  return maskFault(path, 'two values at one frequency', 'one value at a point', advice, level);
+}
+
+/** A variation needs a width; that of the loss has no bound over an open span. */
+function variationFault(key: LevelKey, span: Span, path: Path): Fault | undefined {
   if (!key.includes('Variation')) return undefined;
-  if (isPoint) return maskFault(path, 'a variation over a point', 'a span with a width', 'widen the span');
+  if (span.fromHz === span.toHz) {
+    return maskFault(path, 'a variation over a point', 'a span with a width', 'widen the span');
+  }
   const open = span.fromHz === undefined || span.toHz === undefined;
   if (!open || key === 'groupDelayVariationSeconds') return undefined;
-  return maskFault(
-    path,
-    'a loss variation over an open span',
-    'both ends: loss has no bound far out',
-    'add the other end',
-  );
+  const allowed = 'both ends: loss has no bound far out';
+  return maskFault(path, 'a loss variation over an open span', allowed, 'add the other end');
 }
 
 function readLevel(
@@ -96,7 +86,8 @@ function readLevel(
   }
   const level = line[key];
   if (level === undefined || span === undefined) return undefined;
-  const fault = levelFault(key, level, span, path);
+  const inner = [...path, key];
+  const fault = sizeFault(key, level, inner) ?? pairFault(level, span, inner) ?? variationFault(key, span, path);
   if (fault === undefined) return [key, level];
   faults.push(fault);
   return undefined;

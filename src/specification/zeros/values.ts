@@ -113,7 +113,7 @@ export function placeFault(read: ZeroRead, value: unknown, path: Path, band?: Ba
   const { zero } = read;
   const size = magnitude(zero);
   const base = { path, value };
-  if (size > MAX_MAGNITUDE) return { ...infiniteFault(path, value), found: echoComplex(zero) };
+  if (!(size <= MAX_MAGNITUDE)) return { ...infiniteFault(path, value), found: echoComplex(zero) };
   if (zero.re !== 0) return undefined;
   const found = placeText(zero, band);
   if (read.onEdge === true || size === 1) {
