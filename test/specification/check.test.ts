@@ -2,6 +2,8 @@ import * as fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
   checkBand,
+  checkOrder,
+  checkReturnLoss,
   checkSpecification,
   checkTransmissionZeros,
   checkUnloadedQ,
@@ -177,6 +179,14 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
       'lowerHz and upperHz, or centerHz and bandwidthHz',
     ],
     ['one edge only', { passband: { lowerHz: 1 } }, 'E_MISSING', 'passband.upperHz'],
+    ['a negative edge', { passband: { lowerHz: -5, upperHz: 5 } }, 'E_BAND', '-5 Hz and 5 Hz', 'positive'],
+    ['a width too narrow for the digits', { passband: { centerHz: 1e10, bandwidthHz: 1 } }, 'E_BAND', 'widen'],
+    [
+      'more zeros than order, once',
+      { topology: 'inline', transmissionZeros: Array(7).fill(2) },
+      'E_ZERO_COUNT',
+      '7 zeros',
+    ],
     ['an empty passband', { passband: {} }, 'E_MISSING', 'passband.lowerHz'],
     ['a band beyond any unit', { passband: { lowerHz: 1e300, upperHz: 2e300 } }, 'E_BAND', 'units'],
     ['a band too narrow for the digits', { passband: { lowerHz: 1e10, upperHz: 1e10 + 1 } }, 'E_BAND', 'widen'],
@@ -249,6 +259,7 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
       expect(onlyRefuses(() => checkTransmissionZeros(bad, 6))).toBeDefined();
       expect(onlyRefuses(() => checkTransmissionZeros([bad], 6))).toBeDefined();
       expect(onlyRefuses(() => checkBand(bad))).toBeDefined();
+      expect(onlyRefuses(() => checkOrder(bad))).toBeDefined();
       expect(onlyRefuses(() => checkUnloadedQ(bad, 6))).toBeDefined();
       for (const key of Object.keys(JSON.parse(FULL))) {
         expect(onlyRefuses(() => checkSpecification({ ...SOUND, [key]: bad }))).toBeDefined();
@@ -357,6 +368,17 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     const start = performance.now();
     refusal(() => parseSpecification(text));
     expect(performance.now() - start).toBeLessThan(1000);
+  });
+});
+
+describe('checkOrder(value) and checkReturnLoss(value)', () => {
+  it('give the value itself, ends of the range included', () => {
+    expect([1, 6, 100].map(checkOrder)).toEqual([1, 6, 100]);
+    expect([0.01, 22, 100].map(checkReturnLoss)).toEqual([0.01, 22, 100]);
+    expect([0, 101, 1.5].map((value) => refusal(() => checkOrder(value)).code)).toEqual(Array(3).fill('E_ORDER_RANGE'));
+    expect([0.009, 100.1].map((value) => refusal(() => checkReturnLoss(value)).code)).toEqual(
+      Array(2).fill('E_RL_RANGE'),
+    );
   });
 });
 
