@@ -43,11 +43,7 @@ export function agreement(matrix: CouplingMatrix, fromMatrix: MatrixResponse, fr
   }
   return [
     atMost('C6 response of the matrix against the polynomials', difference, RESPONSE_LIMIT),
-    atMost(
-      'C6 response of the matrix against the polynomials, units of rounding',
-      ratio,
-      ROUNDING_LIMIT,
-    ),
+    atMost('C6 response of the matrix against the polynomials, units of rounding', ratio, ROUNDING_LIMIT),
   ];
 }
 

@@ -14,20 +14,20 @@ export function eliminate(
   for (let r = 0; r < rows; r++) offsets[r] = r * columns;
   for (let k = 0; k < pivots; k++) {
     let best = k;
-    let size = Math.abs(cell(table, cell(offsets, k) + k));
+    let size = Math.abs(cell(table, rowAt(offsets, k) + k));
     for (let r = k + 1; r < rows; r++) {
-      const candidate = Math.abs(cell(table, cell(offsets, r) + k));
+      const candidate = Math.abs(cell(table, rowAt(offsets, r) + k));
       if (candidate > size) {
         size = candidate;
         best = r;
       }
     }
-    const top = cell(offsets, best);
-    offsets[best] = cell(offsets, k);
+    const top = rowAt(offsets, best);
+    offsets[best] = rowAt(offsets, k);
     offsets[k] = top;
     const pivot = cell(table, top + k);
     for (let r = k + 1; r < rows; r++) {
-      const row = cell(offsets, r);
+      const row = rowAt(offsets, r);
       const factor = cell(table, row + k) / pivot;
       if (factor === 0) continue;
       for (let c = k + 1; c < columns; c++) {
@@ -37,7 +37,12 @@ export function eliminate(
   }
 }
 
-/** Entry i of a typed array whose length the caller has fixed. */
-export function cell(values: Float64Array | Int32Array, i: number): number {
+/** Entry i of an array whose length the caller has fixed. One type of array only: mixed types make every access slow. */
+export function cell(values: Float64Array, i: number): number {
   return values[i] as number;
+}
+
+/** Where row r of the table starts. */
+export function rowAt(offsets: Int32Array, r: number): number {
+  return offsets[r] as number;
 }

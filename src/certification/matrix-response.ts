@@ -1,5 +1,5 @@
 import type { CouplingMatrix } from '../forms/index.js';
-import { cell, eliminate } from './elimination.js';
+import { cell, eliminate, rowAt } from './elimination.js';
 import { emptySeries, type Response } from './series.js';
 
 /** The response of a matrix, and at each point the larger of |x|^2 over the two port columns x of A^-1. */
@@ -60,8 +60,8 @@ function portsLast(matrix: CouplingMatrix, columns: number): Float64Array {
 
 /** Solves for the column of A^-1 of one port into `x` (re, im in turn; resonators, source, load); returns |x|^2. */
 function solvePort(table: Float64Array, offsets: Int32Array, n: number, port: 0 | 1, x: Float64Array): number {
-  const upper = cell(offsets, n) + n;
-  const lower = cell(offsets, n + 1) + n;
+  const upper = rowAt(offsets, n) + n;
+  const lower = rowAt(offsets, n + 1) + n;
   // Two rows are left: (a - j*d) x_S + (b - j*e) x_L = d or e, with a, b, d, e in columns N .. N+3.
   const [a, b, d, e] = [cell(table, upper), cell(table, upper + 1), cell(table, upper + 2), cell(table, upper + 3)];
   const [f, g, h, k] = [cell(table, lower), cell(table, lower + 1), cell(table, lower + 2), cell(table, lower + 3)];
@@ -74,7 +74,7 @@ function solvePort(table: Float64Array, offsets: Int32Array, n: number, port: 0 
   for (let i = 2 * n; i < 2 * n + 4; i++) norm += cell(x, i) * cell(x, i);
   const [sRe, sIm, lRe, lIm] = [cell(x, 2 * n), cell(x, 2 * n + 1), cell(x, 2 * n + 2), cell(x, 2 * n + 3)];
   for (let r = n - 1; r >= 0; r--) {
-    const row = cell(offsets, r);
+    const row = rowAt(offsets, r);
     const [rs, rl, us, ul] = [
       cell(table, row + n),
       cell(table, row + n + 1),

@@ -1,5 +1,5 @@
 import type { Complex, CouplingMatrix } from '../forms/index.js';
-import { cell, eliminate } from './elimination.js';
+import { cell, eliminate, rowAt } from './elimination.js';
 
 /**
  * |S21| of the matrix at a complex s, `omega = -j*s`: 2*|[A^-1](N+1, 0)| by the real system [[Re A, -Im A], [Im A, Re A]].
@@ -28,7 +28,7 @@ export function transmissionAt(matrix: CouplingMatrix, s: Complex): number {
   const offsets = new Int32Array(shape.rows);
   eliminate(table, offsets, shape);
   const last = 2 * size - 1;
-  const [row, above] = [cell(offsets, last), cell(offsets, last - 1)];
+  const [row, above] = [rowAt(offsets, last), rowAt(offsets, last - 1)];
   const im = cell(table, row + last + 1) / cell(table, row + last);
   const re = (cell(table, above + last + 1) - cell(table, above + last) * im) / cell(table, above + last - 1);
   return 2 * Math.sqrt(re * re + im * im);
