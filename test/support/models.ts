@@ -98,7 +98,7 @@ export const sharpness = ({ poles }: FilterPolynomials): number => Math.max(1, .
 /** Rotation matrix of a pivot as documented: R_ii = R_jj = cos, R_ij = -sin, R_ji = sin; and M' = R M R^T in plain sums. */
 export function denseRotation(matrix: CouplingMatrix, [i, j]: readonly [number, number], angle: number): number[][] {
   const n = matrix.order + 2;
-  const r = Array.from({ length: n }, (_, a) => Array.from({ length: n }, (__, b) => (a === b ? 1 : 0)));
+  const r = Array.from({ length: n }, (_, a) => Array.from({ length: n }, (__, b) => Number(a === b)));
   r[i]![i] = r[j]![j] = Math.cos(angle);
   r[i]![j] = -Math.sin(angle);
   r[j]![i] = Math.sin(angle);
