@@ -228,7 +228,7 @@ test('sweep at an exact hit with the smallest of losses stays finite and close t
 });
 
 test('sweep(Butterworth) has delay 1/sin(pi/2N) at the center', () => {
-  for (const order of [1, 2, 3, 5, 8, 20]) {
+  for (const order of [1, 2, 3, 5, 8, 16]) {
     const { groupDelay } = sweep(butterworth({ order }), [0]);
     expect(groupDelay[0]! * Math.sin(Math.PI / (2 * order))).toBeCloseTo(1, 12);
     const matrix = folded(transversal(butterworth({ order }))).matrix;
