@@ -1,8 +1,7 @@
 import type { FilterPolynomials } from '../forms/index.js';
 import { type Complex, complex, FilterFailure, magnitude } from '../numerics/index.js';
 import { checkOrder, checkReturnLoss, checkTransmissionZeros } from '../specification/index.js';
-import { bandPhase } from './band-phase.js';
-import { centered, countInUpperHalf, halfBandRoots, mirrored, type HalfBandRoot } from './half-band.js';
+import { type BandRoots, bandRoots } from './band-roots.js';
 import { transmissionLead } from './transmission-lead.js';
 
 /** A transmission zero: a bare number `w` means `s = j*w`, a complex number lies in the s-plane. */
@@ -35,17 +34,17 @@ export interface GeneralizedChebyshevRequest {
 export function generalizedChebyshev(request: GeneralizedChebyshevRequest): FilterPolynomials {
   const order = checkOrder(request.order);
   const returnLossDb = checkReturnLoss(request.returnLossDb);
-  const { zeros } = checkTransmissionZeros(request.transmissionZeros ?? [], order);
+  const { zeros } = checkTransmissionZeros(request.transmissionZeros === undefined ? [] : request.transmissionZeros, order);
   const kappa = Math.sqrt(Math.expm1((returnLossDb * Math.LN10) / 10));
-  const roots = rootsOfBand(order, zeros, kappa);
+  const { reflection, poles } = bandRoots(order, zeros.map(omegaOf), kappa);
   return {
     family: 'generalizedChebyshev',
     order,
-    poles: roots.map((root) => root.pole),
-    reflectionZeros: roots.map((root) => complex(0, root.cosine)),
+    poles,
+    reflectionZeros: reflection.map(({ zero }) => zero),
     transmissionZeros: zeros,
     transmissionLead: transmissionLead(order, zeros),
-    ...rippleConstants(zeros, roots, kappa),
+    ...rippleConstants(zeros, reflection, kappa),
     returnLossDb,
   };
 }
@@ -66,40 +65,20 @@ export function chebyshev(request: { readonly order: number; readonly returnLoss
 /** s-plane to omega-plane, `w = -j*s`. */
 const omegaOf = (zero: Complex): Complex => complex(zero.im, zero.re === 0 ? 0 : -zero.re);
 
-function rootsOfBand(order: number, zeros: readonly Complex[], kappa: number): readonly HalfBandRoot[] {
-  const omega = zeros.map(omegaOf);
-  const phase = bandPhase(order, omega);
-  const mirrorPhase = bandPhase(
-    order,
-    omega.map((w) => complex(-w.re, w.im)),
-  );
-  const symmetric = phase.q.every((q, n) => q.re === mirrorPhase.q[n]?.re && q.im === mirrorPhase.q[n]?.im);
-  if (symmetric) {
-    const half = halfBandRoots(phase, Math.ceil(order / 2), kappa);
-    const upper = half.slice(0, Math.floor(order / 2));
-    const middle = half.slice(upper.length).map(centered);
-    return [...upper, ...middle, ...upper.map(mirrored).reverse()];
-  }
-  const count = countInUpperHalf(phase);
-  const upper = halfBandRoots(phase, count, kappa);
-  const lower = halfBandRoots(mirrorPhase, order - count, kappa);
-  return [...upper, ...lower.map(mirrored).reverse()];
-}
-
 /**
  * `epsilon` and `epsilonR` from distances at s = j; factors are taken in pairs so that no partial product leaves the range
  * of doubles before the result does.
  */
-function rippleConstants(zeros: readonly Complex[], roots: readonly HalfBandRoot[], kappa: number): { epsilon: number; epsilonR: number } {
+function rippleConstants(zeros: readonly Complex[], reflection: BandRoots['reflection'], kappa: number): { epsilon: number; epsilonR: number } {
   let ratio = 1 / kappa;
-  roots.forEach((root, n) => {
+  reflection.forEach(({ oneMinus }, n) => {
     const zero = zeros[n];
-    ratio *= (zero === undefined ? 1 : magnitude(complex(zero.re, 1 - zero.im))) / root.oneMinus;
+    ratio *= (zero === undefined ? 1 : magnitude(complex(zero.re, 1 - zero.im))) / oneMinus;
   });
   if (!Number.isFinite(ratio)) {
     throw new FilterFailure('E_ZERO_RANGE', 'E_ZERO_RANGE transmissionZeros: found zeros so far out that the ripple constant exceeds 1e308; allowed products below that; do leave distant zeros at infinity out', { argument: 'transmissionZeros', value: ratio, limit: Number.MAX_VALUE, hint: 'leave distant zeros at infinity out' });
   }
-  if (zeros.length < roots.length) return { epsilon: ratio, epsilonR: 1 };
+  if (zeros.length < reflection.length) return { epsilon: ratio, epsilonR: 1 };
   const epsilon = Math.hypot(1, ratio);
   return { epsilon, epsilonR: epsilon / ratio };
 }

@@ -1,32 +1,35 @@
-import { add, type Complex, complex, divide, EPS, logarithm, magnitude, monotoneRoot, multiply, scale, subtract } from '../numerics/index.js';
-import { type BandPhase, phaseAt, phasorAt } from './band-phase.js';
+import type { FineRoot } from '../forms/index.js';
+import { type Complex, EPS, monotoneRoot } from '../numerics/index.js';
+import { type BandPhase, phaseAt } from './band-phase.js';
+import { continuedAngle } from './pole-path.js';
 
-/** One reflection zero and its pole: `cosine` = omega of the zero, `oneMinus` = 1 - omega without cancellation. */
+/** One reflection zero with the pole that continues it; 1 - omega and 1 + omega of the zero without cancellation. */
 export interface HalfBandRoot {
-  readonly cosine: number;
+  readonly zero: FineRoot;
   readonly oneMinus: number;
   readonly onePlus: number;
-  readonly pole: Complex;
+  readonly pole: FineRoot;
 }
 
 /**
- * The reflection zeros and poles of the upper half of the band (omega >= 0), in falling order of omega.
+ * The reflection zeros of the upper half of the band (omega >= 0), in falling order, each with a pole.
  *
  * Reflection zero k: `Phi(phi) = (k - 1/2)*pi`, one bracket each. Its pole: the same equation with the imaginary part
- * `asinh(kappa)` added, reached by continuation. The lower half is the same problem with every zero mirrored, so that
- * angles near pi never lose their digits and a symmetric response comes out exactly symmetric.
+ * `asinh(kappa)` added. The lower half is the same problem with every zero mirrored (and `detour` negated), so that angles
+ * near pi never lose their digits.
  */
-export function halfBandRoots(phase: BandPhase, count: number, kappa: number): readonly HalfBandRoot[] {
+export function halfBandRoots(phase: BandPhase, count: number, kappa: number, detour: number): readonly HalfBandRoot[] {
   const roots: HalfBandRoot[] = [];
   let low = 0;
   for (let k = 1; k <= count; k++) {
     const target = (k - 0.5) * Math.PI;
     const phi = monotoneRoot((x) => shifted(phase, x, target), low, UPPER, startAngle(phase, low, target));
+    const oneMinus = 2 * Math.sin(phi / 2) ** 2;
     roots.push({
-      cosine: Math.cos(phi),
-      oneMinus: 2 * Math.sin(phi / 2) ** 2,
+      zero: belowEdge(0, oneMinus),
+      oneMinus,
       onePlus: 2 * Math.cos(phi / 2) ** 2,
-      pole: poleFrom(phase, phi, k, Math.asinh(kappa)),
+      pole: poleAt(continuedAngle(phase, phi, k, Math.asinh(kappa), detour)),
     });
     low = phi;
   }
@@ -51,64 +54,25 @@ function startAngle(phase: BandPhase, low: number, target: number): number {
   return low + (target - value) / slope;
 }
 
-/**
- * Continues `Phi(phi) = (k - 1/2)*pi + j*height` from the real axis up to the full height in equal steps, each finished by
- * Newton on the logarithm of the phasor quotient. Halves the step when Newton does not settle.
- */
-function poleFrom(phase: BandPhase, phi: number, k: number, height: number): Complex {
-  let z = complex(phi, 0);
-  let slope = complex(phaseAt(phase, phi).slope, 0);
-  let reached = 0;
-  let step = height / Math.max(1, Math.ceil(height / STEP_HEIGHT));
-  while (reached < height) {
-    const goal = Math.min(height, reached + step);
-    const predicted = add(z, divide(complex(0, goal - reached), slope));
-    const settled = newton(phase, predicted, k, goal);
-    if (settled === undefined) {
-      step /= 2;
-      continue;
-    }
-    z = settled.z;
-    slope = settled.slope;
-    reached = goal;
-  }
-  // s = j*cos(z), reflected into the left half plane.
-  return complex(-Math.sin(z.re) * Math.sinh(z.im), Math.cos(z.re) * Math.cosh(z.im));
+/** `s = j*cos(z)`, reflected into the left half plane; `1 - Re cos(z)` is formed without cancellation. */
+function poleAt(z: Complex): FineRoot {
+  const offset = 2 * Math.sin(z.re / 2) ** 2 * Math.cosh(z.im) - 2 * Math.sinh(z.im / 2) ** 2;
+  return belowEdge(-Math.sin(z.re) * Math.sinh(z.im), offset);
 }
 
-/** Height of one continuation step in Phi; below about pi the predicted point stays in Newton's basin (measured, see tests). */
-const STEP_HEIGHT = 1;
+/** A root at `re + j*(1 - offset)` with what rounding of the imaginary part leaves over (Knuth's two-sum). */
+function belowEdge(re: number, offset: number): FineRoot {
+  const im = 1 - offset;
+  const part = im - 1;
+  return { re, im, imRest: 1 - (im - part) + (-offset - part) };
+}
 
-function newton(phase: BandPhase, start: Complex, k: number, height: number): { z: Complex; slope: Complex } | undefined {
-  let z = start;
-  let previous = Number.POSITIVE_INFINITY;
-  const growth = Math.exp(height);
-  // exp(-j*(k - 1/2)*pi) is +-j, exactly.
-  const turn = complex(0, k % 2 === 1 ? -growth : growth);
-  for (let turnCount = 0; turnCount < 30; turnCount++) {
-    const { phasor, slope } = phasorAt(phase, z);
-    const residual = logarithm(multiply(phasor, turn));
-    const step = divide(complex(residual.im, -residual.re), slope);
-    const size = magnitude(step);
-    z = subtract(z, step);
-    if (size <= 4 * EPS * magnitude(z) || (size >= previous && size < 1e-12)) return { z, slope };
-    if (size > previous * 2 && turnCount > 2) return undefined;
-    previous = size;
-  }
-  return undefined;
+/** The mirror image of a root in the real axis, omega -> -omega. */
+export function conjugate({ re, im, imRest = 0 }: FineRoot): FineRoot {
+  return { re, im: 0 - im, imRest: 0 - imRest };
 }
 
 /** Mirrors a root of the mirrored problem back: omega -> -omega. */
 export function mirrored(root: HalfBandRoot): HalfBandRoot {
-  return {
-    cosine: -root.cosine,
-    oneMinus: root.onePlus,
-    onePlus: root.oneMinus,
-    pole: complex(root.pole.re, -root.pole.im),
-  };
-}
-
-/** The root in the middle of an exactly symmetric response of odd order: omega = 0, real pole. */
-export function centered(root: HalfBandRoot): HalfBandRoot {
-  return { cosine: 0, oneMinus: 1, onePlus: 1, pole: scale(complex(root.pole.re, 0), 1) };
+  return { zero: conjugate(root.zero), oneMinus: root.onePlus, onePlus: root.oneMinus, pole: conjugate(root.pole) };
 }

@@ -1,5 +1,13 @@
 import type { Complex } from '../numerics/index.js';
 
+/**
+ * A root whose imaginary part may be known beyond a double: `im + imRest` is the value, `im` its rounding, `imRest` 0 when
+ * absent. Close to the band edge poles lie so near the axis that half an ulp of `im` is the largest error of a response.
+ */
+export interface FineRoot extends Complex {
+  readonly imRest?: number;
+}
+
 /** Which ripple law a transfer function obeys; decides which certificates apply. */
 export type Family = 'generalizedChebyshev' | 'butterworth';
 
@@ -13,8 +21,8 @@ export type Family = 'generalizedChebyshev' | 'butterworth';
 export interface FilterPolynomials {
   readonly family: Family;
   readonly order: number;
-  readonly poles: readonly Complex[];
-  readonly reflectionZeros: readonly Complex[];
+  readonly poles: readonly FineRoot[];
+  readonly reflectionZeros: readonly FineRoot[];
   readonly transmissionZeros: readonly Complex[];
   readonly transmissionLead: Complex;
   readonly epsilon: number;

@@ -6,7 +6,7 @@
 export type { Certificate } from './certificate.js';
 export type { CouplingMatrix, Rotation } from './coupling-matrix.js';
 export type { Complex } from '../numerics/index.js';
-export type { Family, FilterPolynomials } from './filter-polynomials.js';
+export type { Family, FilterPolynomials, FineRoot } from './filter-polynomials.js';
 export type { Band } from './frequency-map.js';
 export { bandFromEdges, edgesOfBand, hzFromOmega, omegaFromHz } from './frequency-map.js';
 export type { Level, MaskLine, MaskRow, Span } from './mask.js';

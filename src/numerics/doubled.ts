@@ -70,3 +70,23 @@ export function doubledMinusProduct(a: DoubledComplex, b: DoubledComplex, root: 
 
 export const DOUBLED_ZERO: DoubledComplex = { re: ZERO, im: ZERO };
 export const DOUBLED_ONE: DoubledComplex = { re: { hi: 1, lo: 0 }, im: ZERO };
+
+/** Product of two pairs. */
+export function doubledMultiply(a: Doubled, b: Doubled): Doubled {
+  const product = doubledTimes(a, b.hi);
+  return doubledAdd(product, { hi: a.hi * b.lo, lo: 0 });
+}
+
+/** Quotient of two pairs: one division in doubles and one correction. */
+export function doubledDivide(a: Doubled, b: Doubled): Doubled {
+  const quotient = a.hi / b.hi;
+  const rest = doubledAdd(a, doubledTimes(b, -quotient));
+  return doubledAdd({ hi: quotient, lo: 0 }, { hi: rest.hi / b.hi, lo: 0 });
+}
+
+/** Square root of a positive pair: one root in doubles and one Newton correction. */
+export function doubledSquareRoot(a: Doubled): Doubled {
+  const root = Math.sqrt(a.hi);
+  const rest = doubledAdd(a, doubledTimes({ hi: -root, lo: 0 }, root));
+  return doubledAdd({ hi: root, lo: 0 }, { hi: rest.hi / (2 * root), lo: 0 });
+}

@@ -24,7 +24,7 @@ export { FilterFailure } from './failure.js';
 export { generalEigenvalues } from './general-eigen.js';
 export { EPS } from './limits.js';
 export type { Doubled } from './doubled.js';
-export { doubledDot } from './doubled.js';
+export { doubledAdd, doubledDivide, doubledDot, doubledMultiply, doubledSquareRoot } from './doubled.js';
 export { localMinimum } from './local-minimum.js';
 export type { RisingFunction } from './monotone-root.js';
 export { monotoneRoot } from './monotone-root.js';

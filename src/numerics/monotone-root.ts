@@ -4,16 +4,19 @@ import { EPS } from './limits.js';
 export type RisingFunction = (x: number) => { readonly value: number; readonly slope: number };
 
 /**
- * The one root of a rising function inside [low, high]: Newton steps, a bisection whenever a step leaves the bracket.
+ * The one root of a rising function inside [low, high]: Newton steps, a bisection whenever a step leaves the bracket or is
+ * not half of the last one.
  *
- * The caller guarantees value(low) <= 0 <= value(high). Stops when a step no longer moves x by more than 2 ulp of the
- * scale; 60 bisections of any bracket reach that, so the loop is capped at 200 turns.
+ * The caller guarantees value(low) <= 0 <= value(high). Stops when a step no longer moves x by more than 2 ulp; a bracket
+ * of doubles cannot be halved more often than about 2100 times, so the loop ends. A step function (sharp resonances) would
+ * lead plain bracketed Newton into creeping: hence the second condition.
  */
 export function monotoneRoot(f: RisingFunction, low: number, high: number, start: number): number {
   let a = low;
   let b = high;
   let x = start > a && start < b ? start : (a + b) / 2;
-  for (let turn = 0; turn < 200; turn++) {
+  let lastStep = b - a;
+  for (;;) {
     const { value, slope } = f(x);
     if (value === 0) return x;
     const step = value / slope;
@@ -21,9 +24,11 @@ export function monotoneRoot(f: RisingFunction, low: number, high: number, start
     if (Math.abs(step) <= 2 * EPS * Math.abs(x)) return x - step;
     if (value < 0) a = x;
     else b = x;
-    const next = x - step;
-    x = next > a && next < b ? next : (a + b) / 2;
-    if (b - a <= EPS * Math.max(Math.abs(a), Math.abs(b))) return x;
+    const newton = x - step;
+    const useful = newton > a && newton < b && Math.abs(step) <= Math.abs(lastStep) / 2;
+    const next = useful ? newton : a + (b - a) / 2;
+    if (next === a || next === b) return next;
+    lastStep = next - x;
+    x = next;
   }
-  return x;
 }

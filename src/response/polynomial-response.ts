@@ -1,4 +1,4 @@
-import type { FilterPolynomials, Scattering } from '../forms/index.js';
+import type { FilterPolynomials, FineRoot, Scattering } from '../forms/index.js';
 import { type Complex, complex, divide, multiply, scale } from '../numerics/index.js';
 
 /**
@@ -11,13 +11,13 @@ export function scatteringOfPolynomials(polynomials: FilterPolynomials, s: Compl
   let s22 = s11;
   let s21 = scale(transmissionLead, 1 / epsilon);
   poles.forEach((pole, n) => {
-    const below = complex(s.re - pole.re, s.im - pole.im);
-    const reflection = reflectionZeros[n] as Complex;
+    const below = complex(s.re - pole.re, above(s.im, pole));
+    const reflection = reflectionZeros[n] as FineRoot;
     const transmission = transmissionZeros[n];
-    s11 = multiply(s11, divide(complex(s.re - reflection.re, s.im - reflection.im), below));
-    s22 = multiply(s22, divide(complex(s.re + reflection.re, s.im - reflection.im), below));
-    const above = transmission === undefined ? complex(1, 0) : complex(s.re - transmission.re, s.im - transmission.im);
-    s21 = multiply(s21, divide(above, below));
+    s11 = multiply(s11, divide(complex(s.re - reflection.re, above(s.im, reflection)), below));
+    s22 = multiply(s22, divide(complex(s.re + reflection.re, above(s.im, reflection)), below));
+    const factor = transmission === undefined ? complex(1, 0) : complex(s.re - transmission.re, s.im - transmission.im);
+    s21 = multiply(s21, divide(factor, below));
   });
   return { s11, s21, s12: s21, s22 };
 }
@@ -30,10 +30,13 @@ export function scatteringOfPolynomials(polynomials: FilterPolynomials, s: Compl
  */
 export function delayOfPolynomials(polynomials: FilterPolynomials, omega: number, loss: number): number {
   let delay = 0;
-  for (const pole of polynomials.poles) delay += realOfInverse(loss - pole.re, omega - pole.im);
+  for (const pole of polynomials.poles) delay += realOfInverse(loss - pole.re, above(omega, pole));
   if (loss === 0) return delay;
   for (const zero of polynomials.transmissionZeros) delay -= realOfInverse(loss - zero.re, omega - zero.im);
   return delay;
 }
+
+/** How far a frequency lies above a root, with the root's rest. */
+const above = (omega: number, { im, imRest = 0 }: FineRoot): number => omega - im - imRest;
 
 const realOfInverse = (re: number, im: number): number => re / (re * re + im * im);

@@ -1,10 +1,10 @@
-import type { FilterPolynomials } from '../forms/index.js';
+import type { FilterPolynomials, FineRoot } from '../forms/index.js';
 import { type Complex, complex, divide, FilterFailure, magnitude, multiply, scale } from '../numerics/index.js';
 
 /** The poles of the two modes of a two-port with S11 = S22: `even` belongs to S11 + S21, `odd` to S11 - S21. */
 export interface Modes {
-  readonly even: readonly Complex[];
-  readonly odd: readonly Complex[];
+  readonly even: readonly FineRoot[];
+  readonly odd: readonly FineRoot[];
 }
 
 /**
@@ -17,8 +17,8 @@ export interface Modes {
  * @throws FilterFailure E_NOT_SYMMETRIC_RESPONSE
  */
 export function modesOf(polynomials: FilterPolynomials): Modes {
-  const even: Complex[] = [];
-  const odd: Complex[] = [];
+  const even: FineRoot[] = [];
+  const odd: FineRoot[] = [];
   polynomials.poles.forEach((pole, index) => {
     const ratio = ratioAt(polynomials, pole);
     const toEven = magnitude(complex(ratio.re - 1, ratio.im));

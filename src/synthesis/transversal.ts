@@ -52,12 +52,10 @@ function branchesOf(poles: FilterPolynomials['poles'], angle: number, parity: 1 
   });
 }
 
-/** True when the response is exactly symmetric about omega = 0: each pole has its conjugate as its mirror partner. */
+/** True when the response is exactly symmetric about omega = 0: with each pole its conjugate is in the list. */
 function isMirrored({ poles }: FilterPolynomials): boolean {
-  return poles.every((pole, n) => {
-    const partner = poles[poles.length - 1 - n];
-    return partner !== undefined && partner.re === pole.re && partner.im === -pole.im;
-  });
+  const listed = new Set(poles.map(({ re, im }) => `${re},${im + 0}`));
+  return poles.every(({ re, im }) => listed.has(`${re},${-im + 0}`));
 }
 
 /** Averages mirror partners, so that a symmetric response gives exactly opposite diagonal entries and equal couplings. */

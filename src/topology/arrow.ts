@@ -30,15 +30,14 @@ export function arrow(matrix: CouplingMatrix): Reduced {
   const { order } = matrix;
   const chased = reduce(start.matrix, {
     steps: arrowSteps(order),
-    refined: false,
+    precision: 'doubled',
     structuralZeros: (finiteZeros) =>
       Array.from({ length: order }, (_, k) => [k, order + 1] as const).filter(([k]) => k < order - finiteZeros),
     positive: Array.from({ length: order }, (_, n) => ({ entry: [n, n + 1] as const, by: n + 1 })),
   });
-  const turned = chased.rotations.filter(({ angle, flip }) => angle !== 0 || flip !== undefined);
   return {
     matrix: chased.matrix,
-    rotations: [...start.rotations, ...turned],
+    rotations: [...start.rotations, ...chased.rotations],
     leftover: Math.max(start.leftover, chased.leftover),
   };
 }

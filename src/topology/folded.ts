@@ -26,7 +26,7 @@ export function folded(matrix: CouplingMatrix): Reduced {
   const order = matrix?.order;
   return reduce(matrix, {
     steps: foldedSteps(order),
-    refined: true,
+    precision: 'corrected',
     structuralZeros: (finiteZeros) => crossEntries(order).filter((_, resonators) => resonators < order - finiteZeros),
     positive: Array.from({ length: order }, (_, n) => ({ entry: [order - n, order - n + 1] as const, by: order - n })),
   });

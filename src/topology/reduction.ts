@@ -1,5 +1,6 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
 import { annihilationAngle, clear } from './annihilate.js';
+import { eliminateDoubled } from './doubled-elimination.js';
 import { matrixFrom, normOf, type Rows, rowsOf } from './matrix-shape.js';
 import { refine } from './refine.js';
 import { flip } from './rotate.js';
@@ -17,8 +18,11 @@ export interface EliminationStep {
 /** What distinguishes one fixed form from another. */
 export interface ReductionPlan {
   readonly steps: readonly EliminationStep[];
-  /** Whether rounding is corrected afterwards; not where the elimination itself keeps structural zeros that a correction would fill. */
-  readonly refined: boolean;
+  /**
+   * How rounding is kept out: `corrected` = eliminate in doubles and remove the error afterwards (many rotations);
+   * `doubled` = eliminate in doubled precision (few rotations, and zeros that a correction would fill).
+   */
+  readonly precision: 'corrected' | 'doubled';
   /** Entries that vanish because the response has few finite zeros, outermost first. */
   readonly structuralZeros: (finiteZeros: number) => readonly (readonly [number, number])[];
   /** Couplings that the choice of resonator signs makes non-negative, each with the resonator whose sign decides it, in order. */
@@ -33,13 +37,12 @@ export interface Reduced {
 }
 
 /**
- * Runs an elimination in doubles, corrects its rounding with sums of doubled precision, clears the structural zeros and
- * chooses the resonator signs.
+ * Runs an elimination without letting its rounding into the result, clears the structural zeros and chooses the resonator
+ * signs.
  */
 export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
   const original = rowsOf(matrix);
-  const { rows, basis, rotations } = eliminate(original, plan.steps);
-  const exact = (plan.refined ? refine(original, basis, plan.steps) : undefined) ?? rows;
+  const { rows: exact, rotations } = plan.precision === 'doubled' ? eliminateDoubled(original, plan.steps) : eliminateCorrected(original, plan.steps);
   const leftover = clearStructure(exact, plan, matrix.finiteZeros);
   clearSynchronous(exact);
   const flips = normalSigns(exact, plan);
@@ -47,7 +50,7 @@ export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
   return { matrix: matrixFrom(exact, matrix.finiteZeros), rotations, leftover };
 }
 
-function eliminate(original: Rows, steps: readonly EliminationStep[]): { rows: Rows; basis: Rows; rotations: Rotation[] } {
+function eliminateCorrected(original: Rows, steps: readonly EliminationStep[]): { rows: Rows; rotations: Rotation[] } {
   const rows = original.map((row) => Float64Array.from(row));
   const basis = original.map((_, i) => Float64Array.from({ length: original.length }, (__, j) => (i === j ? 1 : 0)));
   const rotations = steps.map(({ element, pivot }) => {
@@ -56,7 +59,7 @@ function eliminate(original: Rows, steps: readonly EliminationStep[]): { rows: R
     turnBasis(basis, pivot, rotation.angle);
     return rotation;
   });
-  return { rows, basis, rotations };
+  return { rows: refine(original, basis, steps) ?? rows, rotations };
 }
 
 /** `Q <- R Q`: row i of the basis holds the new resonator i in terms of the old ones. */
