@@ -31,7 +31,7 @@ export function checkArguments(
   }
 }
 
-function checkMatrix(name: string, matrix: CouplingMatrix, order: number): void {
+export function checkMatrix(name: string, matrix: CouplingMatrix, order: number): void {
   checkObject(name, matrix);
   const { values } = matrix;
   const size = order + 2;
@@ -78,9 +78,11 @@ function checkObject(name: string, value: unknown): void {
 
 function refuse(code: string, argument: string, value: unknown, allowed: string): never {
   const found = typeof value === 'object' && value !== null ? 'an object' : String(value).slice(0, 40);
-  throw new FilterFailure(code, `${argument}: found ${found}; allowed: ${allowed}`, {
+  const hint = 'pass the objects as synthesis returned them';
+  throw new FilterFailure(code, `${code} ${argument}: found ${found}; allowed ${allowed}; do ${hint}`, {
     argument,
     value,
     limit: allowed,
+    hint,
   });
 }

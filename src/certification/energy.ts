@@ -8,8 +8,8 @@ import { atMost, EPSILON } from './verdict.js';
 /** C1: a millionth of the smallest ripple anybody specifies (|S11|^2 at 30 dB), and what the comparison of C6 needs. */
 const MATRIX_LIMIT = 1e-9;
 
-/** C2: the defect is at most twice the error of |S|, so the limit that C6 sets for S; near a band edge only the units of rounding tell more. */
-const POLYNOMIAL_LIMIT = 1e-9;
+/** C2: the defect is at most twice the error of |S|; a tenth of the limit that C6 sets for S leaves that its room. */
+const POLYNOMIAL_LIMIT = 1e-10;
 
 /** C2 in units of rounding: exact roots, rounded, stay below 1; 30 leaves a few units in the last place for finding each root. */
 const ROUNDING_LIMIT = 30;

@@ -1,4 +1,4 @@
-import type { Certificate, FilterPolynomials } from '../forms/index.js';
+import type { Certificate, FilterPolynomials, FineRoot } from '../forms/index.js';
 import { atMost, exactly } from './verdict.js';
 
 /** C4: ripple levels are stated to 1e-6 dB at most; a hundredth of that. */
@@ -62,6 +62,12 @@ function highest(polynomials: FilterPolynomials, from: number, to: number): numb
   return (left + right) / 2;
 }
 
+/** Squared distance of `j*omega` from a root, with the part of the root beyond a double. */
+function squaredDistance({ re, im, imRest = 0 }: FineRoot, omega: number): number {
+  const above = omega - im - imRest;
+  return re * re + above * above;
+}
+
 /** |S11| at real omega, factor by factor. */
 function reflection(polynomials: FilterPolynomials, omega: number): number {
   const { poles, reflectionZeros, epsilonR } = polynomials;
@@ -69,8 +75,8 @@ function reflection(polynomials: FilterPolynomials, omega: number): number {
   for (let k = 0; k < Math.max(poles.length, reflectionZeros.length); k++) {
     const f = reflectionZeros[k];
     const p = poles[k];
-    if (f !== undefined) square *= f.re * f.re + (omega - f.im) * (omega - f.im);
-    if (p !== undefined) square /= p.re * p.re + (omega - p.im) * (omega - p.im);
+    if (f !== undefined) square *= squaredDistance(f, omega);
+    if (p !== undefined) square /= squaredDistance(p, omega);
   }
   return Math.sqrt(square) / Math.abs(epsilonR);
 }

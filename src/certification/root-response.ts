@@ -1,4 +1,4 @@
-import type { Complex, FilterPolynomials } from '../forms/index.js';
+import type { Complex, FilterPolynomials, FineRoot } from '../forms/index.js';
 import { cell } from './elimination.js';
 import { emptySeries, type Response } from './series.js';
 
@@ -23,7 +23,7 @@ export interface RootResponse extends Response {
 export function rootResponse(polynomials: FilterPolynomials, omega: Float64Array): RootResponse {
   const poles = split(polynomials.poles);
   const reflection = split(polynomials.reflectionZeros);
-  const mirrored = split(polynomials.reflectionZeros.map((f) => ({ re: -f.re, im: f.im })));
+  const mirrored = split(polynomials.reflectionZeros.map((f) => ({ ...f, re: -f.re })));
   const transmission = split(polynomials.transmissionZeros);
   const lead = polynomials.transmissionLead;
   const gain = { re: lead.re / polynomials.epsilon, im: lead.im / polynomials.epsilon };
@@ -44,10 +44,15 @@ export function rootResponse(polynomials: FilterPolynomials, omega: Float64Array
 interface SplitRoots {
   readonly re: Float64Array;
   readonly im: Float64Array;
+  readonly imRest: Float64Array;
 }
 
-function split(roots: readonly Complex[]): SplitRoots {
-  return { re: Float64Array.from(roots, (r) => r.re), im: Float64Array.from(roots, (r) => r.im) };
+function split(roots: readonly FineRoot[]): SplitRoots {
+  return {
+    re: Float64Array.from(roots, (r) => r.re),
+    im: Float64Array.from(roots, (r) => r.im),
+    imRest: Float64Array.from(roots, (r) => r.imRest ?? 0),
+  };
 }
 
 /** `lead * prod(s - zeros)/prod(s - poles)`: a zero is paired with a pole, so that no partial product overflows at the orders in use. */
@@ -60,11 +65,11 @@ function quotients(zeros: SplitRoots, poles: SplitRoots, lead: Complex, omega: F
     let { re, im } = lead;
     for (let k = 0; k < count; k++) {
       if (k < zeroCount) {
-        const [x, y] = [-cell(zeros.re, k), w - cell(zeros.im, k)];
+        const [x, y] = [-cell(zeros.re, k), w - cell(zeros.im, k) - cell(zeros.imRest, k)];
         [re, im] = [re * x - im * y, re * y + im * x];
       }
       if (k < poleCount) {
-        const [x, y] = [-cell(poles.re, k), w - cell(poles.im, k)];
+        const [x, y] = [-cell(poles.re, k), w - cell(poles.im, k) - cell(poles.imRest, k)];
         const norm = x * x + y * y;
         [re, im] = [(re * x + im * y) / norm, (im * x - re * y) / norm];
       }

@@ -1,4 +1,4 @@
-import type { Certificate, Complex, FilterPolynomials } from '../forms/index.js';
+import type { Certificate, Complex, FilterPolynomials, FineRoot } from '../forms/index.js';
 import { atMost, EPSILON, exactly } from './verdict.js';
 
 /**
@@ -65,7 +65,7 @@ function signed(degree: number, size: number): number {
 }
 
 /** `prod_k (z - r_k)(z + conj r_k)` at z = pole i, over the product of its distances to all other poles and mirrored poles. */
-function overGaps(poles: readonly Complex[], i: number, roots: readonly Complex[]): Complex {
+function overGaps(poles: readonly FineRoot[], i: number, roots: readonly FineRoot[]): Complex {
   const z = poles[i] ?? { re: Number.NaN, im: Number.NaN };
   let value: Complex = { re: 1, im: 0 };
   for (let k = 0; k < Math.max(poles.length, roots.length); k++) {
@@ -78,12 +78,12 @@ function overGaps(poles: readonly Complex[], i: number, roots: readonly Complex[
   return value;
 }
 
-function minus(z: Complex, r: Complex): Complex {
-  return { re: z.re - r.re, im: z.im - r.im };
+function minus(z: FineRoot, r: FineRoot): Complex {
+  return { re: z.re - r.re, im: z.im - r.im + ((z.imRest ?? 0) - (r.imRest ?? 0)) };
 }
 
-function plusMirror(z: Complex, r: Complex): Complex {
-  return { re: z.re + r.re, im: z.im - r.im };
+function plusMirror(z: FineRoot, r: FineRoot): Complex {
+  return { re: z.re + r.re, im: z.im - r.im + ((z.imRest ?? 0) - (r.imRest ?? 0)) };
 }
 
 function product(a: Complex, b: Complex): Complex {
