@@ -2,10 +2,10 @@ import { butterworth, coefficients, generalizedChebyshev, type PolynomialCoeffic
 import { denormalize, evaluateMask, type HandOver } from './bandpass/index.js';
 import { certify } from './certification/index.js';
 import { type Certificate, type CouplingMatrix, type FilterPolynomials, type MaskRow, type Rotation } from './forms/index.js';
-import { FilterFailure } from './numerics/index.js';
 import { checkSpecification, type Specification, type SpecificationInput } from './specification/index.js';
 import { transversal } from './synthesis/index.js';
 import { arrow, folded, type Reduced } from './topology/index.js';
+import { refuseUncertified } from './refusal.js';
 import { VERSION } from './version.js';
 
 /** A finished, certified design: everything that is handed over but the sampled response. */
@@ -46,16 +46,9 @@ export function design(specification: SpecificationInput): Design {
 
 /** The flow itself, for a specification that has been checked. */
 export function designChecked(specification: Specification): Design {
-  const polynomials = approximate(specification);
-  const start = transversal(polynomials);
-  const { matrix, rotations, leftover } = shape(start, specification.topology);
-  const certificates = certify(polynomials, matrix, {
-    before: start,
-    leftover,
-    structure: specification.topology,
-    askedZeros: specification.transmissionZeros,
-  });
-  refuseUncertified(certificates);
+  const { polynomials, start, reduced, certificates } = synthesize(specification);
+  const { matrix, rotations } = reduced;
+  refuseUncertified(certificates, specification, (tried) => synthesize(tried).certificates);
   const { band, unloadedQ } = specification;
   return {
     version: VERSION,
@@ -71,6 +64,20 @@ export function designChecked(specification: Specification): Design {
   };
 }
 
+/** Transfer function, matrices and certificates, whether these hold or not. */
+function synthesize(specification: Specification): { polynomials: FilterPolynomials; start: CouplingMatrix; reduced: Reduced; certificates: readonly Certificate[] } {
+  const polynomials = approximate(specification);
+  const start = transversal(polynomials);
+  const reduced = shape(start, specification.topology);
+  const certificates = certify(polynomials, reduced.matrix, {
+    before: start,
+    leftover: reduced.leftover,
+    structure: specification.topology,
+    askedZeros: specification.transmissionZeros,
+  });
+  return { polynomials, start, reduced, certificates };
+}
+
 function approximate({ family, order, returnLossDb, transmissionZeros }: Specification): FilterPolynomials {
   if (family === 'butterworth') return butterworth({ order });
   return generalizedChebyshev({ order, returnLossDb: returnLossDb as number, transmissionZeros });
@@ -81,15 +88,4 @@ function shape(start: CouplingMatrix, topology: Specification['topology']): Redu
   if (topology === 'transversal') return { matrix: start, rotations: [], leftover: 0 };
   // Without finite zeros the folded form has no coupling across: it is the in-line form.
   return folded(start);
-}
-
-function refuseUncertified(certificates: readonly Certificate[]): void {
-  const failed = certificates.filter(({ holds }) => !holds);
-  if (failed.length === 0) return;
-  const faults = failed.map(
-    ({ check, value, limit }) =>
-      new FilterFailure('E_CERT', `E_CERT ${check}: found ${value.toPrecision(3)}; allowed ${limit.toPrecision(3)}; do move the transmission zeros away from the band edge, or lower the order`, { argument: check, value, limit, hint: 'move the transmission zeros away from the band edge, or lower the order' }),
-  );
-  const [first] = faults as [FilterFailure];
-  throw new FilterFailure('E_CERT', faults.map(({ message }) => message).join('\n'), { argument: first.argument ?? '', value: first.value, limit: first.limit, hint: first.hint ?? '', faults });
 }

@@ -25,6 +25,10 @@ const ACCEPTED = 4;
  * Sources: O. Aberth, Iteration methods for finding all zeros of a polynomial simultaneously, Math. Comp. 27, 1973;
  * starts on circles from the convex hull of the coefficients as in D. A. Bini, Numerical computation of polynomial zeros by
  * means of Aberth's method, Numer. Algorithms 13, 1996 (both from memory).
+ *
+ * @example
+ * const roots = polynomialRoots([{ re: 2, im: 0 }, { re: 3, im: 0 }, { re: 1, im: 0 }]);
+ * Math.min(...roots.map((root) => root.re)); // -2
  */
 export function polynomialRoots(coefficients: readonly Complex[]): readonly PolynomialRoot[] {
   const ascending = checked(coefficients);
