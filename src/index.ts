@@ -35,6 +35,8 @@ export type {
   Span,
 } from './forms/index.js';
 export { bandFromEdges, edgesOfBand, hzFromOmega, omegaFromHz } from './forms/index.js';
+export type { NumberList, ReImSamples, TwoPortData } from './measurement/index.js';
+export { formatTouchstone } from './measurement/index.js';
 export type { FailureDetail, PolynomialRoot } from './numerics/index.js';
 export { FilterFailure, polynomialRoots } from './numerics/index.js';
 export type { ComplexSamples, Curves, Model, Sweep, SweepOptions } from './response/index.js';

@@ -19,7 +19,7 @@ const FAR: readonly number[] = [3, 10, 100, 1000];
  * certifyMatrix({ order: 1, values: [[0, half, 0], [half, 0, half], [0, half, 0]] }).length; // 3
  */
 export function certifyMatrix(matrix: CouplingMatrix): Certificate[] {
-  checkMatrix("matrix", matrix, matrix?.order);
+  checkMatrix('matrix', matrix, matrix?.order);
   const rowSum = (row: readonly number[]): number => row.reduce((sum, value) => sum + Math.abs(value), 0);
   const reach = Math.max(1, ...matrix.values.map(rowSum));
   const near = Array.from({ length: POINTS }, (_, k) => reach * Math.cos((Math.PI * k) / (POINTS - 1)));

@@ -6,11 +6,14 @@
  *  Source   T. Bray (ed.), RFC 8259, 2017 (JSON); F. Yergeau, RFC 3629, 2003 (UTF-8) */
 export { checkSpecification } from './check.js';
 export { checkBand, checkMask, checkUnloadedQ } from './doors.js';
-export type { Path, Position } from './faults.js';
+export { echo, escapeText } from './echo.js';
+export type { Fault, Locate, Path, Position } from './faults.js';
+export { failureOf, kindFault, pathText, refuseAny } from './faults.js';
 export type { JsonValue } from './json/places.js';
 export type { JsonText } from './json/reader.js';
 export { readJson } from './json/reader.js';
 export { decodeUtf8 } from './json/utf8.js';
+export { nearestKey } from './nearest-key.js';
 export { checkOrder, checkReturnLoss } from './order-and-level.js';
 export { parseSpecification } from './parse.js';
 export { specificationJsonSchema } from './schema.js';

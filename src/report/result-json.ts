@@ -1,0 +1,18 @@
+import { CONVENTIONS } from './conventions.js';
+import type { DesignReport } from './design-report.js';
+import { jsonText } from './json-text.js';
+
+/** The design file that a result came from: its path relative to the folder of the result, and its SHA-256 digest. */
+export interface DesignSource {
+  readonly file: string;
+  readonly sha256: string;
+}
+
+/**
+ * A whole design as JSON text: everything `design` returned, with every digit, its version and its source first. No clock
+ * and no absolute path is in it: the same design file gives the same bytes.
+ */
+export function resultJson(design: DesignReport, source: DesignSource): string {
+  const { version, ...rest } = design;
+  return `${jsonText({ version, source, conventions: CONVENTIONS, ...rest })}\n`;
+}
