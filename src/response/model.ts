@@ -14,12 +14,18 @@ export function argumentFailure(code: string, argument: string, value: unknown, 
   return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, { argument, value, limit, hint });
 }
 
-/** @throws FilterFailure E_TYPE, E_NOT_FINITE */
+/** A copy of a grid, checked. @throws FilterFailure E_TYPE, E_NOT_FINITE */
 export function checkFrequencies(omega: ArrayLike<number>, name: string): Float64Array {
   if (omega === null || typeof omega !== 'object' || !Number.isInteger(omega.length)) {
     throw argumentFailure('E_TYPE', name, omega, 'an array of numbers', 'give an array, also for one frequency');
   }
-  return Float64Array.from({ length: omega.length }, (_, n) => checkFrequency(omega[n], `${name}[${n}]`));
+  const grid = new Float64Array(omega.length);
+  for (let n = 0; n < grid.length; n++) {
+    const value = omega[n];
+    // The name of the entry is spelled out only for a faulty one: this loop is part of every sweep.
+    grid[n] = typeof value === 'number' && Number.isFinite(value) ? value : checkFrequency(value, `${name}[${n}]`);
+  }
+  return grid;
 }
 
 /** @throws FilterFailure E_TYPE, E_NOT_FINITE */
