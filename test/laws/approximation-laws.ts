@@ -22,6 +22,7 @@ import {
   requests,
   roomOf,
   symmetricRequests,
+  uniform,
   zeroRequests,
 } from './specs.js';
 
@@ -242,7 +243,7 @@ export const approximationLaws: readonly Law[] = [
   ),
   law(
     'a zero at 1e4 acts like a zero at infinity, phase included',
-    fc.tuple(requests(12), fc.constantFrom(-1e4, 1e4), fc.double({ min: -1, max: 1, noNaN: true })),
+    fc.tuple(requests(12), fc.constantFrom(-1e4, 1e4), uniform(-1, 1)),
     (engine, [request, far, omega]) => {
       if (request.transmissionZeros.length + 1 >= request.order) return;
       const near = engine.generalizedChebyshev(request);
@@ -279,7 +280,7 @@ export const approximationLaws: readonly Law[] = [
   ),
   law(
     'more return loss gives more S21 at every frequency: less ripple, less rejection',
-    fc.tuple(requests(), frequency, fc.double({ min: 0.1, max: 10, noNaN: true })),
+    fc.tuple(requests(), frequency, uniform(0.1, 10)),
     (engine, [request, omega, more]) => {
       const less = size(engine.scatteringAt(engine.generalizedChebyshev(request), omega).s21);
       const p = engine.generalizedChebyshev({ ...request, returnLossDb: request.returnLossDb + more });
@@ -354,7 +355,7 @@ export const approximationLaws: readonly Law[] = [
       const check = (list: readonly Complex[], roots: readonly Complex[], lead: Complex, name: string): void => {
         const { value, sizes } = sum(list);
         must(list.length === roots.length + 1, `${name} degree`);
-        within(distance(value, product(roots, lead)), 30 * (request.order + 1) * EPS * sizes, name);
+        within(distance(value, product(roots, lead)), 30 * (request.order + 1) * EPS * sizes + 1e-300, name);
       };
       check(e, p.poles, { re: 1, im: 0 }, 'E');
       check(f, p.reflectionZeros, { re: 1, im: 0 }, 'F');
@@ -385,10 +386,7 @@ export const approximationLaws: readonly Law[] = [
   ),
   law(
     'Butterworth has half power at omega = +-1 and |S21|^2 = 1/(1 + w^2N) elsewhere',
-    fc.tuple(
-      fc.integer({ min: 1, max: 60 }),
-      fc.oneof(fc.constantFrom(-1, 1), fc.double({ min: -1.5, max: 1.5, noNaN: true })),
-    ),
+    fc.tuple(fc.integer({ min: 1, max: 60 }), fc.oneof(fc.constantFrom(-1, 1), uniform(-1.5, 1.5))),
     (engine, [order, omega]) => {
       const { s21 } = engine.scatteringAt(engine.butterworth({ order }), omega);
       within(Math.abs(size(s21) * Math.sqrt(1 + omega ** (2 * order)) - 1), 30 * order * EPS, 'S21');

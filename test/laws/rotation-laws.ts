@@ -5,7 +5,7 @@ import { denseRotation, distance, entry, isSymmetric, matrixGap, normOf, withEnt
 import type { Engine } from './engine.js';
 import { type Fault, inRotation, ofRotation } from './faults.js';
 import { type Law, law, must, within } from './law.js';
-import { chains, frequency, matrices } from './specs.js';
+import { chains, frequency, matrices, uniform } from './specs.js';
 
 /** Traces of powers of the resonator block, squares of the port rows, and Markov numbers m_S B^k m_L. */
 function invariants(matrix: CouplingMatrix): number[] {
@@ -130,7 +130,7 @@ export const rotationLaws: readonly Law[] = [
   ),
   law(
     'two rotations of one pivot add their angles',
-    fc.tuple(matrices(2, 7), chains, fc.double({ min: -3, max: 3, noNaN: true })),
+    fc.tuple(matrices(2, 7), chains, uniform(-3, 3)),
     (engine, [matrix, chain, more]) => {
       const { pivot, angle } = chain(matrix.order)[0]!;
       const two = engine.rotate(engine.rotate(matrix, { pivot, angle }), { pivot, angle: more });
@@ -148,7 +148,7 @@ export const rotationLaws: readonly Law[] = [
   ),
   law(
     'rotations of pivots without a common node commute',
-    fc.tuple(matrices(4, 7), fc.double({ min: -3, max: 3, noNaN: true }), fc.double({ min: -3, max: 3, noNaN: true })),
+    fc.tuple(matrices(4, 7), uniform(-3, 3), uniform(-3, 3)),
     (engine, [matrix, a, b]) => {
       const one: Rotation = { pivot: [1, 3], angle: a };
       const two: Rotation = { pivot: [4, 2], angle: b };
