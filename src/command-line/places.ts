@@ -50,8 +50,16 @@ export function locating<Result>(
 
 const FAULT_LIMIT = 20;
 
+/** Leaves out a missing key where an unknown one was meant as it. */
+function withoutMisspelled(faults: readonly FilterFailure[]): readonly FilterFailure[] {
+  const meant = faults.filter(({ code }) => code === 'E_UNKNOWN_KEY').map(({ limit }) => limit);
+  const nameOf = ({ argument = '' }: FilterFailure): string | undefined => argument.split('.').at(-1);
+  return faults.filter((fault) => fault.code !== 'E_MISSING' || !meant.includes(nameOf(fault)));
+}
+
 /** Throws one refusal for all faults, or returns when there are none. */
-export function refuseAll(faults: readonly FilterFailure[]): void {
+export function refuseAll(all: readonly FilterFailure[]): void {
+  const faults = withoutMisspelled(all);
   const [first, second] = faults;
   if (first === undefined) return;
   if (second === undefined) throw first;

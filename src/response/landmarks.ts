@@ -1,5 +1,5 @@
 import type { CouplingMatrix } from '../forms/index.js';
-import { type Complex, generalEigenvalues } from '../numerics/index.js';
+import { type Complex, complexEigenvalues } from '../numerics/index.js';
 import { rowsOf } from '../topology/index.js';
 import { isMatrix, type Model } from './model.js';
 
@@ -16,35 +16,28 @@ export interface Landmark {
  * `loss` moves every root away from the axis by that much.
  */
 export function landmarks(model: Model, loss: number | readonly number[]): readonly Landmark[] {
-  if (isMatrix(model)) return matrixLandmarks(model, typeof loss === 'number' ? new Array<number>(model.order).fill(loss) : loss);
+  if (isMatrix(model))
+    return matrixLandmarks(model, typeof loss === 'number' ? new Array<number>(model.order).fill(loss) : loss);
   const shift = typeof loss === 'number' ? loss : 0;
   const roots = [...model.poles, ...model.reflectionZeros, ...model.transmissionZeros];
   return roots.map((root) => ({ omega: root.im, halfWidth: Math.abs(root.re) + shift }));
 }
 
-/**
- * `det(omega*I + K) = 0` with `K = M_rr - j*loss - m (M_pp - j)^-1 m^T`; K is complex, so its eigenvalues come from the real
- * matrix of twice the size, which has them and their conjugates.
- */
+/** `det(omega*I + K) = 0` with the complex `K = M_rr - j*loss - m (M_pp - j)^-1 m^T`: omega = minus its eigenvalues. */
 function matrixLandmarks(matrix: CouplingMatrix, loss: readonly number[]): readonly Landmark[] {
   const rows = rowsOf(matrix);
   const { order } = matrix;
   const port = portInverse(rows);
   const value = (i: number, j: number): number => rows[i]?.[j] as number;
-  const entry = (i: number, j: number, part: 're' | 'im'): number => {
+  const loaded = (i: number, j: number, part: 're' | 'im'): number => {
     const [si, li, sj, lj] = [value(0, i), value(order + 1, i), value(0, j), value(order + 1, j)];
-    const loaded = si * sj * port.ss[part] + (si * lj + li * sj) * port.sl[part] + li * lj * port.ll[part];
-    if (part === 're') return value(i, j) - loaded;
-    return (i === j ? -(loss[i - 1] as number) : 0) - loaded;
+    return si * sj * port.ss[part] + (si * lj + li * sj) * port.sl[part] + li * lj * port.ll[part];
   };
-  const doubled = Array.from({ length: 2 * order }, (_, i) =>
-    Array.from({ length: 2 * order }, (__, j) => {
-      const at = [(i % order) + 1, (j % order) + 1] as const;
-      if (i < order === j < order) return entry(...at, 're');
-      return i < order ? -entry(...at, 'im') : entry(...at, 'im');
-    }),
-  );
-  return generalEigenvalues(doubled).map(({ re, im }) => ({ omega: -re, halfWidth: Math.abs(im) }));
+  const block = (entry: (i: number, j: number) => number): Float64Array[] =>
+    Array.from({ length: order }, (_, i) => Float64Array.from({ length: order }, (__, j) => entry(i + 1, j + 1)));
+  const re = block((i, j) => value(i, j) - loaded(i, j, 're'));
+  const im = block((i, j) => (i === j ? -(loss[i - 1] as number) : 0) - loaded(i, j, 'im'));
+  return complexEigenvalues({ re, im }).map((root) => ({ omega: -root.re, halfWidth: Math.abs(root.im) }));
 }
 
 /** `(M_pp - j)^-1`, M_pp the 2 x 2 of source and load. */
