@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { relative, resolve } from 'node:path';
+import { resolve } from 'node:path';
 import { designChecked } from '../design.js';
 import { handOverCsv, matrixCsv, responseText, resultJson, summaryText } from '../report/index.js';
 import { decodeUtf8, parseSpecification } from '../specification/index.js';
@@ -77,8 +77,7 @@ export async function designCommand(words: CommandWords, world: World): Promise<
   } catch (error) {
     throw ioFailure(error, wanted, 'writing the results');
   }
-  const shown = relative(world.folder, resolve(world.folder, wanted)) || '.';
   const names = NAMES.map((name) => `  ${name}`).join('\n');
-  world.stdout.write(`${results.summary}\nWritten to ${shownPath(shown)}:\n${names}\n`);
+  world.stdout.write(`${results.summary}\nWritten to ${shownPath(wanted)}:\n${names}\n`);
   return EXIT.done;
 }

@@ -2,13 +2,14 @@
 import * as files from 'node:fs/promises';
 import pc from 'picocolors';
 import { PLAIN } from '../report/index.js';
+import { EXIT } from './failures.js';
 import { run } from './run.js';
 import type { TextSink } from './world.js';
 
 function sink(stream: NodeJS.WriteStream): TextSink {
-  // A reader that has seen enough closes the pipe: not our trouble.
-  stream.on('error', (error: NodeJS.ErrnoException) => {
-    if (error.code !== 'EPIPE') throw error;
+  stream.on('error', ({ code }: NodeJS.ErrnoException) => {
+    // A reader that has seen enough closes the pipe: not our trouble. A full disk is trouble with a file.
+    if (code !== 'EPIPE') process.exit(EXIT.file);
   });
   return { write: (text) => stream.write(text), isTerminal: stream.isTTY === true };
 }

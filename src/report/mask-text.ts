@@ -2,7 +2,7 @@ import type { MaskRow } from '../forms/index.js';
 import { table, wrapped } from './layout.js';
 import { type FrequencyUnit, fixed, trimmed } from './numbers.js';
 import type { Paint } from './paint.js';
-import { clearanceText, placeText, type Requirement, requirementOf } from './requirement.js';
+import { clearanceText, placeText, RELATIVE, type Requirement, requirementOf } from './requirement.js';
 
 /** Rows shown at most; with more, the tightest are. */
 const ROWS = 20;
@@ -25,15 +25,18 @@ export function verdictLines(rows: readonly MaskRow[], unit: FrequencyUnit, pain
   const worst = tightest(requirements);
   if (worst === undefined) return [paint.strong('No mask was given: there is no requirement to meet or miss.')];
   const missed = requirements.filter(({ isMet }) => !isMet).length;
-  const share = `${trimmed(Math.abs(100 * worst.share), 0)} % of the limit`;
-  const room = `${worst.isMet ? 'clear' : 'short'} by ${clearanceText(worst.margin)} ${worst.unit} (${share})`;
-  const place = `${worst.name} ${placeText(worst, unit)}, ${room}`;
+  const percent = Math.round(Math.abs(100 * worst.share));
+  const share = percent > 100 || percent === 0 ? '' : ` (${percent} % of the limit)`;
+  const room = `${worst.isMet ? 'clear' : 'short'} by ${clearanceText(worst.margin)} ${worst.unit}${share}`;
+  const relative = worst.name.endsWith(RELATIVE) ? ' relative to the center' : '';
+  const place = `${worst.name.replace(RELATIVE, '')}${relative} ${placeText(worst, unit)}, ${room}`;
   const at =
     worst.at === 'far above' ? 'far above the band' : `at ${trimmed(Number(worst.at), unit.digits)} ${unit.name}`;
   const where = at.split(' ')[1] === worst.span ? '' : ` ${at}`;
   const total = requirements.length;
   const all = total === 1 ? 'the only requirement' : `all ${counted(total)}`;
-  const answer = missed === 0 ? `Meets ${all}` : `Short of ${missed} of ${counted(total)}`;
+  const some = missed === total ? all : `${missed} of ${counted(total)}`;
+  const answer = missed === 0 ? `Meets ${all}` : `Short of ${some}`;
   const mark = missed === 0 ? paint.strong : paint.alarm;
   const label = missed === 0 ? 'Least room' : 'Farthest off';
   return wrapped(`${answer}. ${label}: ${place}${where}.`).map(mark);
@@ -65,5 +68,7 @@ export function maskTable(rows: readonly MaskRow[], unit: FrequencyUnit, paint: 
   });
   const hidden = requirements.length - shown.length;
   const more = hidden === 0 ? [] : [`(${counted(hidden)} with more room not shown; all are in result.json)`];
-  return [paint.dim(headLine), ...marked, ...more];
+  const isRelative = shown.some(({ name }) => name.endsWith(RELATIVE));
+  const note = isRelative ? [paint.dim(`${RELATIVE} relative to the loss at the center`)] : [];
+  return [paint.dim(headLine), ...marked, ...more, ...note];
 }

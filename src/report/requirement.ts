@@ -9,6 +9,9 @@ const ROUNDING = 1e-8;
 
 const NANO = 1e9;
 
+/** Marks the name of a requirement whose levels are relative to the loss at the center. */
+export const RELATIVE = '*';
+
 interface Kind {
   readonly name: string;
   readonly unit: 'dB' | 'ns';
@@ -38,7 +41,7 @@ export interface Requirement {
 
 function kindOf(line: MaskLine): Kind {
   const found = KINDS.find(([key]) => key in line)?.[1] ?? { name: 'requirement', unit: 'dB' };
-  return line.relativeTo === 'center' ? { ...found, name: `${found.name} re center` } : found;
+  return line.relativeTo === 'center' ? { ...found, name: `${found.name}${RELATIVE}` } : found;
 }
 
 function spanText({ fromHz, toHz }: MaskLine, unit: FrequencyUnit): string {

@@ -1,6 +1,6 @@
 import { basename, dirname, join, relative, resolve, sep } from 'node:path';
 import { FilterFailure } from '../../numerics/index.js';
-import { decodeUtf8, readJson } from '../../specification/index.js';
+import { decodeUtf8 } from '../../specification/index.js';
 import type { FileCalls } from './file-calls.js';
 import { readInput } from './read-input.js';
 import { fileFailure, systemCode } from './trouble.js';
@@ -59,13 +59,15 @@ async function realFolder(files: FileCalls, path: string): Promise<string> {
 async function designBehind(files: FileCalls, folder: string): Promise<string | undefined> {
   try {
     const { bytes } = await readInput(files, folder, RESULT_NAME);
-    const { value } = readJson(decodeUtf8(bytes));
+    // The plain reader: the largest results have more values than an input file may, and only two texts are looked at.
+    const value: unknown = JSON.parse(decodeUtf8(bytes));
     const source: unknown = Reflect.get(Object(value), 'source');
     const file: unknown = Reflect.get(Object(source), 'file');
     const digest: unknown = Reflect.get(Object(source), 'sha256');
     return typeof file === 'string' && typeof digest === 'string' ? resolve(folder, file) : undefined;
   } catch (error) {
-    if (error instanceof FilterFailure) return undefined;
+    const isForeign = error instanceof SyntaxError || (error instanceof FilterFailure && error.code !== 'E_IO');
+    if (isForeign) return undefined;
     throw error;
   }
 }
