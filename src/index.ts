@@ -17,7 +17,7 @@ export type {
 } from './bandpass/index.js';
 export { denormalize, evaluateMask, sweepHz } from './bandpass/index.js';
 export type { CertificationContext } from './certification/index.js';
-export { certify } from './certification/index.js';
+export { certify, certifyMatrix } from './certification/index.js';
 export type { Design } from './design.js';
 export { design } from './design.js';
 export type {

@@ -36,7 +36,7 @@ from make_specs import COUNT, SEED, inputs_digest, make_specs
 
 HERE = os.path.dirname(os.path.abspath(__file__))
 STORE = os.path.normpath(os.path.join(HERE, "..", "..", "fixtures", "reference", "reference.json"))
-VERSION = 1
+VERSION = 2
 SIGNIFICANT = 20
 UNITS = [mpc(1, 0), mpc(0, 1), mpc(-1, 0), mpc(0, -1)]
 

@@ -143,21 +143,21 @@ def return_loss(rng):
     return round_or_keep(rng, 3.0 + 57.0 * rng.random(), 1, 0.6)
 
 
-def frequencies(rng, zeros):
-    """POINTS distinct doubles in [-4, 4], ascending: the edges, up to four axis zeros, and a random mix."""
+def hard_frequencies(rng, zeros):
+    """The edges, up to four axis zeros and 16 points 1e-6 to 1e-1 from the edges: where poles lie close to the axis."""
     points = {-1.0, 1.0}
     for z in zeros:
         if not isinstance(z, dict) and abs(z) <= 4.0 and len(points) < 6:
             points.add(z)
     for _ in range(16):
         points.add(side(rng) * (1.0 + side(rng) * 10.0 ** (-6.0 + 5.0 * rng.random())))
-    for _ in range(26):
-        points.add(-1.1 + 2.2 * rng.random())
-    for _ in range(12):
-        points.add(math.cos(math.pi * rng.random()))
-    while len(points) < POINTS:
-        points.add(-4.0 + 8.0 * rng.random())
     return sorted(points)
+
+
+def frequencies(spec_id):
+    """POINTS doubles in [-4, 4], ascending: one at random in each of POINTS equal cells. A stream of its own."""
+    rng = random.Random(SEED + 7919 * (spec_id + 1))
+    return [-4.0 + 8.0 * (k + rng.random()) / POINTS for k in range(POINTS)]
 
 
 def make_specs(seed=SEED, count=COUNT):
@@ -174,7 +174,7 @@ def make_specs(seed=SEED, count=COUNT):
             "returnLossDb": loss,
             "style": style if zeros else "none",
             "transmissionZeros": zeros,
-            "omega": frequencies(rng, zeros),
+            "omega": frequencies(i) + hard_frequencies(rng, zeros),
         })
     return specs
 
