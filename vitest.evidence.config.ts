@@ -1,5 +1,10 @@
 import { defineConfig } from 'vitest/config';
 
 export default defineConfig({
-  test: { include: ['test/evidence/**/*.test.ts'], testTimeout: 3_600_000, reporters: ['verbose'], fileParallelism: false },
+  test: {
+    include: ['test/evidence/**/*.test.ts'],
+    testTimeout: 3_600_000,
+    reporters: ['verbose'],
+    fileParallelism: false,
+  },
 });

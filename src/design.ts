@@ -1,11 +1,11 @@
 import { butterworth, coefficients, generalizedChebyshev, type PolynomialCoefficients } from './approximation/index.js';
 import { denormalize, evaluateMask, type HandOver } from './bandpass/index.js';
 import { certify } from './certification/index.js';
-import { type Certificate, type CouplingMatrix, type FilterPolynomials, type MaskRow, type Rotation } from './forms/index.js';
+import type { Certificate, CouplingMatrix, FilterPolynomials, MaskRow, Rotation } from './forms/index.js';
+import { refuseUncertified } from './refusal.js';
 import { checkSpecification, type Specification, type SpecificationInput } from './specification/index.js';
 import { transversal } from './synthesis/index.js';
 import { arrow, folded, type Reduced } from './topology/index.js';
-import { refuseUncertified } from './refusal.js';
 import { VERSION } from './version.js';
 
 /** A finished, certified design: everything that is handed over but the sampled response. */
@@ -65,7 +65,12 @@ export function designChecked(specification: Specification): Design {
 }
 
 /** Transfer function, matrices and certificates, whether these hold or not. */
-function synthesize(specification: Specification): { polynomials: FilterPolynomials; start: CouplingMatrix; reduced: Reduced; certificates: readonly Certificate[] } {
+function synthesize(specification: Specification): {
+  polynomials: FilterPolynomials;
+  start: CouplingMatrix;
+  reduced: Reduced;
+  certificates: readonly Certificate[];
+} {
   const polynomials = approximate(specification);
   const start = transversal(polynomials);
   const reduced = shape(start, specification.topology);

@@ -19,19 +19,34 @@ export function refuseUncertified(
   const hint = hintFor(specification, certificatesOf);
   const faults = failed.map(
     ({ check, value, limit }) =>
-      new FilterFailure('E_CERT', `E_CERT ${check}: found ${value.toPrecision(3)}; allowed ${limit.toPrecision(3)}; do ${hint}`, {
-        argument: check,
-        value,
-        limit,
-        hint,
-      }),
+      new FilterFailure(
+        'E_CERT',
+        `E_CERT ${check}: found ${value.toPrecision(3)}; allowed ${limit.toPrecision(3)}; do ${hint}`,
+        {
+          argument: check,
+          value,
+          limit,
+          hint,
+        },
+      ),
   );
   const [{ argument = '', value, limit }] = faults as [FilterFailure];
-  throw new FilterFailure('E_CERT', faults.map(({ message }) => message).join('\n'), { argument, value, limit, hint, faults });
+  throw new FilterFailure('E_CERT', faults.map(({ message }) => message).join('\n'), {
+    argument,
+    value,
+    limit,
+    hint,
+    faults,
+  });
 }
 
-function hintFor(specification: Specification, certificatesOf: (changed: Specification) => readonly Certificate[]): string {
-  const distance = DISTANCES.find((tried) => passes({ ...specification, transmissionZeros: movedOut(specification.transmissionZeros, tried) }, certificatesOf));
+function hintFor(
+  specification: Specification,
+  certificatesOf: (changed: Specification) => readonly Certificate[],
+): string {
+  const distance = DISTANCES.find((tried) =>
+    passes({ ...specification, transmissionZeros: movedOut(specification.transmissionZeros, tried) }, certificatesOf),
+  );
   if (distance === undefined) return 'lower the order, the return loss or the number of zeros near the band edge';
   return `move the transmission zeros out to |omega| >= ${1 + distance}, which passes: closer ones leave the matrix too few digits`;
 }

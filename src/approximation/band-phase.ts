@@ -18,7 +18,9 @@ export interface BandPhase {
 
 /** Maps prescribed zeros (omega plane, complex) to the phase description. */
 export function bandPhase(order: number, zerosOmega: readonly Complex[]): BandPhase {
-  const q = zerosOmega.map(halfAngleRatio).sort((a, b) => a.re - b.re || Math.abs(a.im) - Math.abs(b.im) || a.im - b.im);
+  const q = zerosOmega
+    .map(halfAngleRatio)
+    .sort((a, b) => a.re - b.re || Math.abs(a.im) - Math.abs(b.im) || a.im - b.im);
   return { q, atInfinity: order - q.length };
 }
 

@@ -31,10 +31,20 @@ export function bandRoots(order: number, omega: readonly Complex[], kappa: numbe
     if (!areApart(poles)) continue;
     return isSymmetric(phase, mirrorPhase) ? symmetrized(roots) : { reflection: roots, poles: byFrequency(poles) };
   }
-  throw new FilterFailure('E_NO_CONVERGENCE', 'E_NO_CONVERGENCE transmissionZeros: found two poles too close to tell apart; allowed responses with distinct poles; do move a transmission zero or the return loss slightly', { argument: 'transmissionZeros', hint: 'move a transmission zero or the return loss slightly' });
+  throw new FilterFailure(
+    'E_NO_CONVERGENCE',
+    'E_NO_CONVERGENCE transmissionZeros: found two poles too close to tell apart; allowed responses with distinct poles; do move a transmission zero or the return loss slightly',
+    { argument: 'transmissionZeros', hint: 'move a transmission zero or the return loss slightly' },
+  );
 }
 
-function bothHalves(order: number, phase: BandPhase, mirrorPhase: BandPhase, kappa: number, detour: number): readonly HalfBandRoot[] {
+function bothHalves(
+  order: number,
+  phase: BandPhase,
+  mirrorPhase: BandPhase,
+  kappa: number,
+  detour: number,
+): readonly HalfBandRoot[] {
   const count = isSymmetric(phase, mirrorPhase) ? Math.ceil(order / 2) : countInUpperHalf(phase);
   const upper = halfBandRoots(phase, count, kappa, detour);
   const lower = halfBandRoots(mirrorPhase, order - count, kappa, -detour);
@@ -47,7 +57,9 @@ function isSymmetric(phase: BandPhase, mirrorPhase: BandPhase): boolean {
 
 /** Equal poles agree to rounding; poles that differ by less than 1e-9 of their distance from the axis count as equal. */
 function areApart(poles: readonly FineRoot[]): boolean {
-  return poles.every((p, i) => poles.every((q, j) => j <= i || Math.hypot(p.re - q.re, p.im - q.im) > 1e-9 * Math.abs(p.re)));
+  return poles.every((p, i) =>
+    poles.every((q, j) => j <= i || Math.hypot(p.re - q.re, p.im - q.im) > 1e-9 * Math.abs(p.re)),
+  );
 }
 
 function byFrequency(poles: readonly FineRoot[]): readonly FineRoot[] {
@@ -64,7 +76,9 @@ function symmetrized(roots: readonly HalfBandRoot[]): BandRoots {
   });
   const poles = roots.map(({ pole }) => pole);
   const real = poles.filter((pole) => isOwnMirror(poles, pole)).map(({ re }) => ({ re, im: 0 }));
-  const upper = poles.filter((pole) => !isOwnMirror(poles, pole) && pole.im > 0).map((pole) => averaged(pole, nearestMirror(poles, pole)));
+  const upper = poles
+    .filter((pole) => !isOwnMirror(poles, pole) && pole.im > 0)
+    .map((pole) => averaged(pole, nearestMirror(poles, pole)));
   return { reflection, poles: byFrequency([...upper, ...real, ...upper.map(conjugate)]) };
 }
 

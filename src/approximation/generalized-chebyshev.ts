@@ -34,7 +34,10 @@ export interface GeneralizedChebyshevRequest {
 export function generalizedChebyshev(request: GeneralizedChebyshevRequest): FilterPolynomials {
   const order = checkOrder(request.order);
   const returnLossDb = checkReturnLoss(request.returnLossDb);
-  const { zeros } = checkTransmissionZeros(request.transmissionZeros === undefined ? [] : request.transmissionZeros, order);
+  const { zeros } = checkTransmissionZeros(
+    request.transmissionZeros === undefined ? [] : request.transmissionZeros,
+    order,
+  );
   const kappa = Math.sqrt(Math.expm1((returnLossDb * Math.LN10) / 10));
   const { reflection, poles } = bandRoots(order, zeros.map(omegaOf), kappa);
   return {
@@ -69,14 +72,27 @@ const omegaOf = (zero: Complex): Complex => complex(zero.im, zero.re === 0 ? 0 :
  * `epsilon` and `epsilonR` from distances at s = j; factors are taken in pairs so that no partial product leaves the range
  * of doubles before the result does.
  */
-function rippleConstants(zeros: readonly Complex[], reflection: BandRoots['reflection'], kappa: number): { epsilon: number; epsilonR: number } {
+function rippleConstants(
+  zeros: readonly Complex[],
+  reflection: BandRoots['reflection'],
+  kappa: number,
+): { epsilon: number; epsilonR: number } {
   let ratio = 1 / kappa;
   reflection.forEach(({ oneMinus }, n) => {
     const zero = zeros[n];
     ratio *= (zero === undefined ? 1 : magnitude(complex(zero.re, 1 - zero.im))) / oneMinus;
   });
   if (!Number.isFinite(ratio)) {
-    throw new FilterFailure('E_ZERO_RANGE', 'E_ZERO_RANGE transmissionZeros: found zeros so far out that the ripple constant exceeds 1e308; allowed products below that; do leave distant zeros at infinity out', { argument: 'transmissionZeros', value: ratio, limit: Number.MAX_VALUE, hint: 'leave distant zeros at infinity out' });
+    throw new FilterFailure(
+      'E_ZERO_RANGE',
+      'E_ZERO_RANGE transmissionZeros: found zeros so far out that the ripple constant exceeds 1e308; allowed products below that; do leave distant zeros at infinity out',
+      {
+        argument: 'transmissionZeros',
+        value: ratio,
+        limit: Number.MAX_VALUE,
+        hint: 'leave distant zeros at infinity out',
+      },
+    );
   }
   if (zeros.length < reflection.length) return { epsilon: ratio, epsilonR: 1 };
   const epsilon = Math.hypot(1, ratio);

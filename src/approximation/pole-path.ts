@@ -1,4 +1,14 @@
-import { type Complex, complex, divide, EPS, FilterFailure, logarithm, magnitude, multiply, subtract } from '../numerics/index.js';
+import {
+  type Complex,
+  complex,
+  divide,
+  EPS,
+  FilterFailure,
+  logarithm,
+  magnitude,
+  multiply,
+  subtract,
+} from '../numerics/index.js';
 import { type BandPhase, phaseAt, phasorAt } from './band-phase.js';
 
 /** A point of a path and the derivative of Phi there. */
@@ -52,7 +62,16 @@ export function continuedAngle(phase: BandPhase, phi: number, k: number, height:
     if (reached === 1) return point.z;
     step *= 1.5;
   }
-  throw new FilterFailure('E_NO_CONVERGENCE', `E_NO_CONVERGENCE transmissionZeros: found a pole (number ${k}) that is not reached in ${MOST_STEPS} steps; allowed responses whose poles are apart; do move a transmission zero or the return loss slightly`, { argument: 'transmissionZeros', value: k, limit: MOST_STEPS, hint: 'move a transmission zero or the return loss slightly' });
+  throw new FilterFailure(
+    'E_NO_CONVERGENCE',
+    `E_NO_CONVERGENCE transmissionZeros: found a pole (number ${k}) that is not reached in ${MOST_STEPS} steps; allowed responses whose poles are apart; do move a transmission zero or the return loss slightly`,
+    {
+      argument: 'transmissionZeros',
+      value: k,
+      limit: MOST_STEPS,
+      hint: 'move a transmission zero or the return loss slightly',
+    },
+  );
 }
 
 /** Newton from a predicted point; undefined when the step that led there is not to be trusted. */

@@ -64,9 +64,11 @@ export function denormalize(matrix: CouplingMatrix, band: Band): HandOver {
   const order = matrix.order;
   const source = portRows(rows[0] as Float64Array, 'source', band);
   const load = portRows(rows[order + 1] as Float64Array, 'load', band);
-  const single = (ports: readonly PortCouplingRow[]): number | null => (ports.length === 1 ? (ports[0]?.externalQ ?? null) : null);
+  const single = (ports: readonly PortCouplingRow[]): number | null =>
+    ports.length === 1 ? (ports[0]?.externalQ ?? null) : null;
   const externalQ = { source: single(source), load: single(load) };
-  const delay = (quality: number | null): number | null => (quality === null ? null : (2 * quality) / (Math.PI * band.centerHz));
+  const delay = (quality: number | null): number | null =>
+    quality === null ? null : (2 * quality) / (Math.PI * band.centerHz);
   return {
     resonators: rows.slice(1, order + 1).map((row, n) => ({ frequencyHz: hzFromOmega(band, -(row[n + 1] as number)) })),
     couplings: couplingRows(rows, band),
@@ -77,7 +79,11 @@ export function denormalize(matrix: CouplingMatrix, band: Band): HandOver {
   };
 }
 
-function portRows(row: Float64Array, port: 'source' | 'load', { centerHz, bandwidthHz }: Band): readonly PortCouplingRow[] {
+function portRows(
+  row: Float64Array,
+  port: 'source' | 'load',
+  { centerHz, bandwidthHz }: Band,
+): readonly PortCouplingRow[] {
   return Array.from(row.slice(1, -1), (value, n) => ({
     port,
     resonator: n + 1,

@@ -54,8 +54,10 @@ function prepare(model: Model, band: LossyBand): Prepared {
 }
 
 function rowOf(prepared: Prepared, line: MaskLine): MaskRow {
-  if ('insertionLossVariationDb' in line) return variationRow(prepared, line, 'attenuation', line.insertionLossVariationDb);
-  if ('groupDelayVariationSeconds' in line) return variationRow(prepared, line, 'groupDelay', line.groupDelayVariationSeconds);
+  if ('insertionLossVariationDb' in line)
+    return variationRow(prepared, line, 'attenuation', line.insertionLossVariationDb);
+  if ('groupDelayVariationSeconds' in line)
+    return variationRow(prepared, line, 'groupDelay', line.groupDelayVariationSeconds);
   if ('insertionLossDb' in line) return levelRow(prepared, line, 'attenuation', line.insertionLossDb, -1);
   if ('returnLossDb' in line) return levelRow(prepared, line, 'returnLoss', line.returnLossDb, 1);
   return levelRow(prepared, line, 'attenuation', line.rejectionDb, 1);
@@ -68,7 +70,13 @@ function levelRow(prepared: Prepared, line: MaskLine, quantity: Quantity, level:
   const reference = line.relativeTo === 'center' ? prepared.centerLossDb : 0;
   const worst = lowest(prepared, span, quantity, (value, hz) => sign * (value - reference - limitAt(hz)));
   const limit = limitAt(worst.hz);
-  return { line, limit, predicted: limit + sign * worst.margin, margin: worst.margin, worstHz: placeOf(line, span, worst.hz) };
+  return {
+    line,
+    limit,
+    predicted: limit + sign * worst.margin,
+    margin: worst.margin,
+    worstHz: placeOf(line, span, worst.hz),
+  };
 }
 
 /** The end of an open span stands for its limit: 0 Hz below, no frequency at all above. */
@@ -85,11 +93,20 @@ function variationRow(prepared: Prepared, line: MaskLine, quantity: Quantity, li
   return { line, limit, predicted, margin: limit - predicted, worstHz: largest.hz };
 }
 
-function lowest({ run, points }: Prepared, [fromHz, toHz]: readonly [number, number], quantity: Quantity, margin: (value: number, hz: number) => number): WorstPoint {
+function lowest(
+  { run, points }: Prepared,
+  [fromHz, toHz]: readonly [number, number],
+  quantity: Quantity,
+  margin: (value: number, hz: number) => number,
+): WorstPoint {
   const grid = points(fromHz, toHz);
   const values = quantityOf(run(grid), quantity);
   const marginAt = (hz: number): number => margin(quantityOf(run(Float64Array.of(hz)), quantity)[0] as number, hz);
-  return worstPoint(grid, values.map((value, n) => margin(value, grid[n] as number)), marginAt);
+  return worstPoint(
+    grid,
+    values.map((value, n) => margin(value, grid[n] as number)),
+    marginAt,
+  );
 }
 
 function spanOf({ reachHz }: Prepared, line: MaskLine): readonly [number, number] {
@@ -104,4 +121,3 @@ function limitOf({ fromHz, toHz }: MaskLine, level: Level): (hz: number) => numb
   const [low, high] = [fromHz as number, toHz as number];
   return (hz) => (low === high ? Math.max(...level) : level[0] + ((level[1] - level[0]) * (hz - low)) / (high - low));
 }
-

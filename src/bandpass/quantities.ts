@@ -20,6 +20,9 @@ export function quantityOf(sweep: SweepHz, quantity: Quantity): Float64Array {
   const { s11, s21, s22 } = sweep;
   return sweep.frequenciesHz.map((_, n) => {
     if (quantity === 'attenuation') return decibels(s21.re[n] as number, s21.im[n] as number);
-    return Math.min(decibels(s11.re[n] as number, s11.im[n] as number), decibels(s22.re[n] as number, s22.im[n] as number));
+    return Math.min(
+      decibels(s11.re[n] as number, s11.im[n] as number),
+      decibels(s22.re[n] as number, s22.im[n] as number),
+    );
   });
 }

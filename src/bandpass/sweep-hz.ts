@@ -1,5 +1,5 @@
 import { omegaFromHz } from '../forms/index.js';
-import { argumentFailure, checkFrequencies, type Curves, type Model, sweeper } from '../response/index.js';
+import { argumentFailure, type Curves, checkFrequencies, type Model, sweeper } from '../response/index.js';
 import { bandOf, type LossyBand, lossOf } from './band.js';
 
 /** A sweep in hertz; the delay is in seconds. */
@@ -41,7 +41,14 @@ export function secondsPerUnit({ centerHz, bandwidthHz }: LossyBand, hz: number)
 export function sweepHz(model: Model, band: LossyBand, frequenciesHz: ArrayLike<number>): SweepHz {
   const grid = checkFrequencies(frequenciesHz, 'frequenciesHz');
   grid.forEach((hz, n) => {
-    if (!(hz > 0)) throw argumentFailure('E_FREQUENCY', `frequenciesHz[${n}]`, hz, 'frequencies above 0 Hz', 'remove the entry: the band-pass map has no value there');
+    if (!(hz > 0))
+      throw argumentFailure(
+        'E_FREQUENCY',
+        `frequenciesHz[${n}]`,
+        hz,
+        'frequencies above 0 Hz',
+        'remove the entry: the band-pass map has no value there',
+      );
   });
   return sweeperHz(model, band)(grid);
 }

@@ -3,9 +3,10 @@
  *  Gives    Complex, FilterPolynomials, CouplingMatrix, Rotation, Scattering, Certificate, mask lines, Band and its maps
  *  Refuses  nothing: rooms check at their own doors
  *  Source   R. J. Cameron, Advanced coupling matrix synthesis techniques for microwave filters, IEEE Trans. MTT 51(1), 2003 (the (N+2) matrix; from memory) */
+
+export type { Complex } from '../numerics/index.js';
 export type { Certificate } from './certificate.js';
 export type { CouplingMatrix, Rotation } from './coupling-matrix.js';
-export type { Complex } from '../numerics/index.js';
 export type { Family, FilterPolynomials, FineRoot } from './filter-polynomials.js';
 export type { Band } from './frequency-map.js';
 export { bandFromEdges, edgesOfBand, hzFromOmega, omegaFromHz } from './frequency-map.js';

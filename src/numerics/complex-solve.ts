@@ -78,7 +78,11 @@ function choosePivot(re: Float64Array, im: Float64Array, order: Int32Array, size
     }
   }
   if (!(bestSize > 0)) {
-    throw new FilterFailure('E_SINGULAR', `E_SINGULAR omega: found a frequency at which the network's equations are singular; allowed frequencies off the poles; do shift the frequency or add loss`, { argument: 'omega', value: bestSize, limit: 0, hint: 'shift the frequency or add loss' });
+    throw new FilterFailure(
+      'E_SINGULAR',
+      `E_SINGULAR omega: found a frequency at which the network's equations are singular; allowed frequencies off the poles; do shift the frequency or add loss`,
+      { argument: 'omega', value: bestSize, limit: 0, hint: 'shift the frequency or add loss' },
+    );
   }
   if (best === k) return;
   for (let j = 0; j < size; j++) {
@@ -135,7 +139,16 @@ function solve({ size, re, im, order }: Factors, x: ComplexVector): void {
 }
 
 /** `x[i] -= sum over j in [from, to) of L or U[i][j]*x[j]`. */
-function substitute(re: Float64Array, im: Float64Array, xRe: Float64Array, xIm: Float64Array, row: number, i: number, from: number, to: number): void {
+function substitute(
+  re: Float64Array,
+  im: Float64Array,
+  xRe: Float64Array,
+  xIm: Float64Array,
+  row: number,
+  i: number,
+  from: number,
+  to: number,
+): void {
   let p = xRe[i] as number;
   let q = xIm[i] as number;
   for (let j = from; j < to; j++) {

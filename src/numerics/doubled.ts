@@ -61,7 +61,11 @@ export interface DoubledComplex {
 }
 
 /** `a - b*root` for pairs a, b and a root in doubles: one step of multiplying a polynomial by (s - root). */
-export function doubledMinusProduct(a: DoubledComplex, b: DoubledComplex, root: { readonly re: number; readonly im: number }): DoubledComplex {
+export function doubledMinusProduct(
+  a: DoubledComplex,
+  b: DoubledComplex,
+  root: { readonly re: number; readonly im: number },
+): DoubledComplex {
   return {
     re: doubledAdd(a.re, doubledAdd(doubledTimes(b.re, -root.re), doubledTimes(b.im, root.im))),
     im: doubledAdd(a.im, doubledAdd(doubledTimes(b.re, -root.im), doubledTimes(b.im, -root.re))),

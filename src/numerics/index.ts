@@ -16,21 +16,21 @@ export {
   squareRoot,
   subtract,
 } from './complex.js';
+export type { ComplexRows } from './complex-eigen.js';
+export { complexEigenvalues } from './complex-eigen.js';
 export type { ComplexVector, ShiftedMatrix } from './complex-solve.js';
 export { inverseColumns } from './complex-solve.js';
 export type { Complex } from './complex-type.js';
-export type { FailureDetail } from './failure.js';
-export { FilterFailure } from './failure.js';
-export type { ComplexRows } from './complex-eigen.js';
-export { complexEigenvalues } from './complex-eigen.js';
-export { EPS } from './limits.js';
 export type { Doubled } from './doubled.js';
 export { doubledAdd, doubledDivide, doubledDot, doubledMultiply, doubledSquareRoot } from './doubled.js';
+export type { FailureDetail } from './failure.js';
+export { FilterFailure } from './failure.js';
+export { EPS } from './limits.js';
 export { localMinimum } from './local-minimum.js';
 export type { RisingFunction } from './monotone-root.js';
 export { monotoneRoot } from './monotone-root.js';
-export type { SymmetricEigen } from './symmetric-eigen.js';
-export { symmetricEigen } from './symmetric-eigen.js';
 export { coefficientsFromRoots } from './polynomial.js';
 export type { PolynomialRoot } from './polynomial-roots.js';
 export { polynomialRoots } from './polynomial-roots.js';
+export type { SymmetricEigen } from './symmetric-eigen.js';
+export { symmetricEigen } from './symmetric-eigen.js';

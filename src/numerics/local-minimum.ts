@@ -9,7 +9,11 @@ const GOLDEN = (3 - Math.sqrt(5)) / 2;
  *
  * Source: R. P. Brent, Algorithms for minimization without derivatives, 1973, chapter 5 (from memory).
  */
-export function localMinimum(f: (x: number) => number, low: number, high: number): { readonly x: number; readonly value: number } {
+export function localMinimum(
+  f: (x: number) => number,
+  low: number,
+  high: number,
+): { readonly x: number; readonly value: number } {
   let [a, b] = [low, high];
   let x = a + GOLDEN * (b - a);
   let fx = f(x);

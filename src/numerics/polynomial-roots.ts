@@ -42,14 +42,21 @@ export function polynomialRoots(coefficients: readonly Complex[]): readonly Poly
         settled[k] = true;
         return;
       }
-      const repulsion = roots.reduce((sum, other, i) => (i === k ? sum : sum.add(root.sub(other).inverse())), new ComplexNumber(0, 0));
+      const repulsion = roots.reduce(
+        (sum, other, i) => (i === k ? sum : sum.add(root.sub(other).inverse())),
+        new ComplexNumber(0, 0),
+      );
       roots[k] = root.sub(newton.div(new ComplexNumber(1, 0).sub(newton.mul(repulsion))));
     });
   }
   return roots.map((root) => {
     const { backwardError } = evaluate(ascending, root);
     if (!(backwardError <= ACCEPTED)) {
-      throw new FilterFailure('E_NO_CONVERGENCE', `E_NO_CONVERGENCE coefficients: found a root with backward error ${backwardError.toPrecision(3)}; allowed ${ACCEPTED}; do scale the variable so that the roots lie near size 1`, { argument: 'coefficients', value: backwardError, limit: ACCEPTED, hint: 'scale the variable' });
+      throw new FilterFailure(
+        'E_NO_CONVERGENCE',
+        `E_NO_CONVERGENCE coefficients: found a root with backward error ${backwardError.toPrecision(3)}; allowed ${ACCEPTED}; do scale the variable so that the roots lie near size 1`,
+        { argument: 'coefficients', value: backwardError, limit: ACCEPTED, hint: 'scale the variable' },
+      );
     }
     return { re: root.re, im: root.im, backwardError };
   });
@@ -59,13 +66,20 @@ function checked(coefficients: readonly Complex[]): readonly ComplexNumber[] {
   const finite = coefficients.every(({ re, im }) => Number.isFinite(re) && Number.isFinite(im));
   const last = coefficients[coefficients.length - 1];
   if (coefficients.length < 2 || !finite || last === undefined || (last.re === 0 && last.im === 0)) {
-    throw new FilterFailure('E_POLYNOMIAL', 'E_POLYNOMIAL coefficients: found a constant, a leading 0 or a number that is not finite; allowed two or more finite coefficients, ascending, the last not 0; do trim the list', { argument: 'coefficients', hint: 'trim the list' });
+    throw new FilterFailure(
+      'E_POLYNOMIAL',
+      'E_POLYNOMIAL coefficients: found a constant, a leading 0 or a number that is not finite; allowed two or more finite coefficients, ascending, the last not 0; do trim the list',
+      { argument: 'coefficients', hint: 'trim the list' },
+    );
   }
   return coefficients.map(({ re, im }) => new ComplexNumber(re, im));
 }
 
 /** Newton step p/p' and backward error at z; outside the unit circle through the reversed polynomial, which cannot overflow. */
-function evaluate(ascending: readonly ComplexNumber[], z: ComplexNumber): { newton: ComplexNumber | undefined; backwardError: number } {
+function evaluate(
+  ascending: readonly ComplexNumber[],
+  z: ComplexNumber,
+): { newton: ComplexNumber | undefined; backwardError: number } {
   const outside = z.abs() > 1;
   const n = ascending.length - 1;
   const x = outside ? z.inverse() : z;
@@ -90,7 +104,8 @@ function startingPoints(ascending: readonly ComplexNumber[]): ComplexNumber[] {
   const hull: number[] = [];
   heights.forEach((height, k) => {
     if (height === Number.NEGATIVE_INFINITY) return;
-    while (hull.length > 1 && isBelow(heights, hull[hull.length - 2] as number, hull[hull.length - 1] as number, k)) hull.pop();
+    while (hull.length > 1 && isBelow(heights, hull[hull.length - 2] as number, hull[hull.length - 1] as number, k))
+      hull.pop();
     hull.push(k);
   });
   const starts: ComplexNumber[] = Array.from({ length: hull[0] ?? 0 }, () => new ComplexNumber(0, 0));

@@ -14,7 +14,9 @@ export interface SymmetricEigen {
  */
 export function symmetricEigen(rows: readonly Float64Array[]): SymmetricEigen {
   const n = rows.length;
-  const decomposition = new EigenvalueDecomposition(new Matrix(rows.map((row) => Array.from(row))), { assumeSymmetric: true });
+  const decomposition = new EigenvalueDecomposition(new Matrix(rows.map((row) => Array.from(row))), {
+    assumeSymmetric: true,
+  });
   const vectors = decomposition.eigenvectorMatrix;
   return {
     values: Float64Array.from(decomposition.realEigenvalues),

@@ -30,7 +30,9 @@ function portColumns({ rows, loss }: SolvableMatrix, omega: number): readonly [C
   const last = rows.length - 1;
   const isPort = (i: number): boolean => i === 0 || i === last;
   const shiftRe = Float64Array.from(rows, (_, i) => (isPort(i) ? 0 : omega));
-  const shiftIm = Float64Array.from(rows, (_, i) => (isPort(i) ? -1 : -(typeof loss === 'number' ? loss : (loss[i - 1] as number))));
+  const shiftIm = Float64Array.from(rows, (_, i) =>
+    isPort(i) ? -1 : -(typeof loss === 'number' ? loss : (loss[i - 1] as number)),
+  );
   const [source, load] = inverseColumns({ rows, shiftRe, shiftIm }, [0, last]);
   return [source as ComplexVector, load as ComplexVector];
 }
@@ -39,7 +41,12 @@ function portColumns({ rows, loss }: SolvableMatrix, omega: number): readonly [C
  * Group delay from the port columns x, y of the inverse: `dS21/domega = 2j*sum x_i*y_i`. Without loss the same delay is
  * `|x|^2 + |y|^2` over the resonators (half the trace of j*S^H*dS/domega), which stays finite where S21 = 0.
  */
-function delayFromColumns({ rows, loss }: SolvableMatrix, x: ComplexVector, y: ComplexVector, s21: { re: number; im: number }): number {
+function delayFromColumns(
+  { rows, loss }: SolvableMatrix,
+  x: ComplexVector,
+  y: ComplexVector,
+  s21: { re: number; im: number },
+): number {
   let energy = 0;
   let re = 0;
   let im = 0;

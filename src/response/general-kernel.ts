@@ -8,7 +8,12 @@ import type { PoleForm } from './pole-form.js';
  * Close to a resonance without loss X grows without bound and its determinant cancels; such points are marked by NaN in the
  * delay and solved directly by the caller. One long function on purpose: scalars in registers.
  */
-export function sweepGeneral({ lambda, source, load, ports }: PoleForm, loss: number, omega: Float64Array, out: Curves): void {
+export function sweepGeneral(
+  { lambda, source, load, ports }: PoleForm,
+  loss: number,
+  omega: Float64Array,
+  out: Curves,
+): void {
   const count = lambda.length;
   const ss = source.map((value) => value * value);
   const sl = source.map((value, k) => value * (load[k] as number));

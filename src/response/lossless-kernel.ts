@@ -13,7 +13,13 @@ export function sweepLosslessSymmetric(modes: ModeForm, omega: Float64Array, out
 }
 
 /** Adds half of one mode, `sign` = its share in S21. */
-function addMode({ constant, lambda, weight }: ModeTerms, sign: 1 | -1, omega: Float64Array, out: Curves, points: number): void {
+function addMode(
+  { constant, lambda, weight }: ModeTerms,
+  sign: 1 | -1,
+  omega: Float64Array,
+  out: Curves,
+  points: number,
+): void {
   const { re: s11Re, im: s11Im } = out.s11;
   const { re: s21Re, im: s21Im } = out.s21;
   const delay = out.groupDelay;

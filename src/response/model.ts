@@ -9,9 +9,20 @@ export function isMatrix(model: Model): model is CouplingMatrix {
 }
 
 /** One failure in the package's message form. */
-export function argumentFailure(code: string, argument: string, value: unknown, limit: string, hint: string): FilterFailure {
+export function argumentFailure(
+  code: string,
+  argument: string,
+  value: unknown,
+  limit: string,
+  hint: string,
+): FilterFailure {
   const shown = String(value).slice(0, 40);
-  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, { argument, value, limit, hint });
+  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, {
+    argument,
+    value,
+    limit,
+    hint,
+  });
 }
 
 /** A copy of a grid, checked. @throws FilterFailure E_TYPE, E_NOT_FINITE */
@@ -30,8 +41,10 @@ export function checkFrequencies(omega: ArrayLike<number>, name: string): Float6
 
 /** @throws FilterFailure E_TYPE, E_NOT_FINITE */
 export function checkFrequency(omega: unknown, name: string): number {
-  if (typeof omega !== 'number') throw argumentFailure('E_TYPE', name, omega, 'numbers only', 'replace the entry by a number');
-  if (!Number.isFinite(omega)) throw argumentFailure('E_NOT_FINITE', name, omega, 'finite numbers', 'replace the entry');
+  if (typeof omega !== 'number')
+    throw argumentFailure('E_TYPE', name, omega, 'numbers only', 'replace the entry by a number');
+  if (!Number.isFinite(omega))
+    throw argumentFailure('E_NOT_FINITE', name, omega, 'finite numbers', 'replace the entry');
   return omega;
 }
 
@@ -40,7 +53,13 @@ export function checkLoss(loss: number | readonly number[] | undefined, order: n
   if (loss === undefined) return 0;
   if (typeof loss === 'number') return checkOneLoss(loss, 'loss');
   if (!Array.isArray(loss) || loss.length !== order) {
-    throw argumentFailure('E_LOSS', 'loss', Array.isArray(loss) ? `${loss.length} values` : loss, `a number or ${order} numbers, one a resonator`, 'match the order');
+    throw argumentFailure(
+      'E_LOSS',
+      'loss',
+      Array.isArray(loss) ? `${loss.length} values` : loss,
+      `a number or ${order} numbers, one a resonator`,
+      'match the order',
+    );
   }
   const values = Float64Array.from(loss, (value, n) => checkOneLoss(value, `loss[${n}]`));
   return values.every((value) => value === values[0]) ? (values[0] as number) : values;

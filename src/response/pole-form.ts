@@ -69,7 +69,7 @@ export function modeForm({ lambda, source, load, ports }: PoleForm): ModeForm | 
   const terms = (indices: readonly number[], constant: number): ModeTerms => ({
     constant,
     lambda: Float64Array.from(indices, (k) => lambda[k] as number),
-    weight: Float64Array.from(indices, (k) => ((Math.abs(source[k] as number) + Math.abs(load[k] as number)) ** 2) / 2),
+    weight: Float64Array.from(indices, (k) => (Math.abs(source[k] as number) + Math.abs(load[k] as number)) ** 2 / 2),
   });
   return { even: terms(even, ports.ss + ports.sl), odd: terms(odd, ports.ss - ports.sl) };
 }

@@ -18,7 +18,13 @@ interface Workspace {
  * elimination is then below 3 (N. J. Higham, Factorizing complex symmetric matrices with positive definite real and
  * imaginary parts, Math. Comp. 67, 1998; from memory).
  */
-export function sweepSparse(rows: readonly Float64Array[], plan: FlatPlan, loss: Float64Array, omega: Float64Array, out: Curves): void {
+export function sweepSparse(
+  rows: readonly Float64Array[],
+  plan: FlatPlan,
+  loss: Float64Array,
+  omega: Float64Array,
+  out: Curves,
+): void {
   const size = rows.length;
   const work: Workspace = {
     size,
@@ -91,11 +97,19 @@ function portColumns(work: Workspace, { nodes, starts, rest }: FlatPlan): void {
   put(work.y, 0, -br, -bi);
   put(work.y, last, ar, ai);
   for (let n = nodes.length - 1; n >= 0; n--) {
-    for (const vector of [work.x, work.y]) substituteBack(work, vector, nodes[n] as number, rest, starts[n] as number, starts[n + 1] as number);
+    for (const vector of [work.x, work.y])
+      substituteBack(work, vector, nodes[n] as number, rest, starts[n] as number, starts[n + 1] as number);
   }
 }
 
-function substituteBack({ size, re, im }: Workspace, [vr, vi]: readonly [Float64Array, Float64Array], node: number, rest: Int32Array, from: number, to: number): void {
+function substituteBack(
+  { size, re, im }: Workspace,
+  [vr, vi]: readonly [Float64Array, Float64Array],
+  node: number,
+  rest: Int32Array,
+  from: number,
+  to: number,
+): void {
   const row = node * size;
   let p = 0;
   let q = 0;

@@ -48,14 +48,26 @@ export function sweeper(model: Model, options: SweepOptions = {}): (omega: Float
   return isMatrix(model) ? matrixSweeper(model, loss) : polynomialSweeper(model, loss);
 }
 
-function polynomialSweeper(polynomials: FilterPolynomials, loss: number | Float64Array): (omega: Float64Array) => Curves {
+function polynomialSweeper(
+  polynomials: FilterPolynomials,
+  loss: number | Float64Array,
+): (omega: Float64Array) => Curves {
   if (typeof loss !== 'number') {
-    throw argumentFailure('E_LOSS', 'loss', 'a different loss for each resonator', 'one number for a transfer function', 'sweep the coupling matrix instead');
+    throw argumentFailure(
+      'E_LOSS',
+      'loss',
+      'a different loss for each resonator',
+      'one number for a transfer function',
+      'sweep the coupling matrix instead',
+    );
   }
   return (omega) => {
     const out = emptyCurves(omega.length, false);
     omega.forEach((w, n) => {
-      storePoint(out, n, { ...scatteringOfPolynomials(polynomials, complex(loss, w)), groupDelay: delayOfPolynomials(polynomials, w, loss) });
+      storePoint(out, n, {
+        ...scatteringOfPolynomials(polynomials, complex(loss, w)),
+        groupDelay: delayOfPolynomials(polynomials, w, loss),
+      });
     });
     return out;
   };
@@ -85,7 +97,12 @@ function matrixSweeper(matrix: CouplingMatrix, loss: number | Float64Array): (om
 }
 
 /** Solves the points that a kernel left without a number: resonances hit exactly, or too closely for its sums. */
-function solveMarked(rows: readonly Float64Array[], loss: number | Float64Array, omega: Float64Array, out: Curves): Curves {
+function solveMarked(
+  rows: readonly Float64Array[],
+  loss: number | Float64Array,
+  omega: Float64Array,
+  out: Curves,
+): Curves {
   for (let n = 0; n < omega.length; n++) {
     if (!Number.isFinite(out.groupDelay[n])) storePoint(out, n, solvePoint({ rows, loss }, omega[n] as number));
   }

@@ -50,7 +50,12 @@ interface PoleColumns {
 }
 
 /** psi - target and its slope at `omega + rest`; exact to sqrt(n) ulp once the difference is below one radian. */
-function halfPhase({ away, im, imRest }: PoleColumns, omega: number, rest: number, target: number): { value: number; slope: number } {
+function halfPhase(
+  { away, im, imRest }: PoleColumns,
+  omega: number,
+  rest: number,
+  target: number,
+): { value: number; slope: number } {
   let sum = -target;
   let slope = 0;
   let x = Math.cos(target);

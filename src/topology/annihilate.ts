@@ -25,7 +25,10 @@ export interface Annihilation {
  * const { matrix, rotation } = annihilate(start, { pivot: [2, 3], element: [0, 3] });
  * matrix.values[0][3]; // 0
  */
-export function annihilate(matrix: CouplingMatrix, request: Annihilation): { readonly matrix: CouplingMatrix; readonly rotation: Rotation } {
+export function annihilate(
+  matrix: CouplingMatrix,
+  request: Annihilation,
+): { readonly matrix: CouplingMatrix; readonly rotation: Rotation } {
   const rows = rowsOf(matrix);
   checkPivot(request?.pivot, matrix.order, 'annihilate');
   const angle = annihilationAngle(rows, request.pivot, request.element);
@@ -42,7 +45,11 @@ export function clear(rows: Rows, rotation: Rotation, element: readonly [number,
 }
 
 /** Angle in the principal range that annihilates an entry. */
-export function annihilationAngle(rows: Rows, [i, j]: readonly [number, number], element: readonly [number, number]): number {
+export function annihilationAngle(
+  rows: Rows,
+  [i, j]: readonly [number, number],
+  element: readonly [number, number],
+): number {
   const [k, l] = orderedElement(rows, element, i, j);
   const value = (a: number, b: number): number => (rows[a] as Float64Array)[b] as number;
   if (l === undefined) return halfTurn(2 * value(i, j), value(j, j) - value(i, i)) / 2;
@@ -50,8 +57,14 @@ export function annihilationAngle(rows: Rows, [i, j]: readonly [number, number],
 }
 
 /** The element as [shared pivot node, other node]; [i] alone when it is the pivot. */
-function orderedElement(rows: Rows, element: readonly [number, number], i: number, j: number): readonly [number, number?] {
-  if (!Array.isArray(element) || element.length !== 2) throw entryFailure('E_TYPE', 'element', element, 'a pair [k, l]', 'name one entry of the matrix');
+function orderedElement(
+  rows: Rows,
+  element: readonly [number, number],
+  i: number,
+  j: number,
+): readonly [number, number?] {
+  if (!Array.isArray(element) || element.length !== 2)
+    throw entryFailure('E_TYPE', 'element', element, 'a pair [k, l]', 'name one entry of the matrix');
   const [k, l] = element;
   const inside = (node: number): boolean => Number.isInteger(node) && node >= 0 && node < rows.length;
   if (inside(k) && inside(l)) {
@@ -61,7 +74,13 @@ function orderedElement(rows: Rows, element: readonly [number, number], i: numbe
     if (kShared && !lShared) return [k, l];
     if (lShared && !kShared) return [l, k];
   }
-  throw entryFailure('E_ELEMENT', 'element', `(${k},${l})`, `the pivot (${i},${j}) itself or an entry that shares exactly one index with it`, 'choose another entry or another pivot');
+  throw entryFailure(
+    'E_ELEMENT',
+    'element',
+    `(${k},${l})`,
+    `the pivot (${i},${j}) itself or an entry that shares exactly one index with it`,
+    'choose another entry or another pivot',
+  );
 }
 
 /** `atan(y/x)` in (-pi/2, pi/2]; 0 when both are 0. */

@@ -12,8 +12,13 @@ const ZERO: Doubled = { hi: 0, lo: 0 };
  * An elimination carried out in doubled precision and rounded once at the end: for sequences with few active rotations,
  * where entries that are exactly 0 must stay so. Steps whose element is already 0 turn nothing.
  */
-export function eliminateDoubled(original: Rows, steps: readonly EliminationStep[]): { rows: Rows; rotations: Rotation[] } {
-  const rows: DoubledRows = original.map((row) => Array.from(row, (value) => (value === 0 ? ZERO : { hi: value, lo: 0 })));
+export function eliminateDoubled(
+  original: Rows,
+  steps: readonly EliminationStep[],
+): { rows: Rows; rotations: Rotation[] } {
+  const rows: DoubledRows = original.map((row) =>
+    Array.from(row, (value) => (value === 0 ? ZERO : { hi: value, lo: 0 })),
+  );
   const rotations: Rotation[] = [];
   for (const { element, pivot, against } of steps) {
     const [kept, turned] = element;
@@ -62,4 +67,5 @@ function turnLines(rows: DoubledRows, i: number, j: number, c: Doubled, s: Doubl
   put(rows, j, j, combine(s, lower[0], c, lower[1]));
 }
 
-const combine = (p: Doubled, a: Doubled, q: Doubled, b: Doubled): Doubled => doubledAdd(doubledMultiply(p, a), doubledMultiply(q, b));
+const combine = (p: Doubled, a: Doubled, q: Doubled, b: Doubled): Doubled =>
+  doubledAdd(doubledMultiply(p, a), doubledMultiply(q, b));

@@ -12,10 +12,20 @@ export type Rows = Float64Array[];
 export function rowsOf(matrix: CouplingMatrix): Rows {
   const size = matrix?.order + 2;
   if (!Number.isInteger(matrix?.order) || matrix.order < 1) {
-    throw shapeFailure('matrix.order', matrix?.order, 'a whole number of resonators, 1 or more', 'give order and values of one matrix');
+    throw shapeFailure(
+      'matrix.order',
+      matrix?.order,
+      'a whole number of resonators, 1 or more',
+      'give order and values of one matrix',
+    );
   }
   if (!Array.isArray(matrix.values) || matrix.values.length !== size) {
-    throw shapeFailure('matrix.values', matrix.values?.length, `${size} rows for order ${matrix.order}`, 'add or remove rows');
+    throw shapeFailure(
+      'matrix.values',
+      matrix.values?.length,
+      `${size} rows for order ${matrix.order}`,
+      'add or remove rows',
+    );
   }
   const rows = matrix.values.map((row, i) => rowOf(row, i, size));
   rows.forEach((row, i) => {
@@ -31,8 +41,10 @@ function rowOf(row: readonly number[], i: number, size: number): Float64Array {
   return Float64Array.from({ length: size }, (_, j) => {
     const value: unknown = row[j];
     const where = `matrix.values[${i}][${j}]`;
-    if (typeof value !== 'number') throw entryFailure('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
-    if (!Number.isFinite(value)) throw entryFailure('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
+    if (typeof value !== 'number')
+      throw entryFailure('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
+    if (!Number.isFinite(value))
+      throw entryFailure('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
     return value === 0 ? 0 : value;
   });
 }
@@ -40,7 +52,13 @@ function rowOf(row: readonly number[], i: number, size: number): Float64Array {
 function checkSymmetry(rows: Rows, row: Float64Array, i: number, j: number): void {
   const mirror = rows[j]?.[i];
   if (row[j] !== mirror) {
-    throw entryFailure('E_NOT_SYMMETRIC', `matrix.values[${i}][${j}]`, row[j], `${mirror}, the value of entry (${j},${i})`, 'make the two entries equal: the network is reciprocal');
+    throw entryFailure(
+      'E_NOT_SYMMETRIC',
+      `matrix.values[${i}][${j}]`,
+      row[j],
+      `${mirror}, the value of entry (${j},${i})`,
+      'make the two entries equal: the network is reciprocal',
+    );
   }
 }
 
@@ -49,9 +67,20 @@ function shapeFailure(argument: string, value: unknown, limit: string, hint: str
 }
 
 /** One failure in the package's message form. */
-export function entryFailure(code: string, argument: string, value: unknown, limit: string, hint: string): FilterFailure {
+export function entryFailure(
+  code: string,
+  argument: string,
+  value: unknown,
+  limit: string,
+  hint: string,
+): FilterFailure {
   const shown = String(value).slice(0, 40);
-  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, { argument, value, limit, hint });
+  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, {
+    argument,
+    value,
+    limit,
+    hint,
+  });
 }
 
 /** Rows back to a frozen-by-type coupling matrix; the upper triangle rules, so that (i,j) and (j,i) never differ. */

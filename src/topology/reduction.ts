@@ -42,7 +42,8 @@ export interface Reduced {
  */
 export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
   const original = rowsOf(matrix);
-  const { rows: exact, rotations } = plan.precision === 'doubled' ? eliminateDoubled(original, plan.steps) : eliminateCorrected(original, plan.steps);
+  const { rows: exact, rotations } =
+    plan.precision === 'doubled' ? eliminateDoubled(original, plan.steps) : eliminateCorrected(original, plan.steps);
   const leftover = clearStructure(exact, plan, matrix.finiteZeros);
   clearSynchronous(exact);
   const flips = normalSigns(exact, plan);
@@ -122,4 +123,3 @@ function normalSigns(rows: Rows, plan: ReductionPlan): readonly number[] {
   }
   return flipped.sort((a, b) => a - b);
 }
-

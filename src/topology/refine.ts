@@ -25,7 +25,8 @@ export function refine(original: Rows, basis: Rows, steps: readonly EliminationS
   const small = low;
   for (const { element } of steps) {
     for (const [i, j] of [element, [element[1], element[0]] as const]) {
-      (small[i] as Float64Array)[j] = ((small[i] as Float64Array)[j] as number) + ((target[i] as Float64Array)[j] as number);
+      (small[i] as Float64Array)[j] =
+        ((small[i] as Float64Array)[j] as number) + ((target[i] as Float64Array)[j] as number);
       (target[i] as Float64Array)[j] = 0;
     }
   }

@@ -5,7 +5,9 @@ import { normOf, rowsOf } from './matrix-shape.js';
 import { rotate } from './rotate.js';
 
 /** A step of an experiment: a rotation by a given angle, or the rotation that annihilates an entry. */
-export type RotationRequest = Rotation | { readonly pivot: readonly [number, number]; readonly annihilate: readonly [number, number] };
+export type RotationRequest =
+  | Rotation
+  | { readonly pivot: readonly [number, number]; readonly annihilate: readonly [number, number] };
 
 /** What one step did. */
 export interface TraceStep {
@@ -50,10 +52,13 @@ export function traceRotations(
     const before = matrix;
     const done = perform(matrix, request);
     matrix = done.matrix;
-    const drift = Math.max(...invariantsOf(matrix).map((value, n) => Math.abs(value - (reference[n] as number)))) / norm;
+    const drift =
+      Math.max(...invariantsOf(matrix).map((value, n) => Math.abs(value - (reference[n] as number)))) / norm;
     return {
       rotation: done.rotation,
-      ...('annihilate' in request ? { annihilated: { element: request.annihilate, before: entry(before, request.annihilate) } } : {}),
+      ...('annihilate' in request
+        ? { annihilated: { element: request.annihilate, before: entry(before, request.annihilate) } }
+        : {}),
       ...(pattern === undefined ? {} : { offPattern: largestOutside(matrix, pattern) }),
       drift,
     };
@@ -72,7 +77,8 @@ function invariantsOf(matrix: CouplingMatrix): readonly number[] {
   const rows = rowsOf(matrix);
   const last = rows.length - 1;
   const block = rows.slice(1, last).map((row) => row.slice(1, last));
-  const dot = (a: number, b: number): number => block.reduce((sum, _, n) => sum + (rows[a]?.[n + 1] as number) * (rows[b]?.[n + 1] as number), 0);
+  const dot = (a: number, b: number): number =>
+    block.reduce((sum, _, n) => sum + (rows[a]?.[n + 1] as number) * (rows[b]?.[n + 1] as number), 0);
   return [...symmetricEigen(block).values, dot(0, 0), dot(0, last), dot(last, last)];
 }
 

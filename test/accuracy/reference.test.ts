@@ -2,7 +2,16 @@ import { execFileSync } from 'node:child_process';
 import { readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { arrow, type Complex, type CouplingMatrix, type FilterPolynomials, folded, generalizedChebyshev, scatteringAt, transversal } from '../../src/index.js';
+import {
+  arrow,
+  type Complex,
+  type CouplingMatrix,
+  type FilterPolynomials,
+  folded,
+  generalizedChebyshev,
+  scatteringAt,
+  transversal,
+} from '../../src/index.js';
 import { hasMpmath } from '../support/tools.js';
 
 // Reference: test/reference, Python with mpmath at more than 100 digits, by the published recursion of R. J. Cameron (IEEE
@@ -39,7 +48,8 @@ const EPS = 2 ** -52;
 function errorsOf(model: FilterPolynomials | CouplingMatrix, spec: Spec): number[] {
   return spec.omega.map((omega, n) => {
     const { s11, s21 } = scatteringAt(model, omega);
-    const off = (s: Complex, right: Columns): number => Math.hypot(s.re - (right.re[n] as number), s.im - (right.im[n] as number));
+    const off = (s: Complex, right: Columns): number =>
+      Math.hypot(s.re - (right.re[n] as number), s.im - (right.im[n] as number));
     return Math.max(off(s11, spec.s11), off(s21, spec.s21));
   });
 }
@@ -65,8 +75,16 @@ interface Form {
 const FORMS: readonly Form[] = [
   { name: 'polynomials', make: (polynomials) => polynomials, limit: () => 1e-13 },
   { name: 'transversal', make: transversal, limit: () => 3e-13 },
-  { name: 'folded', make: (polynomials) => folded(transversal(polynomials)).matrix, limit: (order) => (order <= 48 ? 1e-12 : 3e-12) },
-  { name: 'arrow', make: (polynomials) => arrow(transversal(polynomials)).matrix, limit: (order) => (order <= 48 ? 1e-12 : 3e-12) },
+  {
+    name: 'folded',
+    make: (polynomials) => folded(transversal(polynomials)).matrix,
+    limit: (order) => (order <= 48 ? 1e-12 : 3e-12),
+  },
+  {
+    name: 'arrow',
+    make: (polynomials) => arrow(transversal(polynomials)).matrix,
+    limit: (order) => (order <= 48 ? 1e-12 : 3e-12),
+  },
 ];
 
 describe('complex S against 300 many-digit references', () => {
@@ -85,7 +103,8 @@ describe('complex S against 300 many-digit references', () => {
         worst[kind] = Math.max(worst[kind], error);
         worst.ratio = Math.max(worst.ratio, error / room);
         if (kind === 'ordinary' && error > limit(spec.order)) worst.narrow++;
-        if (!(error <= room)) beyond.push(`spec ${spec.id}, order ${spec.order}, frequency ${n}: ${error} above ${room}`);
+        if (!(error <= room))
+          beyond.push(`spec ${spec.id}, order ${spec.order}, frequency ${n}: ${error} above ${room}`);
       });
     }
     console.log(
@@ -109,8 +128,15 @@ describe('the reference itself', () => {
     const orders = reference.remakeIds.map((id) => reference.specs[id]?.order as number);
     expect(orders).toHaveLength(12);
     expect(Math.max(...orders)).toBeGreaterThanOrEqual(48);
-    const remade = execFileSync('/usr/bin/python3', ['test/reference/make_reference.py', 'remake'], { cwd: ROOT, encoding: 'utf8', maxBuffer: 2 ** 26 });
-    const lines = remade.split('\n').filter((line) => line.startsWith('{"id"')).map((line) => line.replace(/,$/, ''));
+    const remade = execFileSync('/usr/bin/python3', ['test/reference/make_reference.py', 'remake'], {
+      cwd: ROOT,
+      encoding: 'utf8',
+      maxBuffer: 2 ** 26,
+    });
+    const lines = remade
+      .split('\n')
+      .filter((line) => line.startsWith('{"id"'))
+      .map((line) => line.replace(/,$/, ''));
     const stored = new Set(text.split('\n').map((line) => line.replace(/,$/, '')));
     expect(lines).toHaveLength(12);
     expect(lines.filter((line) => !stored.has(line))).toEqual([]);
@@ -119,10 +145,16 @@ describe('the reference itself', () => {
   it.skipIf(!hasMpmath())('agrees with matrices solved at 40 digits', () => {
     const cases = [3, 130, 276].map((id) => {
       const spec = reference.specs[id] as Spec;
-      return { spec, matrix: folded(transversal(generalizedChebyshev(spec))).matrix, omega: spec.omega.filter((_, n) => n % 20 === 0) };
+      return {
+        spec,
+        matrix: folded(transversal(generalizedChebyshev(spec))).matrix,
+        omega: spec.omega.filter((_, n) => n % 20 === 0),
+      };
     });
     const input = JSON.stringify(cases.map(({ matrix, omega }) => ({ values: matrix.values, omega })));
-    const answers: { s11: Columns; s21: Columns }[] = JSON.parse(execFileSync('/usr/bin/python3', ['test/reference/evaluate_matrix.py'], { cwd: ROOT, input, encoding: 'utf8' }));
+    const answers: { s11: Columns; s21: Columns }[] = JSON.parse(
+      execFileSync('/usr/bin/python3', ['test/reference/evaluate_matrix.py'], { cwd: ROOT, input, encoding: 'utf8' }),
+    );
     cases.forEach(({ matrix, omega }, n) => {
       omega.forEach((w, k) => {
         const { s11, s21 } = scatteringAt(matrix, w);

@@ -16,7 +16,10 @@ interface Example {
 /** TypeScript blocks of a Markdown file. */
 function markdownExamples(file: string): Example[] {
   const text = readFileSync(resolve(ROOT, file), 'utf8');
-  return [...text.matchAll(/```ts\n([\s\S]*?)```/g)].map((match, n) => ({ where: `${file} block ${n + 1}`, code: match[1] ?? '' }));
+  return [...text.matchAll(/```ts\n([\s\S]*?)```/g)].map((match, n) => ({
+    where: `${file} block ${n + 1}`,
+    code: match[1] ?? '',
+  }));
 }
 
 /** The @example of every doc comment in src, up to the next tag. */
@@ -26,7 +29,10 @@ function commentExamples(): Example[] {
   return files.flatMap((name) => {
     const text = readFileSync(resolve(src, name), 'utf8');
     return [...text.matchAll(/\/\*\*[\s\S]*?\*\//g)].flatMap((comment) => {
-      const lines = comment[0].replace(/\*\/$/, '').split('\n').map((line) => line.replace(/^\s*\* ?/, ''));
+      const lines = comment[0]
+        .replace(/\*\/$/, '')
+        .split('\n')
+        .map((line) => line.replace(/^\s*\* ?/, ''));
       const start = lines.findIndex((line) => line.startsWith('@example'));
       if (start < 0) return [];
       const rest = lines.slice(start + 1);
@@ -80,13 +86,18 @@ function run({ code }: Example): void {
 describe('examples', () => {
   const examples = [...commentExamples(), ...markdownExamples('README.md'), ...markdownExamples('DEVELOPERS.md')];
 
-  it.each(examples.map((example, n) => [`${n + 1} ${example.where}`, example] as const))('%s runs and prints what it says', (_, example) => {
-    run(example);
-  });
+  it.each(examples.map((example, n) => [`${n + 1} ${example.where}`, example] as const))(
+    '%s runs and prints what it says',
+    (_, example) => {
+      run(example);
+    },
+  );
 
   it('cover every public function', () => {
     const code = examples.map((example) => example.code).join('\n');
-    const functions = Object.entries(irisloom).filter(([name, value]) => typeof value === 'function' && /^[a-z]/.test(name)).map(([name]) => name);
+    const functions = Object.entries(irisloom)
+      .filter(([name, value]) => typeof value === 'function' && /^[a-z]/.test(name))
+      .map(([name]) => name);
     expect(functions.filter((name) => !code.includes(`${name}(`))).toEqual([]);
   });
 

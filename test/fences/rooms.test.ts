@@ -29,7 +29,17 @@ const PACKAGES: Record<string, readonly string[]> = {
 };
 
 /** Words of the edge that no core file may hold. */
-const EDGE_WORDS = [/\bMath\.random\b/, /\bDate\b\s*[.(]/, /\bconsole\./, /\bprocess\./, /\bsetTimeout\b/, /\bfetch\(/, /\beval\(/, /\bIntl\./, /\.toLocale/];
+const EDGE_WORDS = [
+  /\bMath\.random\b/,
+  /\bDate\b\s*[.(]/,
+  /\bconsole\./,
+  /\bprocess\./,
+  /\bsetTimeout\b/,
+  /\bfetch\(/,
+  /\beval\(/,
+  /\bIntl\./,
+  /\.toLocale/,
+];
 
 interface Import {
   readonly file: string;
@@ -47,23 +57,27 @@ const roomOf = (file: string): string => {
   return rest.length === 0 ? 'root' : first;
 };
 
-export function faultsOf(file: string, text: string): string[] {
+function faultsOf(file: string, text: string): string[] {
   const room = roomOf(file);
   const here = relative(SRC, file);
   const faults: string[] = [];
-  const imports: Import[] = ts.preProcessFile(text, true, true).importedFiles.map(({ fileName }) => ({ file: here, target: fileName }));
+  const imports: Import[] = ts
+    .preProcessFile(text, true, true)
+    .importedFiles.map(({ fileName }) => ({ file: here, target: fileName }));
   for (const { target } of imports) {
     if (target.startsWith('node:')) {
       if (room !== 'command-line') faults.push(`${here}: ${target} outside the edge`);
     } else if (!target.startsWith('.')) {
-      if (!(PACKAGES[room] ?? []).includes(target)) faults.push(`${here}: package ${target} is not on the list of ${room}`);
+      if (!(PACKAGES[room] ?? []).includes(target))
+        faults.push(`${here}: package ${target} is not on the list of ${room}`);
     } else {
       const full = resolve(dirname(file), target);
       const other = roomOf(full);
       if (other === room) continue;
       if (room === 'root') {
         if (other === 'command-line') faults.push(`${here}: the core imports the runner`);
-        else if (relative(SRC, full).split('/')[1] !== 'index.js') faults.push(`${here}: reaches past the index of ${other}`);
+        else if (relative(SRC, full).split('/')[1] !== 'index.js')
+          faults.push(`${here}: reaches past the index of ${other}`);
         continue;
       }
       if (other === 'root') {
@@ -71,7 +85,8 @@ export function faultsOf(file: string, text: string): string[] {
         continue;
       }
       if (ORDER.indexOf(other) > ORDER.indexOf(room)) faults.push(`${here}: imports ${other}, which is to its right`);
-      if (relative(SRC, full).split('/').slice(1).join('/') !== 'index.js') faults.push(`${here}: reaches past the index of ${other}`);
+      if (relative(SRC, full).split('/').slice(1).join('/') !== 'index.js')
+        faults.push(`${here}: reaches past the index of ${other}`);
     }
   }
   if (room !== 'command-line') {

@@ -1,5 +1,14 @@
 import { execFileSync } from 'node:child_process';
-import { existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
+import {
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  rmSync,
+  symlinkSync,
+  writeFileSync,
+} from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join, resolve } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
@@ -14,7 +23,13 @@ let folder = '';
 beforeAll(() => {
   folder = mkdtempSync(join(tmpdir(), 'irisloom-package-'));
   execFileSync('npm', ['run', 'build'], { cwd: ROOT, stdio: 'ignore' });
-  const listed = JSON.parse(execFileSync('npm', ['pack', '--json', '--ignore-scripts', '--pack-destination', folder], { cwd: ROOT, encoding: 'utf8', stdio: ['ignore', 'pipe', 'ignore'] }));
+  const listed = JSON.parse(
+    execFileSync('npm', ['pack', '--json', '--ignore-scripts', '--pack-destination', folder], {
+      cwd: ROOT,
+      encoding: 'utf8',
+      stdio: ['ignore', 'pipe', 'ignore'],
+    }),
+  );
   const modules = join(folder, 'node_modules');
   mkdirSync(join(modules, 'irisloom'), { recursive: true });
   const [entry] = Array.isArray(listed) ? listed : Object.values(listed);
@@ -51,7 +66,17 @@ describe('the packed package', () => {
        // @ts-expect-error an order is a number
        design({ passband: { lowerHz: 1, upperHz: 2 }, order: '3', returnLossDb: 20 });`,
     );
-    const options = ['--noEmit', '--strict', '--skipLibCheck', '--module', 'nodenext', '--moduleResolution', 'nodenext', '--target', 'es2022'];
+    const options = [
+      '--noEmit',
+      '--strict',
+      '--skipLibCheck',
+      '--module',
+      'nodenext',
+      '--moduleResolution',
+      'nodenext',
+      '--target',
+      'es2022',
+    ];
     expect(() => execFileSync('npx', ['tsc', ...options, 'use.ts'], { cwd: folder, stdio: 'pipe' })).not.toThrow();
   });
 
@@ -71,6 +96,7 @@ describe('the packed package', () => {
   });
 
   it('names exact versions of its dependencies', () => {
-    for (const version of Object.values({ ...manifest.dependencies, ...manifest.devDependencies })) expect(version).toMatch(/^\d+\.\d+\.\d+$/);
+    for (const version of Object.values({ ...manifest.dependencies, ...manifest.devDependencies }))
+      expect(version).toMatch(/^\d+\.\d+\.\d+$/);
   });
 });

@@ -1,5 +1,5 @@
 import { Complex as ComplexNumber } from 'complex.js';
-import { design, FilterFailure, type Complex, scatteringAt } from '../../src/index.js';
+import { type Complex, design, FilterFailure, scatteringAt } from '../../src/index.js';
 
 /** Seeded stream of numbers in [0, 1) (mulberry32, T. Ettinger, public domain algorithm; from memory). */
 export function stream(seed: number): () => number {
@@ -38,7 +38,9 @@ export function randomSpec(random: () => number): RandomSpec {
     } else if (adversarial && kind < 0.6 && transmissionZeros.length > 0 && typeof transmissionZeros[0] === 'number') {
       transmissionZeros.push(random() < 0.5 ? transmissionZeros[0] : transmissionZeros[0] * (1 + 1e-9 * random()));
     } else {
-      transmissionZeros.push(adversarial && random() < 0.3 ? (random() < 0.5 ? 1.001 : 900 * (1 + random())) : axisZero());
+      transmissionZeros.push(
+        adversarial && random() < 0.3 ? (random() < 0.5 ? 1.001 : 900 * (1 + random())) : axisZero(),
+      );
     }
   }
   return { order, returnLossDb: 10 + 25 * random(), transmissionZeros, topology: random() < 0.5 ? 'folded' : 'arrow' };
