@@ -1,5 +1,6 @@
 import { omegaFromHz } from '../forms/index.js';
-import { argumentFailure, type Curves, checkFrequencies, type Model, sweeper } from '../response/index.js';
+import { refusal } from '../numerics/index.js';
+import { type Curves, checkFrequencies, type Model, sweeper } from '../response/index.js';
 import { bandOf, type LossyBand, lossOf } from './band.js';
 
 /** A sweep in hertz; the delay is in seconds. */
@@ -42,7 +43,7 @@ export function sweepHz(model: Model, band: LossyBand, frequenciesHz: ArrayLike<
   const grid = checkFrequencies(frequenciesHz, 'frequenciesHz');
   grid.forEach((hz, n) => {
     if (!(hz > 0))
-      throw argumentFailure(
+      throw refusal(
         'E_FREQUENCY',
         `frequenciesHz[${n}]`,
         hz,

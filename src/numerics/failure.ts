@@ -40,3 +40,9 @@ export class FilterFailure extends Error {
     this.faults = detail.faults ?? [];
   }
 }
+
+/** A refusal in the package's message form: what was found, what is allowed, what to do. Long values are cut. */
+export function refusal(code: string, argument: string, value: unknown, limit: unknown, hint: string): FilterFailure {
+  const message = `${code} ${argument}: found ${String(value).slice(0, 40)}; allowed ${limit}; do ${hint}`;
+  return new FilterFailure(code, message, { argument, value, limit, hint });
+}

@@ -24,7 +24,7 @@ export type { Complex } from './complex-type.js';
 export type { Doubled } from './doubled.js';
 export { doubledAdd, doubledDivide, doubledDot, doubledMultiply, doubledSquareRoot } from './doubled.js';
 export type { FailureDetail } from './failure.js';
-export { FilterFailure } from './failure.js';
+export { FilterFailure, refusal } from './failure.js';
 export { EPS } from './limits.js';
 export { localMinimum } from './local-minimum.js';
 export type { RisingFunction } from './monotone-root.js';

@@ -7,7 +7,7 @@ export type { ComplexSamples, Curves } from './curves.js';
 export type { Landmark } from './landmarks.js';
 export { landmarks } from './landmarks.js';
 export type { Model } from './model.js';
-export { argumentFailure, checkFrequencies, isMatrix } from './model.js';
+export { checkFrequencies, isMatrix } from './model.js';
 export { scatteringAt } from './scattering-at.js';
 export type { Sweep, SweepOptions } from './sweep.js';
 export { sweep, sweeper } from './sweep.js';

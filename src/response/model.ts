@@ -1,5 +1,5 @@
 import type { CouplingMatrix, FilterPolynomials } from '../forms/index.js';
-import { FilterFailure } from '../numerics/index.js';
+import { refusal } from '../numerics/index.js';
 
 /** Anything with a response: a transfer function in product form or a coupling matrix. */
 export type Model = FilterPolynomials | CouplingMatrix;
@@ -8,27 +8,10 @@ export function isMatrix(model: Model): model is CouplingMatrix {
   return 'values' in model;
 }
 
-/** One failure in the package's message form. */
-export function argumentFailure(
-  code: string,
-  argument: string,
-  value: unknown,
-  limit: string,
-  hint: string,
-): FilterFailure {
-  const shown = String(value).slice(0, 40);
-  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, {
-    argument,
-    value,
-    limit,
-    hint,
-  });
-}
-
 /** A copy of a grid, checked. @throws FilterFailure E_TYPE, E_NOT_FINITE */
 export function checkFrequencies(omega: ArrayLike<number>, name: string): Float64Array {
   if (omega === null || typeof omega !== 'object' || !Number.isInteger(omega.length)) {
-    throw argumentFailure('E_TYPE', name, omega, 'an array of numbers', 'give an array, also for one frequency');
+    throw refusal('E_TYPE', name, omega, 'an array of numbers', 'give an array, also for one frequency');
   }
   const grid = new Float64Array(omega.length);
   for (let n = 0; n < grid.length; n++) {
@@ -41,10 +24,8 @@ export function checkFrequencies(omega: ArrayLike<number>, name: string): Float6
 
 /** @throws FilterFailure E_TYPE, E_NOT_FINITE */
 export function checkFrequency(omega: unknown, name: string): number {
-  if (typeof omega !== 'number')
-    throw argumentFailure('E_TYPE', name, omega, 'numbers only', 'replace the entry by a number');
-  if (!Number.isFinite(omega))
-    throw argumentFailure('E_NOT_FINITE', name, omega, 'finite numbers', 'replace the entry');
+  if (typeof omega !== 'number') throw refusal('E_TYPE', name, omega, 'numbers only', 'replace the entry by a number');
+  if (!Number.isFinite(omega)) throw refusal('E_NOT_FINITE', name, omega, 'finite numbers', 'replace the entry');
   return omega;
 }
 
@@ -53,7 +34,7 @@ export function checkLoss(loss: number | readonly number[] | undefined, order: n
   if (loss === undefined) return 0;
   if (typeof loss === 'number') return checkOneLoss(loss, 'loss');
   if (!Array.isArray(loss) || loss.length !== order) {
-    throw argumentFailure(
+    throw refusal(
       'E_LOSS',
       'loss',
       Array.isArray(loss) ? `${loss.length} values` : loss,
@@ -67,6 +48,6 @@ export function checkLoss(loss: number | readonly number[] | undefined, order: n
 
 function checkOneLoss(value: number, name: string): number {
   checkFrequency(value, name);
-  if (value < 0) throw argumentFailure('E_LOSS', name, value, 'numbers >= 0', 'drop the sign: loss is f0/(B*Qu)');
+  if (value < 0) throw refusal('E_LOSS', name, value, 'numbers >= 0', 'drop the sign: loss is f0/(B*Qu)');
   return value;
 }

@@ -52,16 +52,17 @@ export interface ModeTerms {
 /**
  * Splits a pole form into modes when every resonance couples equally to both ports; undefined otherwise.
  *
- * An eigenvector is known to about N*eps*norm/gap, so that much difference between the two couplings is taken for
- * rounding; the average replaces both.
+ * The two couplings may differ by the rounding of an eigenvector, N*eps of the norm; their average replaces both. Where an
+ * even and an odd resonance nearly coincide the computed eigenvectors mix, the couplings differ by more, and the network is
+ * left to the general sums, to which any basis of the pair is as good.
  */
 export function modeForm({ lambda, source, load, ports }: PoleForm): ModeForm | undefined {
   if (ports.ss !== ports.ll) return undefined;
   const norm = Math.max(...lambda.map(Math.abs), ...source.map(Math.abs), ...load.map(Math.abs));
+  const room = 64 * lambda.length * EPS * norm;
   const even: number[] = [];
   const odd: number[] = [];
   for (let k = 0; k < lambda.length; k++) {
-    const room = (16 * lambda.length * EPS * norm * norm) / gapAround(lambda, k, norm);
     const [s, l] = [source[k] as number, load[k] as number];
     if (!(Math.abs(Math.abs(s) - Math.abs(l)) <= room)) return undefined;
     (s * l >= 0 ? even : odd).push(k);
@@ -72,12 +73,4 @@ export function modeForm({ lambda, source, load, ports }: PoleForm): ModeForm | 
     weight: Float64Array.from(indices, (k) => (Math.abs(source[k] as number) + Math.abs(load[k] as number)) ** 2 / 2),
   });
   return { even: terms(even, ports.ss + ports.sl), odd: terms(odd, ports.ss - ports.sl) };
-}
-
-function gapAround(lambda: Float64Array, k: number, norm: number): number {
-  let gap = norm;
-  for (let i = 0; i < lambda.length; i++) {
-    if (i !== k) gap = Math.min(gap, Math.abs((lambda[i] as number) - (lambda[k] as number)));
-  }
-  return gap;
 }

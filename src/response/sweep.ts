@@ -1,11 +1,11 @@
 import type { CouplingMatrix, FilterPolynomials } from '../forms/index.js';
-import { complex } from '../numerics/index.js';
+import { complex, refusal } from '../numerics/index.js';
 import { rowsOf } from '../topology/index.js';
 import { type Curves, emptyCurves } from './curves.js';
 import { type SolvedPoint, solvePoint } from './direct-solve.js';
 import { sweepGeneral } from './general-kernel.js';
 import { sweepLosslessSymmetric } from './lossless-kernel.js';
-import { argumentFailure, checkFrequencies, checkLoss, isMatrix, type Model } from './model.js';
+import { checkFrequencies, checkLoss, isMatrix, type Model } from './model.js';
 import { modeForm, poleForm } from './pole-form.js';
 import { delayOfPolynomials, scatteringOfPolynomials } from './polynomial-response.js';
 import { eliminationPlan, flatten } from './sparse-factor.js';
@@ -53,7 +53,7 @@ function polynomialSweeper(
   loss: number | Float64Array,
 ): (omega: Float64Array) => Curves {
   if (typeof loss !== 'number') {
-    throw argumentFailure(
+    throw refusal(
       'E_LOSS',
       'loss',
       'a different loss for each resonator',

@@ -1,5 +1,6 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
-import { entryFailure, matrixFrom, type Rows, rowsOf } from './matrix-shape.js';
+import { refusal } from '../numerics/index.js';
+import { matrixFrom, type Rows, rowsOf } from './matrix-shape.js';
 import { checkPivot, turn } from './rotate.js';
 
 /** Which entry to annihilate by a rotation of which pair of resonators. */
@@ -64,7 +65,7 @@ function orderedElement(
   j: number,
 ): readonly [number, number?] {
   if (!Array.isArray(element) || element.length !== 2)
-    throw entryFailure('E_TYPE', 'element', element, 'a pair [k, l]', 'name one entry of the matrix');
+    throw refusal('E_TYPE', 'element', element, 'a pair [k, l]', 'name one entry of the matrix');
   const [k, l] = element;
   const inside = (node: number): boolean => Number.isInteger(node) && node >= 0 && node < rows.length;
   if (inside(k) && inside(l)) {
@@ -74,7 +75,7 @@ function orderedElement(
     if (kShared && !lShared) return [k, l];
     if (lShared && !kShared) return [l, k];
   }
-  throw entryFailure(
+  throw refusal(
     'E_ELEMENT',
     'element',
     `(${k},${l})`,

@@ -1,6 +1,7 @@
 import type { CouplingMatrix } from '../forms/index.js';
+import type { EliminationStep } from './elimination-step.js';
 import { folded } from './folded.js';
-import { type EliminationStep, type Reduced, reduce } from './reduction.js';
+import { type Reduced, reduce } from './reduction.js';
 
 /**
  * Arrow form: a chain source, 1, 2, ..., N, with the load coupled to resonator N and, for nz finite zeros, to the nz nodes

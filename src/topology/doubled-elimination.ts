@@ -1,7 +1,7 @@
 import type { Rotation } from '../forms/index.js';
 import { type Doubled, doubledAdd, doubledDivide, doubledMultiply, doubledSquareRoot } from '../numerics/index.js';
+import type { EliminationStep } from './elimination-step.js';
 import type { Rows } from './matrix-shape.js';
-import type { EliminationStep } from './reduction.js';
 
 /** A square matrix of pairs; an entry that is exactly 0 costs nothing. */
 type DoubledRows = Doubled[][];

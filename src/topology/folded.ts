@@ -1,5 +1,6 @@
 import type { CouplingMatrix } from '../forms/index.js';
-import { type EliminationStep, type Reduced, reduce } from './reduction.js';
+import type { EliminationStep } from './elimination-step.js';
+import { type Reduced, reduce } from './reduction.js';
 
 /**
  * Folded form: two rows of resonators, 1..N from the source and back to the load, with couplings across.

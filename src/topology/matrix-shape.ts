@@ -1,5 +1,5 @@
 import type { CouplingMatrix } from '../forms/index.js';
-import { FilterFailure } from '../numerics/index.js';
+import { type FilterFailure, refusal } from '../numerics/index.js';
 
 /** Working copy of a coupling matrix: rows of doubles that a routine may write. */
 export type Rows = Float64Array[];
@@ -42,9 +42,8 @@ function rowOf(row: readonly number[], i: number, size: number): Float64Array {
     const value: unknown = row[j];
     const where = `matrix.values[${i}][${j}]`;
     if (typeof value !== 'number')
-      throw entryFailure('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
-    if (!Number.isFinite(value))
-      throw entryFailure('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
+      throw refusal('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
+    if (!Number.isFinite(value)) throw refusal('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
     return value === 0 ? 0 : value;
   });
 }
@@ -52,7 +51,7 @@ function rowOf(row: readonly number[], i: number, size: number): Float64Array {
 function checkSymmetry(rows: Rows, row: Float64Array, i: number, j: number): void {
   const mirror = rows[j]?.[i];
   if (row[j] !== mirror) {
-    throw entryFailure(
+    throw refusal(
       'E_NOT_SYMMETRIC',
       `matrix.values[${i}][${j}]`,
       row[j],
@@ -63,24 +62,7 @@ function checkSymmetry(rows: Rows, row: Float64Array, i: number, j: number): voi
 }
 
 function shapeFailure(argument: string, value: unknown, limit: string, hint: string): FilterFailure {
-  return entryFailure('E_MATRIX_SHAPE', argument, value, limit, hint);
-}
-
-/** One failure in the package's message form. */
-export function entryFailure(
-  code: string,
-  argument: string,
-  value: unknown,
-  limit: string,
-  hint: string,
-): FilterFailure {
-  const shown = String(value).slice(0, 40);
-  return new FilterFailure(code, `${code} ${argument}: found ${shown}; allowed ${limit}; do ${hint}`, {
-    argument,
-    value,
-    limit,
-    hint,
-  });
+  return refusal('E_MATRIX_SHAPE', argument, value, limit, hint);
 }
 
 /** Rows back to a frozen-by-type coupling matrix; the upper triangle rules, so that (i,j) and (j,i) never differ. */

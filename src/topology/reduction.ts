@@ -1,19 +1,10 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
 import { annihilationAngle, clear } from './annihilate.js';
 import { eliminateDoubled } from './doubled-elimination.js';
+import type { EliminationStep } from './elimination-step.js';
 import { matrixFrom, normOf, type Rows, rowsOf } from './matrix-shape.js';
 import { refine } from './refine.js';
 import { flip } from './rotate.js';
-
-/**
- * One step of a fixed elimination: `element` = [kept, turned] is annihilated by turning `pivot`, which contains `turned`;
- * `against` is the node whose coupling to `kept` survives, so that later corrections have something to divide by.
- */
-export interface EliminationStep {
-  readonly element: readonly [number, number];
-  readonly pivot: readonly [number, number];
-  readonly against: number;
-}
 
 /** What distinguishes one fixed form from another. */
 export interface ReductionPlan {

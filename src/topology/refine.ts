@@ -1,6 +1,6 @@
 import { doubledDot } from '../numerics/index.js';
+import type { EliminationStep } from './elimination-step.js';
 import type { Rows } from './matrix-shape.js';
-import type { EliminationStep } from './reduction.js';
 
 /** A rotation angle of the correction sweep above this is no rounding error: the plain result is kept then. */
 const LARGEST_CORRECTION = 1e-8;

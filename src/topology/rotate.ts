@@ -1,5 +1,6 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
-import { entryFailure, matrixFrom, type Rows, rowsOf } from './matrix-shape.js';
+import { refusal } from '../numerics/index.js';
+import { matrixFrom, type Rows, rowsOf } from './matrix-shape.js';
 
 /**
  * One plane rotation of a coupling matrix, `M' = R M R^T`: the response does not change.
@@ -36,7 +37,7 @@ export function rotate(matrix: CouplingMatrix, rotation: Rotation): CouplingMatr
 export function applyRotations(matrix: CouplingMatrix, rotations: readonly Rotation[]): CouplingMatrix {
   const rows = rowsOf(matrix);
   if (!Array.isArray(rotations))
-    throw entryFailure('E_TYPE', 'rotations', rotations, 'an array of rotations', 'give [{ pivot: [i, j], angle }]');
+    throw refusal('E_TYPE', 'rotations', rotations, 'an array of rotations', 'give [{ pivot: [i, j], angle }]');
   rotations.forEach((rotation, n) => {
     checkRotation(rotation, matrix.order, `rotations[${n}]`);
     turn(rows, rotation.pivot[0], rotation.pivot[1], rotation.angle);
@@ -48,15 +49,9 @@ export function applyRotations(matrix: CouplingMatrix, rotations: readonly Rotat
 /** Pivot nodes are resonators; [i, i] is allowed only for a step that turns nothing (angle 0) and flips. */
 export function checkRotation(rotation: Rotation, order: number, where: string): void {
   if (typeof rotation?.angle !== 'number')
-    throw entryFailure(
-      'E_TYPE',
-      `${where}.angle`,
-      rotation?.angle,
-      'a number of radians',
-      'give { pivot: [i, j], angle }',
-    );
+    throw refusal('E_TYPE', `${where}.angle`, rotation?.angle, 'a number of radians', 'give { pivot: [i, j], angle }');
   if (!Number.isFinite(rotation.angle))
-    throw entryFailure('E_NOT_FINITE', `${where}.angle`, rotation.angle, 'finite radians', 'replace the angle');
+    throw refusal('E_NOT_FINITE', `${where}.angle`, rotation.angle, 'finite radians', 'replace the angle');
   checkPivot(rotation.pivot, order, where, rotation.angle === 0);
   for (const node of rotation.flip ?? []) checkResonator(node, order, `${where}.flip`);
 }
@@ -64,11 +59,11 @@ export function checkRotation(rotation: Rotation, order: number, where: string):
 /** @throws FilterFailure E_PIVOT unless the pivot names two different resonators. */
 export function checkPivot(pivot: readonly [number, number], order: number, where: string, mayCoincide = false): void {
   if (!Array.isArray(pivot) || pivot.length !== 2)
-    throw entryFailure('E_TYPE', `${where}.pivot`, pivot, 'a pair [i, j]', 'name two resonators');
+    throw refusal('E_TYPE', `${where}.pivot`, pivot, 'a pair [i, j]', 'name two resonators');
   checkResonator(pivot[0], order, `${where}.pivot[0]`);
   checkResonator(pivot[1], order, `${where}.pivot[1]`);
   if (pivot[0] === pivot[1] && !mayCoincide) {
-    throw entryFailure(
+    throw refusal(
       'E_PIVOT',
       `${where}.pivot`,
       `[${pivot[0]}, ${pivot[1]}]`,
@@ -81,7 +76,7 @@ export function checkPivot(pivot: readonly [number, number], order: number, wher
 function checkResonator(node: number, order: number, where: string): void {
   if (Number.isInteger(node) && node >= 1 && node <= order) return;
   const what = node === 0 ? '0 (the source)' : node === order + 1 ? `${node} (the load)` : node;
-  throw entryFailure(
+  throw refusal(
     'E_PIVOT',
     where,
     what,
