@@ -3,6 +3,7 @@ import { butterworth, chebyshev, generalizedChebyshev } from '../../src/approxim
 import type { FilterPolynomials } from '../../src/forms/index.js';
 import { EPS } from '../../src/numerics/index.js';
 import { transversal } from '../../src/synthesis/index.js';
+import { folded } from '../../src/topology/index.js';
 import { distance, entry, isSymmetric, responseGap, sharpness } from '../support/models.js';
 import { LONG_SPECS, SPECS } from '../support/specs.js';
 
@@ -131,3 +132,22 @@ test('transversal does not write its argument, and poles may come in any order',
   expect(responseGap(matrix, shuffled)).toBeLessThan(1e-14);
   expect(distance({ re: entry(matrix, 1, 1), im: 0 }, { re: entry(shuffled, 1, 1), im: 0 })).toBeLessThan(1e-15);
 });
+
+test.each([
+  [30, 34],
+  [32, 31],
+  [33, 30],
+  [40, 24.879111523739994],
+  [41, 37],
+  [48, 35],
+  [52, 34],
+  [84, 29],
+] as const)(
+  'transversal(chebyshev %d at %d dB), whose outermost resonances coincide to rounding, has the response of the polynomials',
+  (order, returnLossDb) => {
+    const polynomials = chebyshev({ order, returnLossDb });
+    const start = transversal(polynomials);
+    expect(responseGap(start, polynomials)).toBeLessThan(1e-11);
+    expect(responseGap(folded(start).matrix, polynomials)).toBeLessThan(1e-11);
+  },
+);
