@@ -49,7 +49,7 @@ describe('eight poles, 20 dB, one symmetric pair of zeros', () => {
       if (digits !== null) expect(Math.abs(value - digits!)).toBeLessThan(2e-4);
       expect(Math.abs(value - numbers(row['g1,g2,g3,g4,J3,J4'])[n]!)).toBeLessThan(1e-11);
     });
-    const [mS1, m12, m23, m34, m45, m36] = numbers(row['M']);
+    const [mS1, m12, m23, m34, m45, m36] = numbers(row.M);
     const line = [
       entry(matrix, 0, 1),
       entry(matrix, 1, 2),

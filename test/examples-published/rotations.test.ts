@@ -30,8 +30,8 @@ function replay(start: CouplingMatrix, steps: readonly Step[]): { matrix: Coupli
 // rotations from memory; angles and matrix are 50-digit anchors.
 describe('transversal to folded, order 4', () => {
   const { recomputed } = example('rot-folded-4');
-  const start = matrixFrom(example('gc-4-2-asym-RL22').recomputed['transversal']);
-  const steps = recomputed['sequence'] as Step[];
+  const start = matrixFrom(example('gc-4-2-asym-RL22').recomputed.transversal);
+  const steps = recomputed.sequence as Step[];
 
   test('the sequence gives its angles and its matrix', () => {
     const { matrix, angles } = replay(start, steps);
@@ -40,7 +40,7 @@ describe('transversal to folded, order 4', () => {
       expect(Math.abs(angles[n]! - theta_deg)).toBeLessThan(1e-9);
     });
     // The published start is that of the dual network: its folded form differs in signs only.
-    expect(gapUpToSigns(matrix, matrixFrom(recomputed['folded']))).toBeLessThan(1e-11);
+    expect(gapUpToSigns(matrix, matrixFrom(recomputed.folded))).toBeLessThan(1e-11);
   });
 
   test('folded() takes the same steps', () => {
@@ -53,7 +53,7 @@ describe('transversal to folded, order 4', () => {
       .forEach(({ angle }, n) => {
         expect(Math.abs((angle * 180) / Math.PI - steps[n]!.theta_deg)).toBeLessThan(1e-9);
       });
-    expect(gapUpToSigns(matrix, matrixFrom(recomputed['folded']))).toBeLessThan(1e-11);
+    expect(gapUpToSigns(matrix, matrixFrom(recomputed.folded))).toBeLessThan(1e-11);
   });
 });
 
@@ -65,12 +65,12 @@ describe('arrow form of the order-8 example', () => {
   const start = transversal(generalizedChebyshev(request));
 
   test('arrow() gives the matrix', () => {
-    expect(gapUpToSigns(arrow(start).matrix, matrixFrom(recomputed['arrow']))).toBeLessThan(1e-11);
+    expect(gapUpToSigns(arrow(start).matrix, matrixFrom(recomputed.arrow))).toBeLessThan(1e-11);
   });
 
   test('the first row of the published sequence gives its angles', () => {
-    const steps = recomputed['first_rotations'] as Step[];
-    const { angles } = replay(matrixFrom(example('gc-8-3-asym-RL23').recomputed['transversal']), steps);
+    const steps = recomputed.first_rotations as Step[];
+    const { angles } = replay(matrixFrom(example('gc-8-3-asym-RL23').recomputed.transversal), steps);
     steps.forEach(({ theta_deg }, n) => {
       expect(Math.abs(angles[n]! - theta_deg)).toBeLessThan(1e-9);
     });
@@ -82,8 +82,8 @@ describe('arrow form of the order-8 example', () => {
       for (let k = 8; k > row + 1; k--)
         steps.push({ annihilates: row === 0 ? `S,${k}` : `${row},${k}`, pivot: [row + 1, k], theta_deg: 0 });
     }
-    expect(steps).toHaveLength(recomputed['rotations'] as number);
-    expect(gapUpToSigns(replay(start, steps).matrix, matrixFrom(recomputed['arrow']))).toBeLessThan(1e-10);
+    expect(steps).toHaveLength(recomputed.rotations as number);
+    expect(gapUpToSigns(replay(start, steps).matrix, matrixFrom(recomputed.arrow))).toBeLessThan(1e-10);
   });
 });
 
@@ -97,8 +97,8 @@ describe('box section from a trisection by its cross pivot', () => {
 
   test('one rotation gives the angle and the matrix', () => {
     const { matrix, rotation } = boxOf(2.394);
-    expect((rotation.angle * 180) / Math.PI).toBeCloseTo(recomputed['theta_deg'] as number, 9);
-    expect(gapUpToSigns(matrix, matrixFrom(recomputed['box']))).toBeLessThan(1e-11);
+    expect((rotation.angle * 180) / Math.PI).toBeCloseTo(recomputed.theta_deg as number, 9);
+    expect(gapUpToSigns(matrix, matrixFrom(recomputed.box))).toBeLessThan(1e-11);
     expect(responseGap(matrix, at(2.394))).toBeLessThan(1e-13);
     const names: Readonly<Record<string, readonly [number, number]>> = {
       M12: [1, 2],
@@ -133,17 +133,17 @@ describe('cul-de-sac form, order 7', () => {
   ).matrix;
 
   test('three rotations give the angles and the matrix', () => {
-    const log = recomputed['log'] as Step[];
+    const log = recomputed.log as Step[];
     const { matrix, angles } = replay(start, log);
     log.forEach(({ theta_deg }, n) => {
       expect(Math.abs(Math.abs(angles[n]!) - Math.abs(theta_deg))).toBeLessThan(1e-9);
     });
-    expect(gapUpToSigns(matrix, matrixFrom(recomputed['matrix']))).toBeLessThan(1e-10);
+    expect(gapUpToSigns(matrix, matrixFrom(recomputed.matrix))).toBeLessThan(1e-10);
     expect(responseGap(matrix, start)).toBeLessThan(1e-12);
   });
 
   test('applyRotations replays them', () => {
-    const log = recomputed['log'] as Step[];
+    const log = recomputed.log as Step[];
     const { matrix, angles } = replay(start, log);
     const rotations = log.map(({ pivot }, n) => ({ pivot, angle: (angles[n]! * Math.PI) / 180 }));
     expect(matrixGap(applyRotations(start, rotations), matrix)).toBeLessThan(1e-13);
