@@ -7,7 +7,6 @@ export const EXIT = {
   badInput: 2,
   certificate: 3,
   file: 4,
-  limit: 5,
   bug: 70,
   interrupted: 130,
 } as const;

@@ -9,7 +9,11 @@ import type { TextSink } from './world.js';
 function sink(stream: NodeJS.WriteStream): TextSink {
   stream.on('error', ({ code }: NodeJS.ErrnoException) => {
     // A reader that has seen enough closes the pipe: not our trouble. A full disk is trouble with a file.
-    if (code !== 'EPIPE') process.exit(EXIT.file);
+    if (code === 'EPIPE') return;
+    process.stderr.write(
+      `E_IO standard output: found the system error ${code}; allowed a place that takes text; free some space\n`,
+    );
+    process.exit(EXIT.file);
   });
   return { write: (text) => stream.write(text), isTerminal: stream.isTTY === true };
 }

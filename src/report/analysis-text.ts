@@ -57,7 +57,7 @@ function factLines(analysis: Analysis, unit: FrequencyUnit | undefined): readonl
   ];
   const hidden = dips.length - DIPS_LISTED;
   const more = hidden > 0 ? [`(${hidden} more dips not shown; --json lists them)`] : [];
-  const none = dips.length === 0 ? ['|S21| has no dip at any finite frequency.'] : [];
+  const none = dips.length === 0 ? ['|S21| has no dip between 10 and 220 dB.'] : [];
   return [...table(rows, 'lrl'), ...more, ...none];
 }
 

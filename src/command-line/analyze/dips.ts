@@ -8,6 +8,10 @@ const POINTS = 8001;
 const REACH = 1e3;
 /** Shallower minima are ripple. */
 const LEAST_DB = 10;
+/** Below this power (-220 dB) S21 of a matrix is rounding, with minima everywhere. */
+const FLOOR = 1e-22;
+/** A sample above this power (1 dB down) is ripple within the band: not worth following. */
+const RIPPLE = 0.794;
 /** Deeper than doubles tell. */
 const DEEPEST_DB = 300;
 
@@ -16,7 +20,7 @@ function gridOf(): Float64Array {
   return Float64Array.from({ length: POINTS }, (_, n) => Math.sinh(end * ((2 * n) / (POINTS - 1) - 1)));
 }
 
-/** Minima of |S21| at finite frequencies, at least 10 dB down, in rising order; lossless. */
+/** Minima of |S21|, 10 to 220 dB down at the samples beside them, in rising order; lossless. */
 export function dipsOf(matrix: CouplingMatrix): readonly Dip[] {
   const omega = gridOf();
   const { s21 } = sweep(matrix, omega);
@@ -28,7 +32,8 @@ export function dipsOf(matrix: CouplingMatrix): readonly Dip[] {
   const dips: Dip[] = [];
   for (let n = 1; n < POINTS - 1; n += 1) {
     const [before = 0, here = 0, after = 0] = [power[n - 1], power[n], power[n + 1]];
-    if (!(here < before && here <= after)) continue;
+    const isMinimum = here < before && here <= after && Math.min(before, after) > FLOOR;
+    if (!isMinimum || here > RIPPLE) continue;
     const { x, value } = localMinimum(powerAt, omega[n - 1] ?? 0, omega[n + 1] ?? 0);
     const attenuationDb = Math.min(DEEPEST_DB, -10 * Math.log10(Math.min(value, here)));
     if (attenuationDb >= LEAST_DB) dips.push({ omega: value <= here ? x : (omega[n] ?? 0), attenuationDb });

@@ -37,7 +37,7 @@ async function isSameFile(files: FileCalls, a: string, b: string): Promise<boole
   const [one, other] = await Promise.all(
     [a, b].map((path) =>
       files.stat(path, { bigint: true }).catch((error: unknown) => {
-        if (systemCode(error) === 'ENOENT') return undefined;
+        if (['ENOENT', 'ENOTDIR'].includes(systemCode(error) ?? '')) return undefined;
         throw error;
       }),
     ),

@@ -28,8 +28,8 @@ function readPivot(reading: Reading, value: JsonValue | undefined, path: Path, l
 
 /** An entry shares exactly one index with the pivot, or is the pivot. */
 function fits([i, j]: Pair, [k, l]: Pair): boolean {
-  const shared = [k, l].filter((node) => node === i || node === j).length;
-  return k !== l && (shared === 1 || shared === 2);
+  const common = [k, l].filter((node) => node === i || node === j).length;
+  return k !== l && (common === 1 || common === 2);
 }
 
 function readElement(reading: Reading, value: JsonValue, path: Path, last: number, pivot: Pair): Pair | undefined {
