@@ -183,10 +183,15 @@ export const rotationLaws: readonly Law[] = [
     [
       [
         'last bit of one triangle',
-        inRotation((turned) => ({
-          ...turned,
-          values: turned.values.map((row, i) => row.map((value, j) => (i > j ? value * (1 + EPS) : value))),
-        })),
+        // Only after the last step: the next rotation would refuse such a matrix.
+        (engine) => ({
+          ...engine,
+          applyRotations: (matrix, rotations) => {
+            const turned = engine.applyRotations(matrix, rotations);
+            const values = turned.values.map((row, i) => row.map((value, j) => (i > j ? value * (1 + EPS) : value)));
+            return { ...turned, values };
+          },
+        }),
       ],
       [
         'direct coupling turned too',
