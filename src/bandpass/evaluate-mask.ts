@@ -15,8 +15,8 @@ interface Prepared {
   readonly centerLossDb: number;
 }
 
-/** An open end is followed out to this many band widths; beyond, a response is within 1e-8 of its limit or still falling. */
-const OPEN_END_OMEGA = 1e4;
+/** An open end is followed out to this many band widths; beyond, a response is within 1e-11 of its limit or still falling. */
+const OPEN_END_OMEGA = 1e6;
 
 /**
  * Verdict of a response on a mask, one row a line, at the true worst point: not the worst of a grid but the minimum between

@@ -1,5 +1,5 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
-import { symmetricEigen } from '../numerics/index.js';
+import { refusal, symmetricEigen } from '../numerics/index.js';
 import { annihilate } from './annihilate.js';
 import { normOf, rowsOf } from './matrix-shape.js';
 import { rotate } from './rotate.js';
@@ -45,6 +45,7 @@ export function traceRotations(
   steps: readonly RotationRequest[],
   pattern?: readonly (readonly [number, number])[],
 ): RotationTrace {
+  checkSteps(steps);
   const reference = invariantsOf(start);
   const norm = normOf(rowsOf(start));
   let matrix = start;
@@ -64,6 +65,22 @@ export function traceRotations(
     };
   });
   return { matrix, steps: log };
+}
+
+function checkSteps(steps: readonly RotationRequest[]): void {
+  if (!Array.isArray(steps))
+    throw refusal('E_TYPE', 'steps', steps, 'an array of steps', 'give [{ pivot: [i, j], angle }]');
+  steps.forEach((step: unknown, n) => {
+    if (typeof step !== 'object' || step === null) {
+      throw refusal(
+        'E_TYPE',
+        `steps[${n}]`,
+        step,
+        'an object',
+        'give { pivot: [i, j], angle } or { pivot: [i, j], annihilate: [k, l] }',
+      );
+    }
+  });
 }
 
 function perform(matrix: CouplingMatrix, request: RotationRequest): { matrix: CouplingMatrix; rotation: Rotation } {

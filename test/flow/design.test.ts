@@ -1,0 +1,81 @@
+import { describe, expect, it } from 'vitest';
+import { certify, design, FilterFailure, generalizedChebyshev, scatteringAt, transversal } from '../../src/index.js';
+
+const passband = { lowerHz: '2516 MHz', upperHz: 2558e6 };
+
+function refusalOf(run: () => unknown): FilterFailure {
+  try {
+    run();
+  } catch (error) {
+    if (error instanceof FilterFailure) return error;
+    throw error;
+  }
+  throw new Error('nothing was refused');
+}
+
+describe('design(specification)', () => {
+  it.each(['folded', 'arrow', 'transversal', 'inline'] as const)('gives a certified %s matrix', (topology) => {
+    const transmissionZeros = topology === 'inline' ? [] : [1.28, 1.75];
+    const result = design({ passband, order: 5, returnLossDb: 20, transmissionZeros, topology });
+    expect(result.certificates.length).toBeGreaterThan(15);
+    expect(result.certificates.every(({ holds }) => holds)).toBe(true);
+    for (const omega of [-1.5, 0.3, 1, 1.4]) {
+      const [a, b] = [scatteringAt(result.matrix, omega).s21, scatteringAt(result.polynomials, omega).s21];
+      expect(Math.hypot(a.re - b.re, a.im - b.im)).toBeLessThan(1e-14);
+    }
+  });
+
+  it('gives the same bytes twice and leaves its argument alone', () => {
+    const specification = Object.freeze({
+      passband: Object.freeze(passband),
+      order: 6,
+      returnLossDb: 22,
+      transmissionZeros: Object.freeze([1.45, -1.45]),
+    });
+    expect(JSON.stringify(design(specification))).toBe(JSON.stringify(design(specification)));
+  });
+
+  it('refuses a zero at 1 + 1e-12 by certificate, with a distance that then passes', () => {
+    const request = { passband, order: 6, returnLossDb: 20 };
+    const failure = refusalOf(() => design({ ...request, transmissionZeros: [1 + 1e-12] }));
+    expect(failure.code).toBe('E_CERT');
+    expect(failure.message).toMatch(
+      /C\d .*: found .*; allowed .*; do move the transmission zeros out to \|omega\| >= 1\.0+1/,
+    );
+    expect(failure.value).toBeGreaterThan(failure.limit as number);
+    const passing = Number(/>= (1\.0+1)/.exec(failure.hint ?? '')?.[1]);
+    expect(design({ ...request, transmissionZeros: [passing] }).certificates.every(({ holds }) => holds)).toBe(true);
+  });
+
+  it('lists every fault of a specification', () => {
+    const failure = refusalOf(() =>
+      design({ passband: { lowerHz: 2, upperHz: 1 }, order: 0, returnLossDb: -20, transmissionZeros: [0.5] }),
+    );
+    expect(failure.faults.map(({ code }) => code).sort()).toEqual([
+      'E_BAND',
+      'E_ORDER_RANGE',
+      'E_RL_RANGE',
+      'E_ZERO_IN_PASSBAND',
+    ]);
+  });
+});
+
+// Each of these came out wrong once: a pole twice, a resonance missed next to a narrow one.
+describe('filters that were wrong before', () => {
+  it.each([
+    {
+      order: 3,
+      returnLossDb: 20,
+      transmissionZeros: [
+        { re: 0.055, im: -0.3321 },
+        { re: -0.055, im: -0.3321 },
+      ],
+    },
+    { order: 6, returnLossDb: 31.7, transmissionZeros: [{ re: -0.4015, im: 0 }, { re: 0.4015, im: 0 }, 4.066, 1.0011] },
+    { order: 43, returnLossDb: 23.39145982055925, transmissionZeros: [] },
+    { order: 34, returnLossDb: 30.069142011925578, transmissionZeros: [-1.0094786064454677] },
+  ])('order $order', (request) => {
+    const response = generalizedChebyshev(request);
+    expect(certify(response, transversal(response)).filter(({ holds }) => !holds)).toEqual([]);
+  });
+});
