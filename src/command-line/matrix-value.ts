@@ -4,10 +4,24 @@ import { addFault, checkKeys, isMembers, type Reading } from './json-file.js';
 
 const LEAST_SIZE = 3;
 const MOST_SIZE = 102;
+/** Normalized couplings of any filter lie far within; beyond, products overflow or vanish. */
+const LARGEST = 1e4;
+const SMALLEST = 1e-100;
 const ALLOWED = 'a list of rows of numbers, or an object with order and values';
 
 function shapeFault(reading: Reading, path: Path, found: string, allowed: string, advice: string): void {
   addFault(reading, { code: 'E_MATRIX_SHAPE', path, found, allowed, advice, value: found, limit: allowed });
+}
+
+function withinRange(reading: Reading, row: readonly number[], path: Path): readonly number[] | undefined {
+  const column = row.findIndex((entry) => Math.abs(entry) > LARGEST || (entry !== 0 && Math.abs(entry) < SMALLEST));
+  if (column < 0) return row;
+  const allowed = `0, or normalized entries of size ${SMALLEST} to ${LARGEST}`;
+  const isTiny = Math.abs(row[column] ?? 0) < 1;
+  const advice = isTiny ? 'write 0' : 'check that the matrix is normalized, not in hertz';
+  const fault = { code: 'E_ENTRY_RANGE', path: [...path, column], found: String(row[column]), allowed, advice };
+  addFault(reading, { ...fault, value: row[column], limit: LARGEST });
+  return undefined;
 }
 
 function readRow(
@@ -25,7 +39,7 @@ function readRow(
     return undefined;
   }
   const numbers = row.filter((entry) => typeof entry === 'number');
-  if (numbers.length === size) return numbers;
+  if (numbers.length === size) return withinRange(reading, numbers, path);
   row.forEach((entry, column) => {
     if (typeof entry === 'number') return;
     addFault(reading, kindFault([...path, column], entry, 'a number', 'write a number; 0 where nothing couples'));

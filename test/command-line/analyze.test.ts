@@ -157,6 +157,8 @@ describe('irisloom analyze', () => {
     ['text for a number', withEntry(2, 2, '0'), 'E_TYPE', 'remove the quotes'],
     ['NaN', '{"matrix": [[0, NaN, 0]]}', 'E_JSON_SYNTAX', '(1:17)', '"NaN"'],
     ['Infinity by exponent', '{"matrix": [[0, 1e999, 0]]}', 'E_NUMBER_OVERFLOW', '1e999'],
+    ['a matrix in hertz', withEntry(1, 1, 3.8e9), 'E_ENTRY_RANGE', 'matrix[1][1] (1:', 'not in hertz'],
+    ['an entry that is next to nothing', withEntry(1, 1, 5e-324), 'E_ENTRY_RANGE', 'write 0'],
     ['another order', { matrix: ONE, order: 2 }, 'E_MATRIX_SHAPE', 'order 2 beside a matrix of order 1'],
     ['another order within', { matrix: { order: 2, values: ONE } }, 'E_MATRIX_SHAPE', 'matrix.order'],
     ['a misspelled key', { matrix: ONE, pasband: BAND }, 'E_UNKNOWN_KEY', 'did you mean "passband"?'],
