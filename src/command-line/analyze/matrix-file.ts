@@ -103,7 +103,7 @@ function readResult(reading: Reading, members: Members): MatrixFile | undefined 
 /**
  * Reads a matrix file, or a result that was written before; all faults are told together, each with its place.
  *
- * @throws FilterFailure E_MATRIX_SHAPE, E_ENTRY_RANGE, E_NOT_SYMMETRIC, 
+ * @throws FilterFailure E_MATRIX_SHAPE, E_ENTRY_RANGE, E_NOT_SYMMETRIC,
  *   E_MISSING, E_TYPE, E_UNKNOWN_KEY, and those of design files
  */
 export function readMatrixFile(bytes: Uint8Array): MatrixFile {

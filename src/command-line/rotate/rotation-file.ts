@@ -102,7 +102,7 @@ function readName(reading: Reading, { name, notes }: Members): string | undefine
 /**
  * Reads a file of rotations; all faults are told together, each with its place.
  *
- * @throws FilterFailure E_MATRIX_SHAPE, E_ENTRY_RANGE, E_NOT_SYMMETRIC, 
+ * @throws FilterFailure E_MATRIX_SHAPE, E_ENTRY_RANGE, E_NOT_SYMMETRIC,
  *   E_PIVOT, E_ELEMENT, E_CHOICE, E_MISSING, E_TYPE, E_UNKNOWN_KEY
  */
 export function readRotationFile(bytes: Uint8Array): RotationFile {
