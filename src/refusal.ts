@@ -21,7 +21,7 @@ export function refuseUncertified(
     ({ check, value, limit }) =>
       new FilterFailure(
         'E_CERT',
-        `E_CERT ${check}: found ${value.toPrecision(3)}; allowed ${limit.toPrecision(3)}; do ${hint}`,
+        `E_CERT ${check}: found ${value.toPrecision(3)}; allowed ${limit.toPrecision(3)}; ${hint}`,
         {
           argument: check,
           value,

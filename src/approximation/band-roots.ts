@@ -33,7 +33,7 @@ export function bandRoots(order: number, omega: readonly Complex[], kappa: numbe
   }
   throw new FilterFailure(
     'E_NO_CONVERGENCE',
-    'E_NO_CONVERGENCE transmissionZeros: found two poles too close to tell apart; allowed responses with distinct poles; do move a transmission zero or the return loss slightly',
+    'E_NO_CONVERGENCE transmissionZeros: found two poles too close to tell apart; allowed responses with distinct poles; move a transmission zero or the return loss slightly',
     { argument: 'transmissionZeros', hint: 'move a transmission zero or the return loss slightly' },
   );
 }

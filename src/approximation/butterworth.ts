@@ -1,6 +1,7 @@
 import type { FilterPolynomials } from '../forms/index.js';
 import { complex } from '../numerics/index.js';
 import { checkOrder } from '../specification/index.js';
+import { checkRequest } from './request.js';
 import { transmissionLead } from './transmission-lead.js';
 
 /**
@@ -15,6 +16,7 @@ import { transmissionLead } from './transmission-lead.js';
  * response.poles[0].re.toFixed(6); // '-0.707107'
  */
 export function butterworth(request: { readonly order: number }): FilterPolynomials {
+  checkRequest(request);
   const order = checkOrder(request.order);
   const poles = Array.from({ length: order }, (_, n) => circlePole(order, n + 1));
   return {

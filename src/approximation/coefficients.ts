@@ -1,4 +1,4 @@
-import type { FilterPolynomials } from '../forms/index.js';
+import { checkPolynomials, type FilterPolynomials } from '../forms/index.js';
 import { type Complex, coefficientsFromRoots, multiply } from '../numerics/index.js';
 
 /** The polynomials of a response as coefficients, ascending: `e[0] + e[1]*s + ...`. */
@@ -17,11 +17,14 @@ export interface PolynomialCoefficients {
  * E and F are monic, P has the leading coefficient `transmissionLead`. Each coefficient is the expansion of the given roots
  * rounded once. Cost O(order^2).
  *
+ * @throws FilterFailure E_TYPE, E_NOT_FINITE, E_POLYNOMIALS
+ *
  * @example
  * const { e } = coefficients(butterworth({ order: 2 }));
  * e[1].re.toFixed(6); // '1.414214'
  */
 export function coefficients(polynomials: FilterPolynomials): PolynomialCoefficients {
+  checkPolynomials(polynomials);
   const p = coefficientsFromRoots(polynomials.transmissionZeros);
   return {
     e: coefficientsFromRoots(polynomials.poles),

@@ -2,6 +2,7 @@ import type { FilterPolynomials } from '../forms/index.js';
 import { type Complex, complex, FilterFailure, magnitude } from '../numerics/index.js';
 import { checkOrder, checkReturnLoss, checkTransmissionZeros } from '../specification/index.js';
 import { type BandRoots, bandRoots } from './band-roots.js';
+import { checkRequest } from './request.js';
 import { transmissionLead } from './transmission-lead.js';
 
 /** A transmission zero: a bare number `w` means `s = j*w`, a complex number lies in the s-plane. */
@@ -32,6 +33,7 @@ export interface GeneralizedChebyshevRequest {
  * response.epsilon.toFixed(4); // '1.1547'
  */
 export function generalizedChebyshev(request: GeneralizedChebyshevRequest): FilterPolynomials {
+  checkRequest(request);
   const order = checkOrder(request.order);
   const returnLossDb = checkReturnLoss(request.returnLossDb);
   const { zeros } = checkTransmissionZeros(
@@ -62,6 +64,7 @@ export function generalizedChebyshev(request: GeneralizedChebyshevRequest): Filt
  * response.reflectionZeros[0].im.toFixed(6); // '0.866025'
  */
 export function chebyshev(request: { readonly order: number; readonly returnLossDb: number }): FilterPolynomials {
+  checkRequest(request);
   return generalizedChebyshev({ order: request.order, returnLossDb: request.returnLossDb });
 }
 
@@ -77,15 +80,17 @@ function rippleConstants(
   reflection: BandRoots['reflection'],
   kappa: number,
 ): { epsilon: number; epsilonR: number } {
+  // In an order of their own, so that the order in which zeros are given cannot change a bit.
+  const sorted = [...zeros].sort((a, b) => a.im - b.im || a.re - b.re);
   let ratio = 1 / kappa;
   reflection.forEach(({ oneMinus }, n) => {
-    const zero = zeros[n];
+    const zero = sorted[n];
     ratio *= (zero === undefined ? 1 : magnitude(complex(zero.re, 1 - zero.im))) / oneMinus;
   });
   if (!Number.isFinite(ratio)) {
     throw new FilterFailure(
       'E_ZERO_RANGE',
-      'E_ZERO_RANGE transmissionZeros: found zeros so far out that the ripple constant exceeds 1e308; allowed products below that; do leave distant zeros at infinity out',
+      'E_ZERO_RANGE transmissionZeros: found zeros so far out that the ripple constant exceeds 1e308; allowed products below that; leave distant zeros at infinity out',
       {
         argument: 'transmissionZeros',
         value: ratio,

@@ -64,7 +64,7 @@ export function continuedAngle(phase: BandPhase, phi: number, k: number, height:
   }
   throw new FilterFailure(
     'E_NO_CONVERGENCE',
-    `E_NO_CONVERGENCE transmissionZeros: found a pole (number ${k}) that is not reached in ${MOST_STEPS} steps; allowed responses whose poles are apart; do move a transmission zero or the return loss slightly`,
+    `E_NO_CONVERGENCE transmissionZeros: found a pole (number ${k}) that is not reached in ${MOST_STEPS} steps; allowed responses whose poles are apart; move a transmission zero or the return loss slightly`,
     {
       argument: 'transmissionZeros',
       value: k,

@@ -1,6 +1,6 @@
 import { omegaFromHz } from '../forms/index.js';
 import { refusal } from '../numerics/index.js';
-import { type Curves, checkFrequencies, type Model, sweeper } from '../response/index.js';
+import { type Curves, checkFrequencies, isMatrix, type Model, sweeper } from '../response/index.js';
 import { bandOf, type LossyBand, lossOf } from './band.js';
 
 /** A sweep in hertz; the delay is in seconds. */
@@ -11,6 +11,7 @@ export interface SweepHz extends Omit<Curves, 'groupDelay'> {
 
 /** Everything at given hertz, on the exact band-pass map; made once for many grids. */
 export function sweeperHz(model: Model, band: LossyBand): (frequenciesHz: Float64Array) => SweepHz {
+  isMatrix(model);
   bandOf(band);
   const run = sweeper(model, { loss: lossOf(band, model.order) });
   return (frequenciesHz) => {

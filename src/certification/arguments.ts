@@ -79,7 +79,7 @@ function checkObject(name: string, value: unknown): void {
 function refuse(code: string, argument: string, value: unknown, allowed: string): never {
   const found = typeof value === 'object' && value !== null ? 'an object' : String(value).slice(0, 40);
   const hint = 'pass the objects as synthesis returned them';
-  throw new FilterFailure(code, `${code} ${argument}: found ${found}; allowed ${allowed}; do ${hint}`, {
+  throw new FilterFailure(code, `${code} ${argument}: found ${found}; allowed ${allowed}; ${hint}`, {
     argument,
     value,
     limit: allowed,

@@ -80,7 +80,7 @@ function choosePivot(re: Float64Array, im: Float64Array, order: Int32Array, size
   if (!(bestSize > 0)) {
     throw new FilterFailure(
       'E_SINGULAR',
-      `E_SINGULAR omega: found a frequency at which the network's equations are singular; allowed frequencies off the poles; do shift the frequency or add loss`,
+      `E_SINGULAR omega: found a frequency at which the network's equations are singular; allowed frequencies off the poles; shift the frequency or add loss`,
       { argument: 'omega', value: bestSize, limit: 0, hint: 'shift the frequency or add loss' },
     );
   }

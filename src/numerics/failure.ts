@@ -43,6 +43,6 @@ export class FilterFailure extends Error {
 
 /** A refusal in the package's message form: what was found, what is allowed, what to do. Long values are cut. */
 export function refusal(code: string, argument: string, value: unknown, limit: unknown, hint: string): FilterFailure {
-  const message = `${code} ${argument}: found ${String(value).slice(0, 40)}; allowed ${limit}; do ${hint}`;
+  const message = `${code} ${argument}: found ${String(value).slice(0, 40)}; allowed ${limit}; ${hint}`;
   return new FilterFailure(code, message, { argument, value, limit, hint });
 }

@@ -31,7 +31,12 @@ const ACCEPTED = 4;
  * Math.min(...roots.map((root) => root.re)); // -2
  */
 export function polynomialRoots(coefficients: readonly Complex[]): readonly PolynomialRoot[] {
-  const ascending = checked(coefficients);
+  const given = checked(coefficients);
+  // Roots at 0 are read off: there neither a value nor its bound has a size to compare.
+  const atZero = given.findIndex((coefficient) => coefficient.abs() !== 0);
+  const ascending = given.slice(atZero);
+  const zeros = Array.from({ length: atZero }, () => ({ re: 0, im: 0, backwardError: 0 }));
+  if (ascending.length === 1) return zeros;
   const roots = startingPoints(ascending);
   const settled = new Array<boolean>(roots.length).fill(false);
   for (let sweep = 0; sweep < SWEEPS && settled.includes(false); sweep++) {
@@ -49,17 +54,18 @@ export function polynomialRoots(coefficients: readonly Complex[]): readonly Poly
       roots[k] = root.sub(newton.div(new ComplexNumber(1, 0).sub(newton.mul(repulsion))));
     });
   }
-  return roots.map((root) => {
+  const found = roots.map((root) => {
     const { backwardError } = evaluate(ascending, root);
     if (!(backwardError <= ACCEPTED)) {
       throw new FilterFailure(
         'E_NO_CONVERGENCE',
-        `E_NO_CONVERGENCE coefficients: found a root with backward error ${backwardError.toPrecision(3)}; allowed ${ACCEPTED}; do scale the variable so that the roots lie near size 1`,
+        `E_NO_CONVERGENCE coefficients: found a root with backward error ${backwardError.toPrecision(3)}; allowed ${ACCEPTED}; scale the variable so that the roots lie near size 1`,
         { argument: 'coefficients', value: backwardError, limit: ACCEPTED, hint: 'scale the variable' },
       );
     }
     return { re: root.re, im: root.im, backwardError };
   });
+  return [...zeros, ...found];
 }
 
 function checked(coefficients: readonly Complex[]): readonly ComplexNumber[] {
@@ -68,7 +74,7 @@ function checked(coefficients: readonly Complex[]): readonly ComplexNumber[] {
   if (coefficients.length < 2 || !finite || last === undefined || (last.re === 0 && last.im === 0)) {
     throw new FilterFailure(
       'E_POLYNOMIAL',
-      'E_POLYNOMIAL coefficients: found a constant, a leading 0 or a number that is not finite; allowed two or more finite coefficients, ascending, the last not 0; do trim the list',
+      'E_POLYNOMIAL coefficients: found a constant, a leading 0 or a number that is not finite; allowed two or more finite coefficients, ascending, the last not 0; trim the list',
       { argument: 'coefficients', hint: 'trim the list' },
     );
   }
@@ -108,7 +114,7 @@ function startingPoints(ascending: readonly ComplexNumber[]): ComplexNumber[] {
       hull.pop();
     hull.push(k);
   });
-  const starts: ComplexNumber[] = Array.from({ length: hull[0] ?? 0 }, () => new ComplexNumber(0, 0));
+  const starts: ComplexNumber[] = [];
   for (let edge = 1; edge < hull.length; edge++) {
     const [from, to] = [hull[edge - 1] as number, hull[edge] as number];
     const radius = Math.exp(((heights[from] as number) - (heights[to] as number)) / (to - from));

@@ -1,11 +1,23 @@
-import type { CouplingMatrix, FilterPolynomials } from '../forms/index.js';
+import { type CouplingMatrix, checkPolynomials, type FilterPolynomials } from '../forms/index.js';
 import { refusal } from '../numerics/index.js';
 
 /** Anything with a response: a transfer function in product form or a coupling matrix. */
 export type Model = FilterPolynomials | CouplingMatrix;
 
+/** Tells a matrix from polynomials. @throws FilterFailure E_TYPE, and for polynomials what `checkPolynomials` refuses */
 export function isMatrix(model: Model): model is CouplingMatrix {
-  return 'values' in model;
+  if (typeof model !== 'object' || model === null || !('values' in model || 'poles' in model)) {
+    throw refusal(
+      'E_TYPE',
+      'model',
+      model,
+      'filter polynomials or a coupling matrix',
+      'pass what a family function or a synthesis function returned',
+    );
+  }
+  if ('values' in model) return true;
+  checkPolynomials(model);
+  return false;
 }
 
 /** A copy of a grid, checked. @throws FilterFailure E_TYPE, E_NOT_FINITE */
@@ -30,24 +42,24 @@ export function checkFrequency(omega: unknown, name: string): number {
 }
 
 /** Loss `f0/(B*Qu)`: one number, or one a resonator. @throws FilterFailure E_TYPE, E_NOT_FINITE, E_LOSS */
-export function checkLoss(loss: number | readonly number[] | undefined, order: number): number | Float64Array {
+export function checkLoss(loss: number | ArrayLike<number> | undefined, order: number): number | Float64Array {
   if (loss === undefined) return 0;
   if (typeof loss === 'number') return checkOneLoss(loss, 'loss');
-  if (!Array.isArray(loss) || loss.length !== order) {
+  if (typeof loss !== 'object' || loss === null || loss.length !== order) {
     throw refusal(
       'E_LOSS',
       'loss',
-      Array.isArray(loss) ? `${loss.length} values` : loss,
+      loss?.length === undefined ? loss : `${loss.length} values`,
       `a number or ${order} numbers, one a resonator`,
       'match the order',
     );
   }
-  const values = Float64Array.from(loss, (value, n) => checkOneLoss(value, `loss[${n}]`));
+  const values = Float64Array.from({ length: order }, (_, n) => checkOneLoss(loss[n], `loss[${n}]`));
   return values.every((value) => value === values[0]) ? (values[0] as number) : values;
 }
 
-function checkOneLoss(value: number, name: string): number {
-  checkFrequency(value, name);
+function checkOneLoss(given: unknown, name: string): number {
+  const value = checkFrequency(given, name);
   if (value < 0) throw refusal('E_LOSS', name, value, 'numbers >= 0', 'drop the sign: loss is f0/(B*Qu)');
   return value;
 }

@@ -14,7 +14,7 @@ import { sweepSymmetric } from './symmetric-kernel.js';
 
 /** What a sweep may be told: `loss` = f0/(B*Qu), one number or one a resonator; 0 when absent. */
 export interface SweepOptions {
-  readonly loss?: number | readonly number[];
+  readonly loss?: number | ArrayLike<number>;
 }
 
 /** A sweep: its grid and the curves over it. */
@@ -44,8 +44,17 @@ export function sweep(model: Model, omega: ArrayLike<number>, options: SweepOpti
 
 /** A model prepared for many sweeps: what does not depend on frequency is done once. Grids must be finite numbers. */
 export function sweeper(model: Model, options: SweepOptions = {}): (omega: Float64Array) => Curves {
+  if (typeof options !== 'object' || options === null)
+    throw refusal(
+      'E_TYPE',
+      'options',
+      options,
+      'an object such as { loss: 0.01 }',
+      'leave it out for a lossless sweep',
+    );
+  const isOfMatrix = isMatrix(model);
   const loss = checkLoss(options.loss, model.order);
-  return isMatrix(model) ? matrixSweeper(model, loss) : polynomialSweeper(model, loss);
+  return isOfMatrix ? matrixSweeper(model, loss) : polynomialSweeper(model, loss);
 }
 
 function polynomialSweeper(

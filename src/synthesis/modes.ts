@@ -38,7 +38,7 @@ const RATIO_ROOM = 0.5;
 function refuseRatio(index: number, distance: number): never {
   throw new FilterFailure(
     'E_NOT_SYMMETRIC_RESPONSE',
-    `E_NOT_SYMMETRIC_RESPONSE polynomials: found a pole (index ${index}) where S11 and S21 differ by ${distance.toExponential(2)} from an even or odd mode; allowed lossless responses with S11 = S22; do check the reflection zeros (they must lie on the imaginary axis) and epsilon`,
+    `E_NOT_SYMMETRIC_RESPONSE polynomials: found a pole (index ${index}) where S11 and S21 differ by ${distance.toExponential(2)} from an even or odd mode; allowed lossless responses with S11 = S22; check the reflection zeros (they must lie on the imaginary axis) and epsilon`,
     {
       argument: 'polynomials',
       value: distance,

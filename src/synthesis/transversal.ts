@@ -1,4 +1,4 @@
-import type { CouplingMatrix, FilterPolynomials } from '../forms/index.js';
+import { type CouplingMatrix, checkPolynomials, type FilterPolynomials } from '../forms/index.js';
 import { modeResonances } from './mode-phase.js';
 import { modesOf } from './modes.js';
 
@@ -16,7 +16,7 @@ interface Branch {
  * those of S11 - S21; `M_SL` is non-zero only for as many finite transmission zeros as the order. Complex S11 and S21 of
  * the matrix equal those of the polynomials, phase included. Cost O(order^2), under 1 ms at order 40.
  *
- * @throws FilterFailure E_NOT_SYMMETRIC_RESPONSE
+ * @throws FilterFailure E_NOT_SYMMETRIC_RESPONSE, E_TYPE, E_NOT_FINITE, E_POLYNOMIALS
  *
  * Method: S11 + S21 and S11 - S21 are all-pass with half of the poles each; their resonances are bracketed zeros of a
  * monotone phase and the couplings are `sqrt(1/(2*slope))`: nothing is subtracted, so no digit is lost. Residues of the
@@ -29,7 +29,7 @@ interface Branch {
  * matrix.values[0][1].toFixed(4); // '0.7071'
  */
 export function transversal(polynomials: FilterPolynomials): CouplingMatrix {
-  const { order } = polynomials;
+  const { order } = checkPolynomials(polynomials);
   const finiteZeros = polynomials.transmissionZeros.length;
   const angle = finiteZeros === order ? evenAngle(polynomials) : 0;
   const modes = modesOf(polynomials);

@@ -28,14 +28,13 @@ import { type Reduced, reduce } from './reduction.js';
  */
 export function arrow(matrix: CouplingMatrix): Reduced {
   const start = folded(matrix);
-  const { order } = matrix;
-  const chased = reduce(start.matrix, {
+  const chased = reduce(start.matrix, (order) => ({
     steps: arrowSteps(order),
     precision: 'doubled',
     structuralZeros: (finiteZeros) =>
       Array.from({ length: order }, (_, k) => [k, order + 1] as const).filter(([k]) => k < order - finiteZeros),
     positive: Array.from({ length: order }, (_, n) => ({ entry: [n, n + 1] as const, by: n + 1 })),
-  });
+  }));
   return {
     matrix: chased.matrix,
     rotations: [...start.rotations, ...chased.rotations],

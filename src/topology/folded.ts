@@ -24,13 +24,12 @@ import { type Reduced, reduce } from './reduction.js';
  * matrix.values[0][3]; // 0
  */
 export function folded(matrix: CouplingMatrix): Reduced {
-  const order = matrix?.order;
-  return reduce(matrix, {
+  return reduce(matrix, (order) => ({
     steps: foldedSteps(order),
     precision: 'corrected',
     structuralZeros: (finiteZeros) => crossEntries(order).filter((_, resonators) => resonators < order - finiteZeros),
     positive: Array.from({ length: order }, (_, n) => ({ entry: [order - n, order - n + 1] as const, by: order - n })),
-  });
+  }));
 }
 
 function foldedSteps(order: number): readonly EliminationStep[] {

@@ -31,8 +31,9 @@ export interface Reduced {
  * Runs an elimination without letting its rounding into the result, clears the structural zeros and chooses the resonator
  * signs.
  */
-export function reduce(matrix: CouplingMatrix, plan: ReductionPlan): Reduced {
+export function reduce(matrix: CouplingMatrix, planOf: (order: number) => ReductionPlan): Reduced {
   const original = rowsOf(matrix);
+  const plan = planOf(matrix.order);
   const { rows: exact, rotations } =
     plan.precision === 'doubled' ? eliminateDoubled(original, plan.steps) : eliminateCorrected(original, plan.steps);
   const leftover = clearStructure(exact, plan, matrix.finiteZeros);

@@ -53,7 +53,10 @@ export function checkRotation(rotation: Rotation, order: number, where: string):
   if (!Number.isFinite(rotation.angle))
     throw refusal('E_NOT_FINITE', `${where}.angle`, rotation.angle, 'finite radians', 'replace the angle');
   checkPivot(rotation.pivot, order, where, rotation.angle === 0);
-  for (const node of rotation.flip ?? []) checkResonator(node, order, `${where}.flip`);
+  const flips: unknown = rotation.flip ?? [];
+  if (!Array.isArray(flips))
+    throw refusal('E_TYPE', `${where}.flip`, flips, 'an array of resonators', 'leave flip out, or give [i]');
+  for (const node of flips) checkResonator(node, order, `${where}.flip`);
 }
 
 /** @throws FilterFailure E_PIVOT unless the pivot names two different resonators. */
