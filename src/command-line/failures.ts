@@ -20,6 +20,9 @@ const FILE_CODES: readonly string[] = [
   'E_IO',
 ];
 
+/** A result that could not be proven, or not be reached: good input, no answer. */
+const UNPROVEN_CODES: readonly string[] = ['E_CERT', 'E_NO_CONVERGENCE', 'E_NOT_SYMMETRIC_RESPONSE'];
+
 /** Thrown where the user's interrupt is noticed; what was begun has been taken away by then. */
 export class Interrupted extends Error {
   override readonly name = 'Interrupted';
@@ -27,7 +30,7 @@ export class Interrupted extends Error {
 
 /** Exit status of a refusal. */
 export function exitStatusOf({ code }: FilterFailure): number {
-  if (code === 'E_CERT') return EXIT.certificate;
+  if (UNPROVEN_CODES.includes(code)) return EXIT.certificate;
   return FILE_CODES.includes(code) ? EXIT.file : EXIT.badInput;
 }
 

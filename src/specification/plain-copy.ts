@@ -3,7 +3,7 @@ import { MAX_ORDER } from './order-and-level.js';
 
 const DEPTH_LIMIT = 16;
 const LIST_LIMIT = 10_000;
-const NODE_LIMIT = 50_000;
+const NODE_LIMIT = 200_000;
 
 /** Keys that could reach an object's prototype. */
 export const FORBIDDEN_KEYS: readonly string[] = ['__proto__', 'constructor', 'prototype'];

@@ -57,6 +57,7 @@ const sweep = z.strictObject({
  * more than one value, or wording of their own, are checked after it.
  */
 export const specificationSchema: z.ZodType<SpecificationInput> = z.strictObject({
+  $schema: described(z.string(), '$schema').optional(),
   name: described(z.string(), 'name', { maxLength: 120 }).optional(),
   notes: described(z.string(), 'notes', { maxLength: 1000 }).optional(),
   passband,

@@ -81,6 +81,8 @@ export interface SweepInput {
 export interface SpecificationInput {
   readonly name?: string | undefined;
   readonly notes?: string | undefined;
+  /** For editors; not read. */
+  readonly $schema?: string | undefined;
   readonly passband: PassbandInput;
   readonly family?: SpecificationFamily | undefined;
   readonly order: number;

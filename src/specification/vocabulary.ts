@@ -12,6 +12,7 @@ const LEVEL = 'a number of dB, or a pair [at fromHz, at toHz]';
 
 /** Every key of the design file, once. */
 export const VOCABULARY: Readonly<Record<string, Term>> = {
+  $schema: { meaning: 'Where an editor finds the schema of this file; not read.', allowed: 'text' },
   name: { meaning: 'Name of the filter, at most 120 characters.', allowed: 'text of at most 120 characters' },
   notes: { meaning: 'Remarks in free text, at most 1000 characters.', allowed: 'text of at most 1000 characters' },
   passband: {
@@ -86,6 +87,7 @@ export const VOCABULARY: Readonly<Record<string, Term>> = {
 /** Keys of each object of the design file, by the path to it with indices left out. */
 export const KEYS: Readonly<Record<string, readonly string[]>> = {
   '': [
+    '$schema',
     'name',
     'notes',
     'passband',

@@ -60,7 +60,9 @@ describe('denormalize(matrix, band)', () => {
       denormalize(matrix, { centerHz: 7 * band.centerHz, bandwidthHz: 7 * band.bandwidthHz }),
     ];
     expect(b.externalQ.source).toBeCloseTo(a.externalQ.source as number, 9);
-    b.couplings.forEach(({ k }, n) => expect(k).toBeCloseTo(a.couplings[n]?.k as number, 14));
+    b.couplings.forEach(({ k }, n) => {
+      expect(k).toBeCloseTo(a.couplings[n]?.k as number, 14);
+    });
   });
 
   it.each([

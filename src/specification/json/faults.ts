@@ -8,7 +8,7 @@ const TOKEN_LIMIT = 40;
 /** Longest text read, in UTF-16 code units. */
 export const LENGTH_LIMIT = 1_048_576;
 /** Most values read from one text. */
-export const VALUE_LIMIT = 50_000;
+export const VALUE_LIMIT = 200_000;
 
 const DELIMITERS = ' \t\r\n,:{}[]"';
 
