@@ -122,14 +122,14 @@ export const responseLaws: readonly Law[] = [
         inSweep((r) => ({ ...r, groupDelay: r.groupDelay.map((value) => value * (1 + 1e-4)) })),
       ],
       [
-        'one pole left out',
+        'one pole moved off the axis',
         (engine) => ({
           ...engine,
           sweep: (model, omegas, options) =>
             engine.sweep(
               'values' in model
                 ? model
-                : { ...model, poles: model.poles.slice(1), reflectionZeros: model.reflectionZeros.slice(1) },
+                : { ...model, poles: model.poles.map((pole, n) => (n === 0 ? { ...pole, re: 2 * pole.re } : pole)) },
               omegas,
               options,
             ),
