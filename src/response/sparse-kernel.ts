@@ -1,13 +1,14 @@
 import type { Curves } from './curves.js';
-import type { FlatPlan } from './sparse-factor.js';
+import type { EliminationPlan } from './sparse-factor.js';
 
-/** Scratch of one sparse sweep: the complex symmetric matrix (row-major, both parts) and the two port columns. */
+/** Scratch of one sparse sweep: the values by slot, and the two port columns by node, real and imaginary parts. */
 interface Workspace {
-  readonly size: number;
   readonly re: Float64Array;
   readonly im: Float64Array;
-  readonly x: readonly [Float64Array, Float64Array];
-  readonly y: readonly [Float64Array, Float64Array];
+  readonly xRe: Float64Array;
+  readonly xIm: Float64Array;
+  readonly yRe: Float64Array;
+  readonly yIm: Float64Array;
 }
 
 /**
@@ -18,129 +19,121 @@ interface Workspace {
  * elimination is then below 3 (N. J. Higham, Factorizing complex symmetric matrices with positive definite real and
  * imaginary parts, Math. Comp. 67, 1998; from memory).
  */
-export function sweepSparse(
-  rows: readonly Float64Array[],
-  plan: FlatPlan,
-  loss: Float64Array,
-  omega: Float64Array,
-  out: Curves,
-): void {
-  const size = rows.length;
+export function sweepSparse(plan: EliminationPlan, loss: Float64Array, omega: Float64Array, out: Curves): void {
+  const slots = plan.values.length;
+  const size = plan.nodes.length + 2;
+  const column = (): Float64Array => new Float64Array(size);
   const work: Workspace = {
-    size,
-    re: new Float64Array(size * size),
-    im: new Float64Array(size * size),
-    x: [new Float64Array(size), new Float64Array(size)],
-    y: [new Float64Array(size), new Float64Array(size)],
+    re: new Float64Array(slots),
+    im: new Float64Array(slots),
+    xRe: column(),
+    xIm: column(),
+    yRe: column(),
+    yIm: column(),
   };
+  const damping = dampingOf(plan, loss);
   for (let n = 0; n < omega.length; n++) {
-    fill(work, rows, loss, omega[n] as number);
-    eliminate(work, plan);
+    work.re.set(plan.values);
+    work.im.set(damping);
+    eliminate(work, plan, omega[n] as number);
     portColumns(work, plan);
-    store(work, out, n);
+    store(work, size - 1, out, n);
   }
 }
 
-function fill({ size, re, im }: Workspace, rows: readonly Float64Array[], loss: Float64Array, omega: number): void {
-  im.fill(0);
-  for (let i = 0; i < size; i++) re.set(rows[i] as Float64Array, i * size);
-  for (let i = 1; i < size - 1; i++) {
-    re[i * size + i] = (re[i * size + i] as number) + omega;
-    im[i * size + i] = -(loss[i - 1] as number);
-  }
-  im[0] = -1;
-  im[size * size - 1] = -1;
+/** Imaginary parts of the diagonal by slot: minus the loss, and minus 1 at the ports. */
+function dampingOf({ nodes, starts, ports, values }: EliminationPlan, loss: Float64Array): Float64Array {
+  const damping = new Float64Array(values.length);
+  nodes.forEach((node, n) => {
+    damping[starts[n] as number] = -(loss[node - 1] as number);
+  });
+  damping[ports[0]] = -1;
+  damping[ports[2]] = -1;
+  return damping;
 }
 
-/** Schur complements in place; the multiplier of each eliminated entry stays in the pivot's row. */
-function eliminate({ size, re, im }: Workspace, { nodes, starts, rest }: FlatPlan): void {
+/** Adds omega to each pivot as its turn comes, turns the pivot into its inverse and updates what its couplings touch. */
+function eliminate({ re, im }: Workspace, { nodes, starts, targets }: EliminationPlan, omega: number): void {
+  let pair = 0;
   for (let n = 0; n < nodes.length; n++) {
-    const row = (nodes[n] as number) * size;
-    const a = re[row + (nodes[n] as number)] as number;
-    const b = im[row + (nodes[n] as number)] as number;
+    const diagonal = starts[n] as number;
+    const end = starts[n + 1] as number;
+    const a = (re[diagonal] as number) + omega;
+    const b = im[diagonal] as number;
     const square = 1 / (a * a + b * b);
-    const [from, to] = [starts[n] as number, starts[n + 1] as number];
-    for (let p = from; p < to; p++) {
-      const i = rest[p] as number;
-      const c = re[row + i] as number;
-      const d = im[row + i] as number;
-      const factorRe = (c * a + d * b) * square;
-      const factorIm = (d * a - c * b) * square;
-      for (let q = p; q < to; q++) {
-        const j = rest[q] as number;
-        const e = re[row + j] as number;
-        const f = im[row + j] as number;
-        const at = i * size + j;
-        re[at] = re[j * size + i] = (re[at] as number) - (factorRe * e - factorIm * f);
-        im[at] = im[j * size + i] = (im[at] as number) - (factorRe * f + factorIm * e);
+    const inverseRe = a * square;
+    const inverseIm = -b * square;
+    re[diagonal] = inverseRe;
+    im[diagonal] = inverseIm;
+    for (let p = diagonal + 1; p < end; p++) {
+      const c = re[p] as number;
+      const d = im[p] as number;
+      const factorRe = c * inverseRe - d * inverseIm;
+      const factorIm = c * inverseIm + d * inverseRe;
+      for (let q = p; q < end; q++) {
+        const e = re[q] as number;
+        const f = im[q] as number;
+        const target = targets[pair++] as number;
+        re[target] = (re[target] as number) - (factorRe * e - factorIm * f);
+        im[target] = (im[target] as number) - (factorRe * f + factorIm * e);
       }
     }
   }
 }
 
 /** Columns of the inverse at source (x) and load (y): the 2 x 2 of the ports first, then the resonators backward. */
-function portColumns(work: Workspace, { nodes, starts, rest }: FlatPlan): void {
-  const { size, re, im } = work;
-  const last = size - 1;
-  const [ar, ai] = [re[0] as number, im[0] as number];
-  const [br, bi] = [re[last] as number, im[last] as number];
-  const [cr, ci] = [re[size * size - 1] as number, im[size * size - 1] as number];
+function portColumns({ re, im, xRe, xIm, yRe, yIm }: Workspace, { nodes, starts, rest, ports }: EliminationPlan): void {
+  const last = xRe.length - 1;
+  const [ar, ai] = [re[ports[0]] as number, im[ports[0]] as number];
+  const [br, bi] = [re[ports[1]] as number, im[ports[1]] as number];
+  const [cr, ci] = [re[ports[2]] as number, im[ports[2]] as number];
   const dr = ar * cr - ai * ci - br * br + bi * bi;
   const di = ar * ci + ai * cr - 2 * br * bi;
   const square = 1 / (dr * dr + di * di);
-  const put = ([vr, vi]: readonly [Float64Array, Float64Array], i: number, p: number, q: number): void => {
-    vr[i] = (p * dr + q * di) * square;
-    vi[i] = (q * dr - p * di) * square;
-  };
-  put(work.x, 0, cr, ci);
-  put(work.x, last, -br, -bi);
-  put(work.y, 0, -br, -bi);
-  put(work.y, last, ar, ai);
+  xRe[0] = (cr * dr + ci * di) * square;
+  xIm[0] = (ci * dr - cr * di) * square;
+  xRe[last] = yRe[0] = -(br * dr + bi * di) * square;
+  xIm[last] = yIm[0] = -(bi * dr - br * di) * square;
+  yRe[last] = (ar * dr + ai * di) * square;
+  yIm[last] = (ai * dr - ar * di) * square;
   for (let n = nodes.length - 1; n >= 0; n--) {
-    for (const vector of [work.x, work.y])
-      substituteBack(work, vector, nodes[n] as number, rest, starts[n] as number, starts[n + 1] as number);
+    const diagonal = starts[n] as number;
+    let [p, q, r, s] = [0, 0, 0, 0];
+    for (let k = diagonal + 1; k < (starts[n + 1] as number); k++) {
+      const j = rest[k] as number;
+      const a = re[k] as number;
+      const b = im[k] as number;
+      p -= a * (xRe[j] as number) - b * (xIm[j] as number);
+      q -= a * (xIm[j] as number) + b * (xRe[j] as number);
+      r -= a * (yRe[j] as number) - b * (yIm[j] as number);
+      s -= a * (yIm[j] as number) + b * (yRe[j] as number);
+    }
+    const a = re[diagonal] as number;
+    const b = im[diagonal] as number;
+    const node = nodes[n] as number;
+    xRe[node] = p * a - q * b;
+    xIm[node] = p * b + q * a;
+    yRe[node] = r * a - s * b;
+    yIm[node] = r * b + s * a;
   }
 }
 
-function substituteBack(
-  { size, re, im }: Workspace,
-  [vr, vi]: readonly [Float64Array, Float64Array],
-  node: number,
-  rest: Int32Array,
-  from: number,
-  to: number,
-): void {
-  const row = node * size;
-  let p = 0;
-  let q = 0;
-  for (let k = from; k < to; k++) {
-    const j = rest[k] as number;
-    const a = re[row + j] as number;
-    const b = im[row + j] as number;
-    p -= a * (vr[j] as number) - b * (vi[j] as number);
-    q -= a * (vi[j] as number) + b * (vr[j] as number);
-  }
-  const a = re[row + node] as number;
-  const b = im[row + node] as number;
-  const square = 1 / (a * a + b * b);
-  vr[node] = (p * a + q * b) * square;
-  vi[node] = (q * a - p * b) * square;
-}
-
-function store({ size, x, y }: Workspace, out: Curves, n: number): void {
-  const last = size - 1;
-  const s21Re = 2 * (x[1][last] as number);
-  const s21Im = -2 * (x[0][last] as number);
-  out.s11.re[n] = -1 + 2 * (x[1][0] as number);
-  out.s11.im[n] = -2 * (x[0][0] as number);
+function store({ xRe, xIm, yRe, yIm }: Workspace, last: number, out: Curves, n: number): void {
+  const s21Re = 2 * (xIm[last] as number);
+  const s21Im = -2 * (xRe[last] as number);
+  out.s11.re[n] = -1 + 2 * (xIm[0] as number);
+  out.s11.im[n] = -2 * (xRe[0] as number);
   out.s21.re[n] = s21Re;
   out.s21.im[n] = s21Im;
-  out.s22.re[n] = -1 + 2 * (y[1][last] as number);
-  out.s22.im[n] = -2 * (y[0][last] as number);
+  out.s22.re[n] = -1 + 2 * (yIm[last] as number);
+  out.s22.im[n] = -2 * (yRe[last] as number);
   let re = 0;
   let im = 0;
   for (let i = 1; i < last; i++) {
-    const [a, b, c, d] = [x[0][i] as number, x[1][i] as number, y[0][i] as number, y[1][i] as number];
+    const a = xRe[i] as number;
+    const b = xIm[i] as number;
+    const c = yRe[i] as number;
+    const d = yIm[i] as number;
     re += a * c - b * d;
     im += a * d + b * c;
   }

@@ -8,7 +8,7 @@ import { sweepLosslessSymmetric } from './lossless-kernel.js';
 import { checkFrequencies, checkLoss, isMatrix, type Model } from './model.js';
 import { modeForm, poleForm } from './pole-form.js';
 import { delayOfPolynomials, scatteringOfPolynomials } from './polynomial-response.js';
-import { eliminationPlan, flatten } from './sparse-factor.js';
+import { eliminationPlan } from './sparse-factor.js';
 import { sweepSparse } from './sparse-kernel.js';
 import { sweepSymmetric } from './symmetric-kernel.js';
 
@@ -86,11 +86,11 @@ function matrixSweeper(matrix: CouplingMatrix, loss: number | Float64Array): (om
   const rows = rowsOf(matrix);
   const solved = (omega: Float64Array, out: Curves): Curves => solveMarked(rows, loss, omega, out);
   if (typeof loss !== 'number') {
-    const plan = loss.every((value) => value > 0) ? flatten(eliminationPlan(rows)) : undefined;
+    const plan = loss.every((value) => value > 0) ? eliminationPlan(rows) : undefined;
     return (omega) => {
       const out = emptyCurves(omega.length, false);
       if (plan === undefined) out.groupDelay.fill(Number.NaN);
-      else sweepSparse(rows, plan, loss, omega, out);
+      else sweepSparse(plan, loss, omega, out);
       return solved(omega, out);
     };
   }
