@@ -1,10 +1,10 @@
 import type { FineRoot } from '../forms/index.js';
-import { type Complex, complex, FilterFailure } from '../numerics/index.js';
+import { type Complex, complex, EPS, FilterFailure } from '../numerics/index.js';
 import { type BandPhase, bandPhase } from './band-phase.js';
 import { conjugate, countInUpperHalf, type HalfBandRoot, halfBandRoots, mirrored } from './half-band.js';
 
-/** Bends of the continuation, radians; the next one is tried when two poles came out alike. */
-const DETOURS: readonly number[] = [0.35, -0.6, 0.85, -1.1];
+/** Bends of the continuation, radians; the next one is tried when a path stalls or two poles come out alike. */
+const DETOURS: readonly number[] = [0.35, -0.6, 0.85, -1.1, 0.15, -0.25, 1.3, -1.4];
 
 /** Reflection zeros with 1 - omega, and poles, by falling frequency. */
 export interface BandRoots {
@@ -27,9 +27,11 @@ export function bandRoots(order: number, omega: readonly Complex[], kappa: numbe
   );
   for (const detour of DETOURS) {
     const roots = bothHalves(order, phase, mirrorPhase, kappa, detour);
-    const poles = roots.map(({ pole }) => pole);
-    if (!areApart(poles)) continue;
-    return isSymmetric(phase, mirrorPhase) ? symmetrized(roots) : { reflection: roots, poles: byFrequency(poles) };
+    if (roots === undefined) continue;
+    const found = isSymmetric(phase, mirrorPhase)
+      ? symmetrized(roots)
+      : { reflection: roots, poles: roots.map(({ pole }) => pole) };
+    if (found.poles.length === order && areApart(found.poles)) return { ...found, poles: byFrequency(found.poles) };
   }
   throw new FilterFailure(
     'E_NO_CONVERGENCE',
@@ -44,10 +46,11 @@ function bothHalves(
   mirrorPhase: BandPhase,
   kappa: number,
   detour: number,
-): readonly HalfBandRoot[] {
+): readonly HalfBandRoot[] | undefined {
   const count = isSymmetric(phase, mirrorPhase) ? Math.ceil(order / 2) : countInUpperHalf(phase);
   const upper = halfBandRoots(phase, count, kappa, detour);
   const lower = halfBandRoots(mirrorPhase, order - count, kappa, -detour);
+  if (upper === undefined || lower === undefined) return undefined;
   return [...upper, ...lower.map(mirrored).reverse()];
 }
 
@@ -55,18 +58,24 @@ function isSymmetric(phase: BandPhase, mirrorPhase: BandPhase): boolean {
   return phase.q.every((q, n) => q.re === mirrorPhase.q[n]?.re && q.im === mirrorPhase.q[n]?.im);
 }
 
-/** Equal poles agree to rounding; poles that differ by less than 1e-9 of their distance from the axis count as equal. */
+/**
+ * Whether all poles lie in the left half plane and differ from one another by more than rounding: than a few ulp of their
+ * size, and than 1e-9 of their distance from the axis.
+ */
 function areApart(poles: readonly FineRoot[]): boolean {
-  return poles.every((p, i) =>
-    poles.every((q, j) => j <= i || Math.hypot(p.re - q.re, p.im - q.im) > 1e-9 * Math.abs(p.re)),
-  );
+  const differ = (p: FineRoot, q: FineRoot): boolean =>
+    Math.hypot(p.re - q.re, p.im - q.im) > 1e-9 * Math.abs(p.re) + 16 * EPS * Math.hypot(p.re, p.im);
+  return poles.every((p, i) => p.re < 0 && poles.every((q, j) => j <= i || differ(p, q)));
 }
 
 function byFrequency(poles: readonly FineRoot[]): readonly FineRoot[] {
   return [...poles].sort((a, b) => b.im - a.im || a.re - b.re);
 }
 
-/** Makes rounding symmetric: the upper half is kept, averaged with the mirror image of the lower, and mirrored. */
+/**
+ * Makes rounding symmetric: the upper half is kept, averaged with the mirror image of the lower, and mirrored. Fewer poles
+ * come out when the mirror images do not pair up.
+ */
 function symmetrized(roots: readonly HalfBandRoot[]): BandRoots {
   const last = roots.length - 1;
   const reflection = roots.map((root, n) => {
@@ -79,7 +88,7 @@ function symmetrized(roots: readonly HalfBandRoot[]): BandRoots {
   const upper = poles
     .filter((pole) => !isOwnMirror(poles, pole) && pole.im > 0)
     .map((pole) => averaged(pole, nearestMirror(poles, pole)));
-  return { reflection, poles: byFrequency([...upper, ...real, ...upper.map(conjugate)]) };
+  return { reflection, poles: [...upper, ...real, ...upper.map(conjugate)] };
 }
 
 function isOwnMirror(poles: readonly FineRoot[], pole: FineRoot): boolean {

@@ -2,6 +2,7 @@ import type { FilterPolynomials } from '../forms/index.js';
 import { type Complex, complex, FilterFailure, magnitude } from '../numerics/index.js';
 import { checkOrder, checkReturnLoss, checkTransmissionZeros } from '../specification/index.js';
 import { type BandRoots, bandRoots } from './band-roots.js';
+import { checkLossless } from './lossless.js';
 import { checkRequest } from './request.js';
 import { transmissionLead } from './transmission-lead.js';
 
@@ -23,7 +24,7 @@ export interface GeneralizedChebyshevRequest {
  * The result lists poles and reflection zeros by falling frequency. Cost: O(order^2), 1 ms at order 40.
  *
  * @throws FilterFailure E_ORDER_RANGE, E_RL_RANGE, E_TYPE, E_NOT_FINITE, E_ZERO_COUNT, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE,
- *   E_ZERO_PAIR, E_ZERO_RANGE
+ *   E_ZERO_PAIR, E_ZERO_RANGE, E_ILL_CONDITIONED, E_NO_CONVERGENCE
  *
  * Method: the phase description of `band-phase.ts`; nothing is expanded. Source of the filtering function: R. J. Cameron,
  * General coupling matrix synthesis methods for Chebyshev filtering functions, IEEE Trans. MTT 47(4), 1999 (from memory).
@@ -42,7 +43,7 @@ export function generalizedChebyshev(request: GeneralizedChebyshevRequest): Filt
   );
   const kappa = Math.sqrt(Math.expm1((returnLossDb * Math.LN10) / 10));
   const { reflection, poles } = bandRoots(order, zeros.map(omegaOf), kappa);
-  return {
+  return checkLossless({
     family: 'generalizedChebyshev',
     order,
     poles,
@@ -51,7 +52,7 @@ export function generalizedChebyshev(request: GeneralizedChebyshevRequest): Filt
     transmissionLead: transmissionLead(order, zeros),
     ...rippleConstants(zeros, reflection, kappa),
     returnLossDb,
-  };
+  });
 }
 
 /**

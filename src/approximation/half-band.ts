@@ -16,20 +16,27 @@ export interface HalfBandRoot {
  *
  * Reflection zero k: `Phi(phi) = (k - 1/2)*pi`, one bracket each. Its pole: the same equation with the imaginary part
  * `asinh(kappa)` added. The lower half is the same problem with every zero mirrored (and `detour` negated), so that angles
- * near pi never lose their digits.
+ * near pi never lose their digits. Undefined when a path to a pole stalls.
  */
-export function halfBandRoots(phase: BandPhase, count: number, kappa: number, detour: number): readonly HalfBandRoot[] {
+export function halfBandRoots(
+  phase: BandPhase,
+  count: number,
+  kappa: number,
+  detour: number,
+): readonly HalfBandRoot[] | undefined {
   const roots: HalfBandRoot[] = [];
   let low = 0;
   for (let k = 1; k <= count; k++) {
     const target = (k - 0.5) * Math.PI;
     const phi = monotoneRoot((x) => shifted(phase, x, target), low, UPPER, startAngle(phase, low, target));
+    const angle = continuedAngle(phase, phi, k, Math.asinh(kappa), detour);
+    if (angle === undefined) return undefined;
     const oneMinus = 2 * Math.sin(phi / 2) ** 2;
     roots.push({
       zero: belowEdge(0, oneMinus),
       oneMinus,
       onePlus: 2 * Math.cos(phi / 2) ** 2,
-      pole: poleAt(continuedAngle(phase, phi, k, Math.asinh(kappa), detour)),
+      pole: poleAt(angle),
     });
     low = phi;
   }

@@ -1,14 +1,4 @@
-import {
-  type Complex,
-  complex,
-  divide,
-  EPS,
-  FilterFailure,
-  logarithm,
-  magnitude,
-  multiply,
-  subtract,
-} from '../numerics/index.js';
+import { type Complex, complex, divide, EPS, logarithm, magnitude, multiply, subtract } from '../numerics/index.js';
 import { type BandPhase, phaseAt, phasorAt } from './band-phase.js';
 
 /** A point of a path and the derivative of Phi there. */
@@ -24,8 +14,8 @@ interface Target {
   readonly shift: number;
 }
 
-/** Height of the first step in Phi; later ones adapt. */
-const FIRST_STEP = 1;
+/** Longest step of the height of Phi: next to a multiple zero the poles close in on it by a constant factor a unit. */
+const LONGEST_STEP = 1;
 
 /** A step is accepted when Newton's first correction is at most this part of it: the path cannot have jumped then. */
 const TRUSTED_CORRECTION = 0.25;
@@ -39,14 +29,21 @@ const MOST_STEPS = 2000;
  * `exp(j*Phi)` maps the upper half plane N times onto the unit disk, so the N paths of all k end in N different poles unless
  * two of them meet in a branch point. With zeros on the real axis they do (two conjugate poles meet and become real), on
  * the straight path, for symmetry; therefore the path bends by `detour` radians on its way. All paths of one response must
- * bend alike. Predictor along the tangent, Newton on the logarithm of a phasor quotient.
- *
- * @throws FilterFailure E_NO_CONVERGENCE
+ * bend alike. No path leaves the strip 0 < Re z < pi, Im z > 0: on its sides exp(j*Phi) is real, on its floor of size 1, and
+ * the target is neither. Predictor along the tangent, Newton on the logarithm of a phasor quotient.
+ * Undefined when the path stalls.
  */
-export function continuedAngle(phase: BandPhase, phi: number, k: number, height: number, detour: number): Complex {
+export function continuedAngle(
+  phase: BandPhase,
+  phi: number,
+  k: number,
+  height: number,
+  detour: number,
+): Complex | undefined {
   let point: PathPoint = { z: complex(phi, 0), slope: complex(phaseAt(phase, phi).slope, 0) };
   let reached = 0;
-  let step = Math.min(1, FIRST_STEP / height);
+  const longest = Math.min(1, LONGEST_STEP / height);
+  let step = longest;
   for (let turn = 0; turn < MOST_STEPS; turn++) {
     const next = Math.min(1, reached + step);
     const tangent = divide(complex(detour * Math.PI * Math.cos(Math.PI * reached), height), point.slope);
@@ -60,18 +57,9 @@ export function continuedAngle(phase: BandPhase, phi: number, k: number, height:
     point = settled;
     reached = next;
     if (reached === 1) return point.z;
-    step *= 1.5;
+    step = Math.min(longest, 1.5 * step);
   }
-  throw new FilterFailure(
-    'E_NO_CONVERGENCE',
-    `E_NO_CONVERGENCE transmissionZeros: found a pole (number ${k}) that is not reached in ${MOST_STEPS} steps; allowed responses whose poles are apart; move a transmission zero or the return loss slightly`,
-    {
-      argument: 'transmissionZeros',
-      value: k,
-      limit: MOST_STEPS,
-      hint: 'move a transmission zero or the return loss slightly',
-    },
-  );
+  return undefined;
 }
 
 /** Newton from a predicted point; undefined when the step that led there is not to be trusted. */
@@ -89,6 +77,7 @@ function newton(phase: BandPhase, start: Complex, target: Target, stepSize: numb
     const size = magnitude(correction);
     if (count === 0 && !(size <= TRUSTED_CORRECTION * stepSize)) return undefined;
     z = subtract(z, correction);
+    if (!(z.re > 0 && z.re < Math.PI && z.im > 0)) return undefined;
     if (size <= 4 * EPS * magnitude(z) || (size >= previous / 2 && size < 1e-12 * magnitude(z))) return { z, slope };
     if (size > previous) return undefined;
     previous = size;

@@ -79,3 +79,42 @@ describe('filters that were wrong before', () => {
     expect(certify(response, transversal(response)).filter(({ holds }) => !holds)).toEqual([]);
   });
 });
+
+// Poles came out in the right half plane, or twice, and nothing said so.
+describe('adversarial zeros', () => {
+  const pair = (re: number, im: number) => [
+    { re, im },
+    { re: -re, im },
+  ];
+
+  it.each([
+    { order: 2, returnLossDb: 60, transmissionZeros: [1.3, 1.3] },
+    { order: 2, returnLossDb: 100, transmissionZeros: [2, 2] },
+    { order: 4, returnLossDb: 54, transmissionZeros: [-1.2, 1.02, 1.002, 1.02] },
+    {
+      order: 7,
+      returnLossDb: 56.3,
+      transmissionZeros: [-1.0013553460518678, -1.0102542269994612, -1.0095187292362282, 1.2, 1.2],
+    },
+    { order: 4, returnLossDb: 80, transmissionZeros: [...pair(0.05, 0), ...pair(0.05, 0)] },
+    {
+      order: 5,
+      returnLossDb: 0.5,
+      transmissionZeros: [
+        ...pair(0.05100268731274092, -0.3073053420521319),
+        ...pair(0.02121274161050025, 0.4055576669052243),
+      ],
+    },
+  ])('order $order at $returnLossDb dB are certified', (request) => {
+    const response = generalizedChebyshev(request);
+    expect(response.poles.every(({ re }) => re < 0)).toBe(true);
+    expect(certify(response, transversal(response)).filter(({ holds }) => !holds)).toEqual([]);
+  });
+
+  it.each([
+    { order: 5, returnLossDb: 0.1, transmissionZeros: [...pair(1e-6, 0), ...pair(1e-6, 0), -1.0974540980905751] },
+    { order: 4, returnLossDb: 20, transmissionZeros: [...pair(1e-9, 0), ...pair(1e-9, 0)] },
+  ])('order $order within rounding of the axis are refused', (request) => {
+    expect(refusalOf(() => generalizedChebyshev(request)).code).toMatch(/E_ILL_CONDITIONED|E_NO_CONVERGENCE/);
+  });
+});
