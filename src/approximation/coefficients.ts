@@ -1,5 +1,5 @@
 import { checkPolynomials, type FilterPolynomials } from '../forms/index.js';
-import { type Complex, coefficientsFromRoots, multiply } from '../numerics/index.js';
+import { type Complex, coefficientsFromRoots, multiply, refusal } from '../numerics/index.js';
 
 /** The polynomials of a response as coefficients, ascending: `e[0] + e[1]*s + ...`. */
 export interface PolynomialCoefficients {
@@ -26,13 +26,22 @@ export interface PolynomialCoefficients {
 export function coefficients(polynomials: FilterPolynomials): PolynomialCoefficients {
   checkPolynomials(polynomials);
   const p = coefficientsFromRoots(polynomials.transmissionZeros);
-  return {
+  const result = {
     e: coefficientsFromRoots(polynomials.poles),
     f: coefficientsFromRoots(polynomials.reflectionZeros),
     p: p.map((coefficient) => withPlusZeros(multiply(coefficient, polynomials.transmissionLead))),
     epsilon: polynomials.epsilon,
     epsilonR: polynomials.epsilonR,
   };
+  const finite = [result.e, result.f, result.p].every((list) => list.every(({ re, im }) => Number.isFinite(re + im)));
+  if (finite) return result;
+  throw refusal(
+    'E_NOT_FINITE',
+    'polynomials',
+    'roots whose coefficients exceed 1e308',
+    'smaller roots',
+    'use the roots themselves',
+  );
 }
 
 const withPlusZeros = ({ re, im }: Complex): Complex => ({ re: re + 0, im: im + 0 });

@@ -26,22 +26,23 @@ export function checkLossless(polynomials: FilterPolynomials): FilterPolynomials
   );
 }
 
+/** |S11|^2 + |S21|^2 from magnitudes, squared last: epsilon^2 may leave the range of doubles where epsilon does not. */
 function power(
   { poles, reflectionZeros, transmissionZeros, epsilon, epsilonR }: FilterPolynomials,
   omega: number,
 ): number {
-  let reflected = 1 / (epsilonR * epsilonR);
-  let transmitted = 1 / (epsilon * epsilon);
+  let reflected = 1 / epsilonR;
+  let transmitted = 1 / epsilon;
   poles.forEach((pole, n) => {
-    const below = squaredDistance(pole, omega);
-    reflected *= squaredDistance(reflectionZeros[n] as FineRoot, omega) / below;
+    const below = distance(pole, omega);
+    reflected *= distance(reflectionZeros[n] as FineRoot, omega) / below;
     const zero = transmissionZeros[n];
-    transmitted *= (zero === undefined ? 1 : squaredDistance(zero, omega)) / below;
+    transmitted *= (zero === undefined ? 1 : distance(zero, omega)) / below;
   });
-  return reflected + transmitted;
+  return reflected * reflected + transmitted * transmitted;
 }
 
-function squaredDistance({ re, im, imRest = 0 }: FineRoot, omega: number): number {
+function distance({ re, im, imRest = 0 }: FineRoot, omega: number): number {
   const above = omega - im - imRest;
-  return re * re + above * above;
+  return Math.sqrt(re * re + above * above);
 }

@@ -2,6 +2,8 @@ import type { Complex, CouplingMatrix, FilterPolynomials } from '../forms/index.
 import { FilterFailure } from '../numerics/index.js';
 import type { CertificationContext } from './context.js';
 
+const FAMILIES: readonly unknown[] = ['generalizedChebyshev', 'butterworth', 'lossless'];
+
 const STRUCTURES: readonly unknown[] = ['folded', 'arrow', 'inline', 'transversal'];
 
 /** Refuses arguments that are not of the stated form; a form that is right but says something wrong passes. */
@@ -11,6 +13,8 @@ export function checkArguments(
   context: CertificationContext,
 ): void {
   checkObject('polynomials', polynomials);
+  if (!FAMILIES.includes(polynomials.family))
+    refuse('E_TYPE', 'polynomials.family', polynomials.family, FAMILIES.join(', '));
   checkOrder('polynomials.order', polynomials.order);
   for (const name of ['poles', 'reflectionZeros', 'transmissionZeros'] as const) {
     checkRoots(`polynomials.${name}`, polynomials[name]);

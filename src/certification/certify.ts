@@ -6,6 +6,7 @@ import { matrixEnergy, polynomialEnergy } from './energy.js';
 import { equiripple } from './equiripple.js';
 import { invariants } from './invariants.js';
 import { matrixResponse } from './matrix-response.js';
+import { maximallyFlat } from './maximally-flat.js';
 import { powerSums } from './moments.js';
 import { rootResponse } from './root-response.js';
 import { samplePoints } from './sample-points.js';
@@ -17,7 +18,7 @@ import { transmissionZeros } from './transmission-zeros.js';
  * Certificates of one synthesized filter, computed from the returned numbers alone; a check that does not apply is left out.
  *
  * C1 lossless and reciprocal matrix; C2 lossless polynomials; C3 stable, and the poles are roots of the true E; C4 ripple
- * (equiripple families); C5 transmission zeros; C6 matrix against polynomials; C7 power sums of the roots, and what a
+ * (equiripple families), or flatness; C5 transmission zeros; C6 matrix against polynomials; C7 power sums of the roots, and what a
  * rotation keeps; C8 structure; C9 digits left. Numbers are normalized (omega, s = j*omega); levels in dB say so.
  * Cost about 45 ms at order 40 and 0.3 s at order 100, with `before` 65 ms and 0.6 s.
  *
@@ -47,6 +48,7 @@ export function certify(
     ...polynomialEnergy(fromRoots),
     ...stability(polynomials),
     ...equiripple(polynomials),
+    ...maximallyFlat(polynomials),
     ...transmissionZeros(polynomials, matrix, askedZeros),
     ...agreement(matrix, fromMatrix, fromRoots),
     ...powerSums(polynomials, matrix),

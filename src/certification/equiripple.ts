@@ -17,7 +17,10 @@ const GOLDEN = 0.6180339887498949;
  */
 export function equiripple(polynomials: FilterPolynomials): Certificate[] {
   const { family, order, returnLossDb } = polynomials;
-  if (family !== 'generalizedChebyshev' || returnLossDb === undefined) return [];
+  if (family !== 'generalizedChebyshev') return [];
+  // Without its level an equiripple response cannot be certified; leaving the check out would let it pass.
+  if (returnLossDb === undefined)
+    return [atMost('C4 ripple level against the return loss, dB', Number.NaN, LEVEL_LIMIT_DB)];
   const zeros = polynomials.reflectionZeros.map((f) => f.im).sort((a, b) => a - b);
   const tested = [-1, ...zeros.slice(1).map((zero, k) => (zero + (zeros[k] ?? zero)) / 2), 1];
   const onAxis = polynomials.reflectionZeros.every((f) => f.re === 0);

@@ -21,7 +21,7 @@ export function checkPolynomials(polynomials: FilterPolynomials): FilterPolynomi
   if (!Number.isInteger(order) || order < 1)
     throw refusal('E_POLYNOMIALS', 'polynomials.order', order, 'a whole number from 1', 'correct the order');
   checkRoots('poles', poles, order, order);
-  checkRoots('reflectionZeros', reflectionZeros, 0, order);
+  checkRoots('reflectionZeros', reflectionZeros, order, order);
   checkRoots('transmissionZeros', transmissionZeros, 0, order);
   checkNumbers('transmissionLead', transmissionLead);
   for (const [name, value] of [

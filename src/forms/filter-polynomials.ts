@@ -8,8 +8,8 @@ export interface FineRoot extends Complex {
   readonly imRest?: number;
 }
 
-/** Which ripple law a transfer function obeys; decides which certificates apply. */
-export type Family = 'generalizedChebyshev' | 'butterworth';
+/** Which law a transfer function obeys, and so which certificates apply; `lossless` = none but losslessness. */
+export type Family = 'generalizedChebyshev' | 'butterworth' | 'lossless';
 
 /**
  * A lossless reciprocal two-port response in product form, low-pass prototype variable s = j*omega.

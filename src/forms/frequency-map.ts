@@ -1,3 +1,5 @@
+import { refusal } from '../numerics/index.js';
+
 /** A band in hertz: geometric center and equiripple (or half-power) width, `centerHz = sqrt(lower*upper)`. */
 export interface Band {
   readonly centerHz: number;
@@ -8,12 +10,18 @@ export interface Band {
  * Band-pass frequency (hertz, above 0) to low-pass prototype frequency, `omega = (f0/B)*(f/f0 - f0/f)`, written without
  * cancellation near f0.
  *
+ * @throws FilterFailure E_BAND, E_FREQUENCY
+ *
  * Source: the classical reactance transformation of lumped band-pass filters; common practice, no source.
  *
  * @example
  * omegaFromHz({ centerHz: 1000e6, bandwidthHz: 50e6 }, 1050e6).toFixed(6); // '1.952381'
  */
 export function omegaFromHz(band: Band, hz: number): number {
+  checkBandNumbers(band);
+  if (typeof hz !== 'number' || !(hz > 0) || hz > MOST_HZ || hz < 1 / MOST_HZ) {
+    throw refusal('E_FREQUENCY', 'hz', hz, `hertz above 0, to ${MOST_HZ}`, 'check the unit');
+  }
   return ((hz - band.centerHz) / band.bandwidthHz) * ((hz + band.centerHz) / hz);
 }
 
@@ -25,6 +33,10 @@ export function omegaFromHz(band: Band, hz: number): number {
  * hzFromOmega({ centerHz: 1000e6, bandwidthHz: 50e6 }, 1).toFixed(3); // '1025312451.187'
  */
 export function hzFromOmega(band: Band, omega: number): number {
+  checkBandNumbers(band);
+  if (typeof omega !== 'number' || !Number.isFinite(omega)) {
+    throw refusal('E_NOT_FINITE', 'omega', omega, 'a finite number', 'replace it');
+  }
   const x = (omega * band.bandwidthHz) / (2 * band.centerHz);
   const root = Math.sqrt(1 + x * x);
   // For negative x the sum cancels; its reciprocal does not.
@@ -38,7 +50,8 @@ export function hzFromOmega(band: Band, omega: number): number {
  * bandFromEdges(3822e6, 3858e6).bandwidthHz; // 36000000
  */
 export function bandFromEdges(lowerHz: number, upperHz: number): Band {
-  return { centerHz: Math.sqrt(lowerHz) * Math.sqrt(upperHz), bandwidthHz: upperHz - lowerHz };
+  const band = { centerHz: Math.sqrt(lowerHz) * Math.sqrt(upperHz), bandwidthHz: upperHz - lowerHz };
+  return checkBandNumbers(band);
 }
 
 /**
@@ -49,4 +62,19 @@ export function bandFromEdges(lowerHz: number, upperHz: number): Band {
  */
 export function edgesOfBand(band: Band): { readonly lowerHz: number; readonly upperHz: number } {
   return { lowerHz: hzFromOmega(band, -1), upperHz: hzFromOmega(band, 1) };
+}
+
+/** No frequency of a circuit lies beyond, or below its inverse; products of two stay in the range of doubles. */
+const MOST_HZ = 1e100;
+
+function checkBandNumbers(band: Band): Band {
+  const usable = (value: unknown): boolean => typeof value === 'number' && value > 0 && value <= MOST_HZ;
+  if (usable(band?.centerHz) && usable(band?.bandwidthHz)) return band;
+  throw refusal(
+    'E_BAND',
+    'band',
+    band,
+    'centerHz and bandwidthHz above 0, lower edge below upper edge',
+    'check the edges and their units',
+  );
 }

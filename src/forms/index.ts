@@ -1,7 +1,7 @@
 /** Forms: the nouns that every other room speaks, as plain readonly data, and the maps between hertz and omega.
  *  Takes    plain values
  *  Gives    Complex, FilterPolynomials, CouplingMatrix, Rotation, Scattering, Certificate, mask lines, Band and its maps
- *  Refuses  E_TYPE, E_NOT_FINITE, E_POLYNOMIALS for polynomials that are none; rooms check the rest at their own doors
+ *  Refuses  E_TYPE, E_NOT_FINITE, E_POLYNOMIALS for polynomials that are none, E_BAND, E_FREQUENCY; rooms check the rest themselves
  *  Source   R. J. Cameron, Advanced coupling matrix synthesis techniques for microwave filters, IEEE Trans. MTT 51(1), 2003 (the (N+2) matrix; from memory) */
 
 export type { Complex } from '../numerics/index.js';

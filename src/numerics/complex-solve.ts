@@ -92,6 +92,18 @@ function choosePivot(re: Float64Array, im: Float64Array, order: Int32Array, size
   swap(order, k, best);
 }
 
+/** 1/(a + j*b) by Smith's scaling: no square that could leave the range of doubles. */
+function reciprocal(a: number, b: number): readonly [number, number] {
+  if (Math.abs(a) >= Math.abs(b)) {
+    const ratio = b / a;
+    const below = a + b * ratio;
+    return [1 / below, -ratio / below];
+  }
+  const ratio = a / b;
+  const below = a * ratio + b;
+  return [ratio / below, -1 / below];
+}
+
 function swap(values: Float64Array | Int32Array, i: number, j: number): void {
   const kept = values[i] as number;
   values[i] = values[j] as number;
@@ -99,15 +111,13 @@ function swap(values: Float64Array | Int32Array, i: number, j: number): void {
 }
 
 function eliminateBelow(re: Float64Array, im: Float64Array, size: number, k: number): void {
-  const pivotRe = re[k * size + k] as number;
-  const pivotIm = im[k * size + k] as number;
-  const square = pivotRe * pivotRe + pivotIm * pivotIm;
+  const [inverseRe, inverseIm] = reciprocal(re[k * size + k] as number, im[k * size + k] as number);
   for (let i = k + 1; i < size; i++) {
     const a = re[i * size + k] as number;
     const b = im[i * size + k] as number;
     if (a === 0 && b === 0) continue;
-    const factorRe = (a * pivotRe + b * pivotIm) / square;
-    const factorIm = (b * pivotRe - a * pivotIm) / square;
+    const factorRe = a * inverseRe - b * inverseIm;
+    const factorIm = a * inverseIm + b * inverseRe;
     re[i * size + k] = factorRe;
     im[i * size + k] = factorIm;
     for (let j = k + 1; j < size; j++) {
@@ -126,13 +136,11 @@ function solve({ size, re, im, order }: Factors, x: ComplexVector): void {
   for (let i = 0; i < size; i++) substitute(re, im, copyRe, copyIm, i * size, i, 0, i);
   for (let i = size - 1; i >= 0; i--) {
     substitute(re, im, copyRe, copyIm, i * size, i, i + 1, size);
-    const a = re[i * size + i] as number;
-    const b = im[i * size + i] as number;
-    const square = a * a + b * b;
+    const [a, b] = reciprocal(re[i * size + i] as number, im[i * size + i] as number);
     const p = copyRe[i] as number;
     const q = copyIm[i] as number;
-    copyRe[i] = (p * a + q * b) / square;
-    copyIm[i] = (q * a - p * b) / square;
+    copyRe[i] = p * a - q * b;
+    copyIm[i] = p * b + q * a;
   }
   x.re.set(copyRe);
   x.im.set(copyIm);

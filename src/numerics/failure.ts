@@ -43,6 +43,14 @@ export class FilterFailure extends Error {
 
 /** A refusal in the package's message form: what was found, what is allowed, what to do. Long values are cut. */
 export function refusal(code: string, argument: string, value: unknown, limit: unknown, hint: string): FilterFailure {
-  const message = `${code} ${argument}: found ${String(value).slice(0, 40)}; allowed ${limit}; ${hint}`;
+  const message = `${code} ${argument}: found ${shown(value)}; allowed ${limit}; ${hint}`;
   return new FilterFailure(code, message, { argument, value, limit, hint });
+}
+
+/** At most 40 characters of a value; of an object only that it is one, since its own text may throw. */
+function shown(value: unknown): string {
+  if (typeof value === 'function') return 'a function';
+  if (typeof value === 'object' && value !== null)
+    return Array.isArray(value) ? `a list of ${value.length}` : 'an object';
+  return String(value).slice(0, 40);
 }

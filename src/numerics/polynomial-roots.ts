@@ -1,6 +1,6 @@
 import { Complex as ComplexNumber } from 'complex.js';
 import type { Complex } from './complex-type.js';
-import { FilterFailure } from './failure.js';
+import { FilterFailure, refusal } from './failure.js';
 import { EPS } from './limits.js';
 
 /** A root with its backward error: `|p(root)| / (eps * sum |c_k| |root|^k)`; below 4 nothing more is in the coefficients. */
@@ -65,11 +65,23 @@ export function polynomialRoots(coefficients: readonly Complex[]): readonly Poly
     }
     return { re: root.re, im: root.im, backwardError };
   });
+  if (zeros.length + found.length !== given.length - 1) {
+    throw refusal(
+      'E_NO_CONVERGENCE',
+      'coefficients',
+      'coefficients too different in size',
+      'coefficients within 1e300 of one another',
+      'scale the variable',
+    );
+  }
   return [...zeros, ...found];
 }
 
 function checked(coefficients: readonly Complex[]): readonly ComplexNumber[] {
-  const finite = coefficients.every(({ re, im }) => Number.isFinite(re) && Number.isFinite(im));
+  const given: unknown = coefficients;
+  if (!Array.isArray(given))
+    throw refusal('E_TYPE', 'coefficients', given, 'an array of complex numbers', 'give [{ re, im }, ...]');
+  const finite = given.every((each) => Number.isFinite(each?.re) && Number.isFinite(each?.im));
   const last = coefficients[coefficients.length - 1];
   if (coefficients.length < 2 || !finite || last === undefined || (last.re === 0 && last.im === 0)) {
     throw new FilterFailure(
@@ -78,7 +90,10 @@ function checked(coefficients: readonly Complex[]): readonly ComplexNumber[] {
       { argument: 'coefficients', hint: 'trim the list' },
     );
   }
-  return coefficients.map(({ re, im }) => new ComplexNumber(re, im));
+  // One power of two for all: roots stay to the bit, and neither the smallest nor the largest coefficient leaves the range of doubles.
+  const largest = Math.max(...coefficients.map(({ re, im }) => Math.max(Math.abs(re), Math.abs(im))));
+  const scale = 2 ** Math.floor(Math.log2(largest));
+  return coefficients.map(({ re, im }) => new ComplexNumber(re / scale, im / scale));
 }
 
 /** Newton step p/p' and backward error at z; outside the unit circle through the reversed polynomial, which cannot overflow. */

@@ -1,5 +1,5 @@
 import type { Scattering } from '../forms/index.js';
-import { type ComplexVector, complex, inverseColumns } from '../numerics/index.js';
+import { type ComplexVector, complex, inverseColumns, refusal } from '../numerics/index.js';
 
 /** A matrix prepared for solving: rows of doubles, and loss a resonator. */
 export interface SolvableMatrix {
@@ -12,18 +12,32 @@ export interface SolvedPoint extends Scattering {
   readonly groupDelay: number;
 }
 
-/** Response of a coupling matrix at one real omega by solving its equations; right to a few ulp for the given entries. */
+/**
+ * Response of a coupling matrix at one real omega by solving its equations; right to a few ulp for the given entries.
+ *
+ * @throws FilterFailure E_SINGULAR
+ */
 export function solvePoint(matrix: SolvableMatrix, omega: number): SolvedPoint {
   const last = matrix.rows.length - 1;
   const [source, load] = portColumns(matrix, omega);
   const s21 = complex(2 * (source.im[last] as number), -2 * (source.re[last] as number));
-  return {
+  const point = {
     s11: complex(-1 + 2 * (source.im[0] as number), -2 * (source.re[0] as number)),
     s21,
     s12: s21,
     s22: complex(-1 + 2 * (load.im[last] as number), -2 * (load.re[last] as number)),
     groupDelay: delayFromColumns(matrix, source, load, s21),
   };
+  if (![point.s11.re, point.s22.re, s21.re, point.groupDelay].every(Number.isFinite)) {
+    throw refusal(
+      'E_SINGULAR',
+      'omega',
+      omega,
+      'frequencies where the equations of the network can be solved',
+      'shift the frequency or add loss',
+    );
+  }
+  return point;
 }
 
 function portColumns({ rows, loss }: SolvableMatrix, omega: number): readonly [ComplexVector, ComplexVector] {

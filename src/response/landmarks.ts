@@ -1,7 +1,8 @@
 import type { CouplingMatrix } from '../forms/index.js';
-import { type Complex, complexEigenvalues } from '../numerics/index.js';
+import { type Complex, complexEigenvalues, symmetricEigen } from '../numerics/index.js';
 import { rowsOf } from '../topology/index.js';
 import { isMatrix, type Model } from './model.js';
+import { type Residue, zerosOf } from './zero-landmarks.js';
 
 /** A place on the frequency axis near which the response may change quickly, and how quickly: half width in omega. */
 export interface Landmark {
@@ -12,7 +13,8 @@ export interface Landmark {
 /**
  * Poles and zeros of a model as landmarks: between the samples that they ask for, no narrow feature can hide.
  *
- * A transfer function lists them; for a matrix the poles are the eigenvalues of the resonator block loaded by the ports.
+ * A transfer function lists them; for a matrix the poles are the eigenvalues of the resonator block loaded by the ports, the
+ * zeros of S21 those of another block (`zero-landmarks.ts`).
  * `loss` moves every root away from the axis by that much.
  */
 export function landmarks(model: Model, loss: number | readonly number[]): readonly Landmark[] {
@@ -37,7 +39,24 @@ function matrixLandmarks(matrix: CouplingMatrix, loss: readonly number[]): reado
     Array.from({ length: order }, (_, i) => Float64Array.from({ length: order }, (__, j) => entry(i + 1, j + 1)));
   const re = block((i, j) => value(i, j) - loaded(i, j, 're'));
   const im = block((i, j) => (i === j ? -(loss[i - 1] as number) : 0) - loaded(i, j, 'im'));
-  return complexEigenvalues({ re, im }).map((root) => ({ omega: -root.re, halfWidth: Math.abs(root.im) }));
+  const poles = complexEigenvalues({ re, im }).map((root) => ({ omega: -root.re, halfWidth: Math.abs(root.im) }));
+  const zeros = zerosOf(residuesOf(rows, loss), value(0, order + 1));
+  return [...poles, ...zeros.map((zero) => ({ omega: zero.re, halfWidth: Math.abs(zero.im) }))];
+}
+
+/** Resonances of the block with the loss each one has, to first order: that of its resonators by their share in it. */
+function residuesOf(rows: readonly Float64Array[], loss: readonly number[]): readonly Residue[] {
+  const last = rows.length - 1;
+  const { values, vectors } = symmetricEigen(rows.slice(1, last).map((row) => row.slice(1, last)));
+  return vectors.map((vector, k) => {
+    let [source, load, damping] = [0, 0, 0];
+    vector.forEach((weight, i) => {
+      source += weight * (rows[0]?.[i + 1] as number);
+      load += weight * (rows[last]?.[i + 1] as number);
+      damping += weight * weight * (loss[i] as number);
+    });
+    return { lambda: { re: -(values[k] as number), im: damping }, share: source * load };
+  });
 }
 
 /** `(M_pp - j)^-1`, M_pp the 2 x 2 of source and load. */

@@ -20,10 +20,13 @@ export function isMatrix(model: Model): model is CouplingMatrix {
   return false;
 }
 
+/** Most frequencies of one sweep: 80 MB a curve. */
+const LONGEST_GRID = 1e7;
+
 /** A copy of a grid, checked. @throws FilterFailure E_TYPE, E_NOT_FINITE */
 export function checkFrequencies(omega: ArrayLike<number>, name: string): Float64Array {
-  if (omega === null || typeof omega !== 'object' || !Number.isInteger(omega.length)) {
-    throw refusal('E_TYPE', name, omega, 'an array of numbers', 'give an array, also for one frequency');
+  if (typeof omega !== 'object' || omega === null || !(omega.length >= 0 && omega.length <= LONGEST_GRID)) {
+    throw refusal('E_TYPE', name, omega, 'an array of at most 1e7 numbers', 'give an array, also for one frequency');
   }
   const grid = new Float64Array(omega.length);
   for (let n = 0; n < grid.length; n++) {

@@ -19,15 +19,26 @@ export function poleForm(rows: readonly Float64Array[]): PoleForm {
   const load = (rows[last] as Float64Array).slice(1, last);
   const ports = { ss: rows[0]?.[0] ?? 0, sl: rows[0]?.[last] ?? 0, ll: rows[last]?.[last] ?? 0 };
   if (block.every((row, i) => row.every((value, j) => i === j || value === 0))) {
-    return { lambda: Float64Array.from(block, (row, i) => -(row[i] as number)), source, load, ports };
+    return withoutDark({ lambda: Float64Array.from(block, (row, i) => -(row[i] as number)), source, load, ports });
   }
   const { values, vectors } = symmetricEigen(block);
-  return {
-    lambda: values.map((value) => -value),
-    source: Float64Array.from(vectors, (vector) => dot(vector, source)),
-    load: Float64Array.from(vectors, (vector) => dot(vector, load)),
-    ports,
-  };
+  const lambda = values.map((value) => -value);
+  const project = (row: Float64Array): Float64Array => Float64Array.from(vectors, (vector) => dot(vector, row));
+  return withoutDark({ lambda, source: project(source), load: project(load), ports });
+}
+
+/**
+ * Leaves out resonances that no port couples to: what an eigenvector shows there is rounding, and a frequency exactly on one
+ * would divide it by zero.
+ */
+function withoutDark({ lambda, source, load, ports }: PoleForm): PoleForm {
+  const coupling = Math.max(...source.map(Math.abs), ...load.map(Math.abs));
+  const room = 4 * lambda.length * EPS * coupling;
+  const seen = Array.from(lambda.keys()).filter(
+    (k) => Math.abs(source[k] as number) > room || Math.abs(load[k] as number) > room,
+  );
+  const kept = (values: Float64Array): Float64Array => Float64Array.from(seen, (k) => values[k] as number);
+  return { lambda: kept(lambda), source: kept(source), load: kept(load), ports };
 }
 
 function dot(a: Float64Array, b: Float64Array): number {
@@ -52,14 +63,14 @@ export interface ModeTerms {
 /**
  * Splits a pole form into modes when every resonance couples equally to both ports; undefined otherwise.
  *
- * The two couplings may differ by the rounding of an eigenvector, N*eps of the norm; their average replaces both. Where an
+ * The two couplings may differ by the rounding of an eigenvector, N*eps of the largest coupling; their average replaces both. Where an
  * even and an odd resonance nearly coincide the computed eigenvectors mix, the couplings differ by more, and the network is
  * left to the general sums, to which any basis of the pair is as good.
  */
 export function modeForm({ lambda, source, load, ports }: PoleForm): ModeForm | undefined {
   if (ports.ss !== ports.ll) return undefined;
-  const norm = Math.max(...lambda.map(Math.abs), ...source.map(Math.abs), ...load.map(Math.abs));
-  const room = 64 * lambda.length * EPS * norm;
+  const coupling = Math.max(...source.map(Math.abs), ...load.map(Math.abs));
+  const room = 64 * lambda.length * EPS * coupling;
   const even: number[] = [];
   const odd: number[] = [];
   for (let k = 0; k < lambda.length; k++) {

@@ -39,4 +39,8 @@ export function delayOfPolynomials(polynomials: FilterPolynomials, omega: number
 /** How far a frequency lies above a root, with the root's rest. */
 const above = (omega: number, { im, imRest = 0 }: FineRoot): number => omega - im - imRest;
 
-const realOfInverse = (re: number, im: number): number => re / (re * re + im * im);
+/** Real part of 1/(re + j*im); 0 on the root itself, where S21 = 0 has no phase. */
+function realOfInverse(re: number, im: number): number {
+  const square = re * re + im * im;
+  return square === 0 ? 0 : re / square;
+}

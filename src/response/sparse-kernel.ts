@@ -15,9 +15,8 @@ interface Workspace {
  * Sweep with a loss of its own for every resonator (all > 0): symmetric elimination without pivoting in an order that keeps
  * the pattern sparse, ports last, then back substitution of both port columns.
  *
- * Without pivoting it is stable because the imaginary part of A is negative definite: the growth of complex symmetric
- * elimination is then below 3 (N. J. Higham, Factorizing complex symmetric matrices with positive definite real and
- * imaginary parts, Math. Comp. 67, 1998; from memory).
+ * Without pivoting a small pivot loses digits (a resonator at its own frequency has only its loss there); such points are
+ * marked by NaN in the delay and solved with pivoting by the caller.
  */
 export function sweepSparse(plan: EliminationPlan, loss: Float64Array, omega: Float64Array, out: Curves): void {
   const slots = plan.values.length;
@@ -35,9 +34,10 @@ export function sweepSparse(plan: EliminationPlan, loss: Float64Array, omega: Fl
   for (let n = 0; n < omega.length; n++) {
     work.re.set(plan.values);
     work.im.set(damping);
-    eliminate(work, plan, omega[n] as number);
+    const growth = eliminate(work, plan, omega[n] as number);
     portColumns(work, plan);
     store(work, size - 1, out, n);
+    if (!(growth < LARGEST_GROWTH)) out.groupDelay[n] = Number.NaN;
   }
 }
 
@@ -52,15 +52,23 @@ function dampingOf({ nodes, starts, ports, values }: EliminationPlan, loss: Floa
   return damping;
 }
 
-/** Adds omega to each pivot as its turn comes, turns the pivot into its inverse and updates what its couplings touch. */
-function eliminate({ re, im }: Workspace, { nodes, starts, targets }: EliminationPlan, omega: number): void {
+/** Largest square of an inverse pivot: below, the elimination loses at most 1e3 of 2^52; above, the point is marked. */
+const LARGEST_GROWTH = 1e6;
+
+/**
+ * Adds omega to each pivot as its turn comes, turns the pivot into its inverse and updates what its couplings touch; gives
+ * the largest square of an inverse pivot.
+ */
+function eliminate({ re, im }: Workspace, { nodes, starts, targets }: EliminationPlan, omega: number): number {
   let pair = 0;
+  let growth = 0;
   for (let n = 0; n < nodes.length; n++) {
     const diagonal = starts[n] as number;
     const end = starts[n + 1] as number;
     const a = (re[diagonal] as number) + omega;
     const b = im[diagonal] as number;
     const square = 1 / (a * a + b * b);
+    if (square > growth) growth = square;
     const inverseRe = a * square;
     const inverseIm = -b * square;
     re[diagonal] = inverseRe;
@@ -79,6 +87,7 @@ function eliminate({ re, im }: Workspace, { nodes, starts, targets }: Eliminatio
       }
     }
   }
+  return growth;
 }
 
 /** Columns of the inverse at source (x) and load (y): the 2 x 2 of the ports first, then the resonators backward. */

@@ -85,12 +85,14 @@ function polynomialSweeper(
 function matrixSweeper(matrix: CouplingMatrix, loss: number | Float64Array): (omega: Float64Array) => Curves {
   const rows = rowsOf(matrix);
   const solved = (omega: Float64Array, out: Curves): Curves => solveMarked(rows, loss, omega, out);
+  if (rows.some((row) => row.some((value) => Math.abs(value) > LARGEST_ENTRY))) {
+    return (omega) => solved(omega, unsolved(omega.length));
+  }
   if (typeof loss !== 'number') {
     const plan = loss.every((value) => value > 0) ? eliminationPlan(rows) : undefined;
     return (omega) => {
-      const out = emptyCurves(omega.length, false);
-      if (plan === undefined) out.groupDelay.fill(Number.NaN);
-      else sweepSparse(plan, loss, omega, out);
+      const out = unsolved(omega.length);
+      if (plan !== undefined) sweepSparse(plan, loss, omega, out);
       return solved(omega, out);
     };
   }
@@ -103,6 +105,16 @@ function matrixSweeper(matrix: CouplingMatrix, loss: number | Float64Array): (om
     else sweepSymmetric(modes, loss, omega, out);
     return solved(omega, out);
   };
+}
+
+/** Above this entry the eigenvalues, right to eps times the largest, no longer place the other resonances: solve instead. */
+const LARGEST_ENTRY = 1000;
+
+/** Curves with every point marked for `solveMarked`. */
+function unsolved(points: number): Curves {
+  const out = emptyCurves(points, false);
+  out.groupDelay.fill(Number.NaN);
+  return out;
 }
 
 /** Solves the points that a kernel left without a number: resonances hit exactly, or too closely for its sums. */

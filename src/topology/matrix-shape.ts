@@ -7,7 +7,7 @@ export type Rows = Float64Array[];
 /**
  * Checks a coupling matrix at the room's door and copies it into rows of doubles.
  *
- * @throws FilterFailure E_MATRIX_SHAPE, E_TYPE, E_NOT_FINITE, E_NOT_SYMMETRIC
+ * @throws FilterFailure E_MATRIX_SHAPE, E_TYPE, E_NOT_FINITE, E_ENTRY_RANGE, E_NOT_SYMMETRIC
  */
 export function rowsOf(matrix: CouplingMatrix): Rows {
   const size = matrix?.order + 2;
@@ -27,6 +27,7 @@ export function rowsOf(matrix: CouplingMatrix): Rows {
       'add or remove rows',
     );
   }
+  checkFiniteZeros(matrix.finiteZeros, matrix.order);
   const rows = matrix.values.map((row, i) => rowOf(row, i, size));
   rows.forEach((row, i) => {
     for (let j = 0; j < i; j++) checkSymmetry(rows, row, i, j);
@@ -34,18 +35,51 @@ export function rowsOf(matrix: CouplingMatrix): Rows {
   return rows;
 }
 
-function rowOf(row: readonly number[], i: number, size: number): Float64Array {
-  if (!Array.isArray(row) || row.length !== size) {
+function checkFiniteZeros(finiteZeros: unknown, order: number): void {
+  if (finiteZeros === undefined) return;
+  if (Number.isInteger(finiteZeros) && (finiteZeros as number) >= 0 && (finiteZeros as number) <= order) return;
+  throw refusal(
+    'E_TYPE',
+    'matrix.finiteZeros',
+    finiteZeros,
+    `a whole number, 0 to ${order}`,
+    'leave it out where it is not known',
+  );
+}
+
+function rowOf(row: ArrayLike<number>, i: number, size: number): Float64Array {
+  if (typeof row !== 'object' || row === null || row.length !== size) {
     throw shapeFailure(`matrix.values[${i}]`, row?.length, `${size} entries in every row`, 'make the matrix square');
   }
-  return Float64Array.from({ length: size }, (_, j) => {
+  const values = new Float64Array(size);
+  for (let j = 0; j < size; j++) {
     const value: unknown = row[j];
-    const where = `matrix.values[${i}][${j}]`;
-    if (typeof value !== 'number')
-      throw refusal('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
-    if (!Number.isFinite(value)) throw refusal('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
-    return value === 0 ? 0 : value;
-  });
+    // Adding 0 makes -0 a plain 0; the place of an entry is spelled out only for a faulty one.
+    values[j] =
+      typeof value === 'number' && isUsable(value) ? value + 0 : refuseEntry(value, `matrix.values[${i}][${j}]`);
+  }
+  return values;
+}
+
+/** Entries of a normalized matrix lie near 1; beyond these sizes squares leave the range of doubles. */
+const LARGEST_ENTRY = 1e8;
+const SMALLEST_ENTRY = 1e-100;
+
+function isUsable(value: number): boolean {
+  const size = Math.abs(value);
+  return size === 0 || (size <= LARGEST_ENTRY && size >= SMALLEST_ENTRY);
+}
+
+function refuseEntry(value: unknown, where: string): never {
+  if (typeof value !== 'number') throw refusal('E_TYPE', where, value, 'numbers only', 'replace the entry by a number');
+  if (!Number.isFinite(value)) throw refusal('E_NOT_FINITE', where, value, 'finite numbers', 'replace the entry');
+  throw refusal(
+    'E_ENTRY_RANGE',
+    where,
+    value,
+    `0 or sizes of ${SMALLEST_ENTRY} to ${LARGEST_ENTRY}`,
+    'check the scale: couplings are normalized',
+  );
 }
 
 function checkSymmetry(rows: Rows, row: Float64Array, i: number, j: number): void {

@@ -1,4 +1,5 @@
 import type { CouplingMatrix, Rotation } from '../forms/index.js';
+import { refusal } from '../numerics/index.js';
 import { annihilationAngle, clear } from './annihilate.js';
 import { eliminateDoubled } from './doubled-elimination.js';
 import type { EliminationStep } from './elimination-step.js';
@@ -87,8 +88,22 @@ function clearStructure(rows: Rows, plan: ReductionPlan, finiteZeros: number | u
     largest = Math.max(largest, value);
     (rows[i] as Float64Array)[j] = (rows[j] as Float64Array)[i] = 0;
   }
-  return largest / normOf(rows);
+  const norm = normOf(rows);
+  const leftover = norm === 0 ? 0 : largest / norm;
+  if (finiteZeros !== undefined && leftover > LARGEST_LEFTOVER) {
+    throw refusal(
+      'E_FINITE_ZEROS',
+      'matrix.finiteZeros',
+      finiteZeros,
+      'the number of finite transmission zeros that the matrix really has',
+      'correct it, or leave it out',
+    );
+  }
+  return leftover;
 }
+
+/** A structural zero that is not rounding shows that the stated number of finite zeros is wrong: the limit of its certificate. */
+const LARGEST_LEFTOVER = 1e-10;
 
 /**
  * A response symmetric about the center needs no coupling between nodes of equal parity, diagonal included. When all such

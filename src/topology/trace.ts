@@ -46,8 +46,10 @@ export function traceRotations(
   pattern?: readonly (readonly [number, number])[],
 ): RotationTrace {
   checkSteps(steps);
+  checkPattern(pattern);
   const reference = invariantsOf(start);
-  const norm = normOf(rowsOf(start));
+  // A matrix of zeros has nothing to drift by; its changes count as they are.
+  const norm = normOf(rowsOf(start)) || 1;
   let matrix = start;
   const log = steps.map((request) => {
     const before = matrix;
@@ -81,6 +83,12 @@ function checkSteps(steps: readonly RotationRequest[]): void {
       );
     }
   });
+}
+
+function checkPattern(pattern: unknown): void {
+  if (pattern === undefined) return;
+  const pairs = Array.isArray(pattern) && pattern.every((pair) => Array.isArray(pair) && pair.length === 2);
+  if (!pairs) throw refusal('E_TYPE', 'pattern', pattern, 'a list of node pairs', 'give [[0, 1], [1, 2], ...]');
 }
 
 function perform(matrix: CouplingMatrix, request: RotationRequest): { matrix: CouplingMatrix; rotation: Rotation } {

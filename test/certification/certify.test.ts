@@ -110,8 +110,17 @@ describe('certify(polynomials, matrix) leaves out what does not apply', () => {
     ]);
   });
 
-  test('Butterworth has no ripple; a zero, a rotation, a structure and a leftover add their checks', () => {
-    expect(names(butterworthLine(3)).filter((name) => name.startsWith('C4'))).toEqual([]);
+  test('Butterworth has edges instead of a ripple; a zero, a rotation, a structure and a leftover add their checks', () => {
+    expect(names(butterworthLine(3)).filter((name) => name.startsWith('C4'))).toEqual([
+      'C4 reflection zeros at the center',
+      'C4 half power at the edges',
+    ]);
+    const lawless = butterworthLine(3);
+    expect(
+      names({ ...lawless, polynomials: { ...lawless.polynomials, family: 'lossless' } }).filter((name) =>
+        name.startsWith('C4'),
+      ),
+    ).toEqual([]);
     const network = equiripple(4, 22, onAxis(1.5));
     const context = { before: network.matrix, structure: 'transversal', leftover: 1e-17 };
     expect(names(network, context)).toEqual(
@@ -129,7 +138,7 @@ describe('certify(polynomials, matrix) leaves out what does not apply', () => {
   test('a response whose S11 vanishes at infinity has no power sums of reflection zeros', () => {
     // Band-stop of order 1: S21 = s/(s + 1), S11 = 1/(s + 1): the dual of the low-pass, with the source and load coupled by 1.
     const polynomials: FilterPolynomials = {
-      family: 'butterworth',
+      family: 'lossless',
       order: 1,
       poles: [{ re: -1, im: 0 }],
       reflectionZeros: [],

@@ -177,7 +177,7 @@ describe('each certificate goes red for a fault planted for it', () => {
       ],
     });
     const single: FilterPolynomials = {
-      family: 'butterworth',
+      family: 'lossless',
       order: 1,
       poles: [{ re: -(a * a + b * b), im: -0.25 }],
       reflectionZeros: [{ re: a * a - b * b, im: -0.25 }],
@@ -231,6 +231,21 @@ describe('each certificate goes red for a fault planted for it', () => {
     expect(redIds(network, { leftover: 1e-10 })).toEqual([]);
   });
 
+  test('C4: a Butterworth response whose half-power edge is not at 1, and an equiripple one called so', () => {
+    const right = butterworthLine(4);
+    const wide = {
+      ...right.polynomials,
+      poles: right.polynomials.poles.map(({ re, im }) => ({ re: 1.3 * re, im: 1.3 * im })),
+      epsilon: 1.3 ** -4,
+    };
+    const red = certify(wide, right.matrix).filter(({ holds }) => !holds);
+    expect(red.map(({ check }) => check)).toContain('C4 half power at the edges');
+    const ripple = chebyshevLine(4, 20);
+    expect(redIds({ ...ripple, polynomials: { ...ripple.polynomials, family: 'butterworth' } })).toEqual(['C4']);
+    const { returnLossDb: _, ...silent } = ripple.polynomials;
+    expect(redIds({ ...ripple, polynomials: silent })).toEqual(['C4']);
+  });
+
   test('C9: a resonance so narrow that fewer than six digits are left', () => {
     const narrow = 1e-6;
     const line = (order: number): CouplingMatrix => {
@@ -251,6 +266,7 @@ describe('each certificate goes red for a fault planted for it', () => {
     const wide = butterworthLine(2);
     const atHome: FilterPolynomials = {
       ...wide.polynomials,
+      family: 'lossless',
       poles: roots(wide.polynomials.poles),
       epsilon: narrow ** -2,
     };

@@ -43,5 +43,23 @@ test('edgesOfBand and bandFromEdges belong together', () => {
     expect(Math.abs(again.centerHz / band.centerHz - 1)).toBeLessThan(8 * EPS);
     expect(Math.abs(again.bandwidthHz - band.bandwidthHz)).toBeLessThan(8 * EPS * band.centerHz);
   }
-  expect(bandFromEdges(1e200, 4e200).centerHz / 2e200).toBeCloseTo(1, 14);
+  expect(bandFromEdges(1e90, 4e90).centerHz / 2e90).toBeCloseTo(1, 14);
+});
+
+test('the maps refuse what is no frequency and no band', () => {
+  const band = { centerHz: 1e9, bandwidthHz: 1e7 };
+  for (const run of [
+    () => omegaFromHz(band, 0),
+    () => omegaFromHz(band, -1e9),
+    () => omegaFromHz(band, '1e9' as never),
+    () => omegaFromHz(band, 1e-300),
+    () => omegaFromHz({ centerHz: 1e9 } as never, 1e9),
+    () => hzFromOmega(band, Number.NaN),
+    () => hzFromOmega(band, '3' as never),
+    () => bandFromEdges(-1, 2),
+    () => bandFromEdges(2, 1),
+    () => edgesOfBand(null as never),
+  ]) {
+    expect(run).toThrowError(/^E_(FREQUENCY|NOT_FINITE|BAND) /);
+  }
 });
