@@ -8,6 +8,8 @@ import { frequencyFromText } from '../quantity.js';
 /** Largest magnitude of a finite zero; farther out it cannot be told from one at infinity. */
 const MAX_MAGNITUDE = 1e4;
 const EPSILON = Number.EPSILON;
+/** Frequencies within this and its inverse go through the band-pass map. */
+const MAPPED_HZ = 1e90;
 /** A few units in the last place of `magnitude`: what arithmetic on the caller's side may have left. */
 export const ULPS = 4;
 
@@ -65,7 +67,10 @@ function fromText(text: string, path: Path, band: Band | undefined): ZeroRead | 
   }
   const { lowerHz, upperHz } = edgesOfBand(band);
   const onEdge = isRounding(hertz - lowerHz, hertz) || isRounding(hertz - upperHz, hertz);
-  return { zero: { re: 0, im: omegaFromHz(band, hertz) }, remarks: [], onEdge };
+  // Far beyond what the map takes, only the side counts: such a zero is refused by its size.
+  const side = hertz < band.centerHz ? -Number.MAX_VALUE : Number.MAX_VALUE;
+  const mapped = hertz > MAPPED_HZ || hertz < 1 / MAPPED_HZ ? side : omegaFromHz(band, hertz);
+  return { zero: { re: 0, im: mapped }, remarks: [], onEdge };
 }
 
 function partOf(value: object, key: 're' | 'im', path: Path): number | Fault {
