@@ -55,7 +55,7 @@ function bothHalves(
 }
 
 function isSymmetric(phase: BandPhase, mirrorPhase: BandPhase): boolean {
-  return phase.q.every((q, n) => q.re === mirrorPhase.q[n]?.re && q.im === mirrorPhase.q[n]?.im);
+  return phase.finite.every(({ q }, n) => q.re === mirrorPhase.finite[n]?.q.re && q.im === mirrorPhase.finite[n]?.q.im);
 }
 
 /**

@@ -89,6 +89,8 @@ describe('adversarial zeros', () => {
 
   it.each([
     { order: 2, returnLossDb: 60, transmissionZeros: [1.3, 1.3] },
+    { order: 2, returnLossDb: 65.71459417461078, transmissionZeros: [1.1283332069400271, 1433.3301192848012] },
+    { order: 3, returnLossDb: 80, transmissionZeros: [1e4, -9e3] },
     { order: 2, returnLossDb: 100, transmissionZeros: [2, 2] },
     { order: 4, returnLossDb: 54, transmissionZeros: [-1.2, 1.02, 1.002, 1.02] },
     {

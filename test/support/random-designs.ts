@@ -1,16 +1,6 @@
 import { Complex as ComplexNumber } from 'complex.js';
 import { type Complex, design, FilterFailure, scatteringAt } from '../../src/index.js';
-
-/** Seeded stream of numbers in [0, 1) (mulberry32, T. Ettinger, public domain algorithm; from memory). */
-export function stream(seed: number): () => number {
-  let state = seed >>> 0;
-  return () => {
-    state = (state + 0x6d2b79f5) >>> 0;
-    let t = Math.imul(state ^ (state >>> 15), 1 | state);
-    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t;
-    return ((t ^ (t >>> 14)) >>> 0) / 2 ** 32;
-  };
-}
+import { seeded } from './random.js';
 
 export interface RandomSpec {
   readonly order: number;
@@ -21,7 +11,8 @@ export interface RandomSpec {
 
 /**
  * Orders 2 to 16, up to N zeros at |omega| = 1 + log-uniform 1e-3..10 on both sides, a fifth of them complex pairs, return
- * loss 10 to 35 dB; one spec in ten is adversarial: clustered, repeated, far, near the edge, or of order 17 to 40.
+ * loss 10 to 35 dB; one spec in ten is adversarial: clustered, repeated, far, near the edge, of order 17 to 40, or of a return
+ * loss from 0.1 to 100 dB.
  */
 export function randomSpec(random: () => number): RandomSpec {
   const adversarial = random() < 0.1;
@@ -43,7 +34,8 @@ export function randomSpec(random: () => number): RandomSpec {
       );
     }
   }
-  return { order, returnLossDb: 10 + 25 * random(), transmissionZeros, topology: random() < 0.5 ? 'folded' : 'arrow' };
+  const returnLossDb = adversarial && random() < 0.5 ? 10 ** (-1 + 3 * random()) : 10 + 25 * random();
+  return { order, returnLossDb, transmissionZeros, topology: random() < 0.5 ? 'folded' : 'arrow' };
 }
 
 /**
@@ -82,7 +74,7 @@ export interface Tally {
 
 /** Designs random specifications and compares each accepted matrix with the closed form at 40 frequencies. */
 export function tally(seed: number, designs: number): Tally {
-  const random = stream(seed);
+  const random = seeded(seed);
   const refused: string[] = [];
   const wrong: string[] = [];
   for (let n = 0; n < designs; n++) {
