@@ -37,8 +37,8 @@ export interface Design {
  *   order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.45], unloadedQ: 9000,
  *   mask: [{ fromHz: '3868 MHz', rejectionDb: 34 }],
  * });
- * handOver.externalQ.source.toFixed(2); // '99.46'
- * mask[0].margin.toFixed(2); // '2.31'
+ * handOver.externalQ.source?.toFixed(2); // '99.46'
+ * mask[0]?.margin.toFixed(2); // '2.31'
  */
 export function design(specification: SpecificationInput): Design {
   return designChecked(checkSpecification(specification));
@@ -76,6 +76,7 @@ function synthesize(specification: Specification): {
   const reduced = shape(start, specification.topology);
   const certificates = certify(polynomials, reduced.matrix, {
     before: start,
+    rotations: reduced.rotations,
     leftover: reduced.leftover,
     structure: specification.topology,
     askedZeros: specification.transmissionZeros,

@@ -48,7 +48,25 @@ function hintFor(
     passes({ ...specification, transmissionZeros: movedOut(specification.transmissionZeros, tried) }, certificatesOf),
   );
   if (distance === undefined) return 'lower the order, the return loss or the number of zeros near the band edge';
-  return `move the transmission zeros out to |omega| >= ${1 + distance}, which passes: closer ones leave the matrix too few digits`;
+  const nearest = nearestPassing(specification, certificatesOf, distance / 10, distance);
+  return `move the transmission zeros out to |omega| >= ${Number((1 + nearest).toPrecision(12))}, which passes: closer ones leave the matrix too few digits`;
+}
+
+/** Halves the decade between a distance that fails and one that passes, in the logarithm, to a fifth of it. */
+function nearestPassing(
+  specification: Specification,
+  certificatesOf: (changed: Specification) => readonly Certificate[],
+  fails: number,
+  passing: number,
+): number {
+  let [low, high] = [fails, passing];
+  for (let turn = 0; turn < 3; turn++) {
+    const middle = Number(Math.sqrt(low * high).toPrecision(2));
+    const zeros = movedOut(specification.transmissionZeros, middle);
+    if (passes({ ...specification, transmissionZeros: zeros }, certificatesOf)) high = middle;
+    else low = middle;
+  }
+  return high;
 }
 
 function passes(changed: Specification, certificatesOf: (changed: Specification) => readonly Certificate[]): boolean {

@@ -1,5 +1,5 @@
 import type { FilterPolynomials } from '../forms/index.js';
-import { type Complex, complex, FilterFailure, magnitude } from '../numerics/index.js';
+import { type Complex, complex, FilterFailure, magnitude, refusal } from '../numerics/index.js';
 import { checkOrder, checkReturnLoss, checkTransmissionZeros } from '../specification/index.js';
 import { type BandRoots, bandRoots } from './band-roots.js';
 import { checkLossless } from './lossless.js';
@@ -66,6 +66,16 @@ export function generalizedChebyshev(request: GeneralizedChebyshevRequest): Filt
  */
 export function chebyshev(request: { readonly order: number; readonly returnLossDb: number }): FilterPolynomials {
   checkRequest(request);
+  const zeros: unknown = Reflect.get(request, 'transmissionZeros');
+  if (zeros !== undefined && (!Array.isArray(zeros) || zeros.length > 0)) {
+    throw refusal(
+      'E_ZERO_COUNT',
+      'transmissionZeros',
+      zeros,
+      'none: this family is all-pole',
+      'call generalizedChebyshev',
+    );
+  }
   return generalizedChebyshev({ order: request.order, returnLossDb: request.returnLossDb });
 }
 

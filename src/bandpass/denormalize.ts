@@ -56,7 +56,7 @@ export interface HandOver {
  * @example
  * const { matrix } = folded(transversal(chebyshev({ order: 3, returnLossDb: 20 })));
  * const { externalQ } = denormalize(matrix, { centerHz: 1e9, bandwidthHz: 10e6 });
- * externalQ.source.toFixed(2); // '85.34'
+ * externalQ.source?.toFixed(2); // '85.34'
  */
 export function denormalize(matrix: CouplingMatrix, band: Band): HandOver {
   bandOf(band);

@@ -68,7 +68,8 @@ function levelRow(prepared: Prepared, line: MaskLine, quantity: Quantity, level:
   const span = spanOf(prepared, line);
   const limitAt = limitOf(line, level);
   const reference = line.relativeTo === 'center' ? prepared.centerLossDb : 0;
-  const worst = lowest(prepared, span, quantity, (value, hz) => sign * (value - reference - limitAt(hz)));
+  const margin = (value: number, hz: number): number => sign * (value - reference - limitAt(hz));
+  const worst = endFirst(prepared, line, span, quantity, margin, lowest(prepared, span, quantity, margin));
   const limit = limitAt(worst.hz);
   return {
     line,
@@ -77,6 +78,24 @@ function levelRow(prepared: Prepared, line: MaskLine, quantity: Quantity, level:
     margin: worst.margin,
     worstHz: placeOf(line, span, worst.hz),
   };
+}
+
+/** Toward infinity a response flattens to rounding: an open end that is within rounding of the worst is the worst. */
+function endFirst(
+  { run }: Prepared,
+  line: MaskLine,
+  [low, high]: readonly [number, number],
+  quantity: Quantity,
+  margin: (value: number, hz: number) => number,
+  worst: WorstPoint,
+): WorstPoint {
+  const ends = [...(line.fromHz === undefined ? [low] : []), ...(line.toHz === undefined ? [high] : [])];
+  const margins = ends.map((hz) => ({
+    hz,
+    margin: margin(quantityOf(run(Float64Array.of(hz)), quantity)[0] as number, hz),
+  }));
+  const room = 1e-9 * (1 + Math.abs(worst.margin));
+  return margins.find((end) => end.margin <= worst.margin + room) ?? worst;
 }
 
 /** The end of an open span stands for its limit: 0 Hz below, no frequency at all above. */

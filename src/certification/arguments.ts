@@ -26,6 +26,7 @@ export function checkArguments(
   checkMatrix('matrix', matrix, polynomials.order);
   checkObject('context', context);
   if (context.before !== undefined) checkMatrix('context.before', context.before, polynomials.order);
+  if (context.rotations !== undefined) checkRotations(context.rotations);
   if (context.askedZeros !== undefined) checkRoots('context.askedZeros', context.askedZeros);
   if (context.leftover !== undefined && typeof context.leftover !== 'number') {
     refuse('E_TYPE', 'context.leftover', context.leftover, 'a number');
@@ -33,6 +34,19 @@ export function checkArguments(
   if (context.structure !== undefined && !STRUCTURES.includes(context.structure)) {
     refuse('E_TYPE', 'context.structure', context.structure, STRUCTURES.join(', '));
   }
+}
+
+function checkRotations(rotations: unknown): void {
+  if (!Array.isArray(rotations)) refuse('E_TYPE', 'context.rotations', rotations, 'an array of rotations');
+  rotations.forEach((rotation, n) => {
+    const name = `context.rotations[${n}]`;
+    checkObject(name, rotation);
+    checkNumber(`${name}.angle`, rotation.angle);
+    if (!Array.isArray(rotation.pivot)) refuse('E_TYPE', `${name}.pivot`, rotation.pivot, 'a pair of resonators');
+    for (const node of rotation.pivot) checkNumber(`${name}.pivot`, node);
+    if (rotation.flip !== undefined && !Array.isArray(rotation.flip))
+      refuse('E_TYPE', `${name}.flip`, rotation.flip, 'a list');
+  });
 }
 
 export function checkMatrix(name: string, matrix: CouplingMatrix, order: number): void {

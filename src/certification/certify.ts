@@ -8,6 +8,7 @@ import { invariants } from './invariants.js';
 import { matrixResponse } from './matrix-response.js';
 import { maximallyFlat } from './maximally-flat.js';
 import { powerSums } from './moments.js';
+import { replay } from './replay.js';
 import { rootResponse } from './root-response.js';
 import { samplePoints } from './sample-points.js';
 import { stability } from './stability.js';
@@ -42,7 +43,7 @@ export function certify(
   const omega = samplePoints(polynomials);
   const fromMatrix = matrixResponse(matrix, omega);
   const fromRoots = rootResponse(polynomials, omega);
-  const { before, leftover, structure, askedZeros } = context;
+  const { before, rotations, leftover, structure, askedZeros } = context;
   return [
     ...matrixEnergy(fromMatrix),
     ...polynomialEnergy(fromRoots),
@@ -53,6 +54,7 @@ export function certify(
     ...agreement(matrix, fromMatrix, fromRoots),
     ...powerSums(polynomials, matrix),
     ...(before === undefined ? [] : invariants(before, matrix)),
+    ...(before === undefined || rotations === undefined ? [] : replay(before, matrix, rotations)),
     ...(structure === undefined ? [] : [structuralZeros(matrix, structure, polynomials.transmissionZeros.length)]),
     ...(leftover === undefined ? [] : [leftoverBelow(leftover)]),
     digitsLeft(matrix, fromMatrix),

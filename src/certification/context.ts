@@ -1,4 +1,4 @@
-import type { Complex, CouplingMatrix } from '../forms/index.js';
+import type { Complex, CouplingMatrix, Rotation } from '../forms/index.js';
 
 /** The forms of a coupling matrix whose zeros can be certified. */
 export type Structure = 'folded' | 'arrow' | 'inline' | 'transversal';
@@ -7,6 +7,8 @@ export type Structure = 'folded' | 'arrow' | 'inline' | 'transversal';
 export interface CertificationContext {
   /** The matrix that was rotated into this one: eigenvalues, Markov numbers and port entries must be kept. */
   readonly before?: CouplingMatrix;
+  /** The rotations that lead from `before` to this matrix; looked at only together with it. */
+  readonly rotations?: readonly Rotation[];
   /** Largest entry that was set to 0 at the end of a rotation, relative to the norm. */
   readonly leftover?: number;
   /** The structure that the matrix claims: entries outside it must be exactly 0. */

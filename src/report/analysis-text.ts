@@ -52,7 +52,7 @@ function factLines(analysis: Analysis, unit: FrequencyUnit | undefined): readonl
     ['loss at the center', centerLossDb >= 300 ? 'over 300 dB' : `${fixed(centerLossDb, 3)} dB`, ''],
     ...dips.slice(0, DIPS_LISTED).map(({ omega, attenuationDb }) => {
       const depth = attenuationDb >= 100 ? 'over 100 dB' : decibels(attenuationDb);
-      return ['dip of |S21|', depth, place(omega)];
+      return ['lossless dip of |S21|', depth, place(omega)];
     }),
   ];
   const hidden = dips.length - DIPS_LISTED;

@@ -48,9 +48,14 @@ function limitText(limit: number): string {
   return Number(fixed(limit, 2)) === Number(exact) ? fixed(limit, 2) : exact;
 }
 
+/** Attenuations are stated to 400 dB only; beyond, the figure is a floor and not a prediction. */
+function predictedText(predicted: number, unit: string): string {
+  return unit === 'dB' && predicted >= 400 ? 'over 400' : fixed(predicted, 2);
+}
+
 function rowCells({ name, unit, span, limit, predicted, margin, isMet, at }: Requirement): readonly string[] {
   const room = isMet ? 'clear by' : 'short by';
-  return [`${name}, ${unit}`, span, limitText(limit), fixed(predicted, 2), room, clearanceText(margin), at];
+  return [`${name}, ${unit}`, span, limitText(limit), predictedText(predicted, unit), room, clearanceText(margin), at];
 }
 
 /** Each requirement with its limit, what is predicted, the room left or lacking, and the worst point. */

@@ -46,7 +46,7 @@ export function isUnder(start: Path, path: Path): boolean {
   return start.length <= path.length && start.every((step, index) => step === path[index]);
 }
 
-/** The failure that a fault becomes: `CODE path (line:col): found ...; allowed ...; do ...`. */
+/** The failure that a fault becomes: `CODE path (line:col): found ...; allowed ...; advice`. */
 export function failureOf(fault: Fault, locate: Locate = NOWHERE): FilterFailure {
   const path = pathText(fault.path);
   const place = locate(fault.path, fault.onKey === true);
@@ -55,7 +55,7 @@ export function failureOf(fault: Fault, locate: Locate = NOWHERE): FilterFailure
   return new FilterFailure(fault.code, text, {
     ...(path === '' ? {} : { argument: path }),
     value: fault.value,
-    limit: fault.limit,
+    limit: fault.limit ?? fault.allowed,
     hint: fault.advice,
   });
 }

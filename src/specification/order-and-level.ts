@@ -31,7 +31,8 @@ export function orderFault(value: unknown, path: Path = ['order']): Fault | unde
 }
 
 function levelAdvice(value: number): string {
-  if (value <= 0) return `drop the sign: did you mean ${value === 0 ? 20 : -value}?`;
+  if (value === 0) return 'did you mean 20?';
+  if (value < 0) return `drop the sign: did you mean ${-value}?`;
   if (value > MAX_RETURN_LOSS_DB) return 'lower it';
   return 'raise it: below this level the filter reflects nearly everything';
 }

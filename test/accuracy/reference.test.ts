@@ -70,11 +70,13 @@ interface Form {
   readonly name: string;
   readonly make: (polynomials: FilterPolynomials) => FilterPolynomials | CouplingMatrix;
   readonly limit: (order: number) => number;
+  /** Specs whose exact matrix, rounded to doubles, misses the limit at one ordinary frequency: `rounded_matrix.py` shows it. */
+  readonly beyondDoubles?: readonly number[];
 }
 
 const FORMS: readonly Form[] = [
   { name: 'polynomials', make: (polynomials) => polynomials, limit: () => 1e-13 },
-  { name: 'transversal', make: transversal, limit: () => 3e-13 },
+  { name: 'transversal', make: transversal, limit: () => 3e-13, beyondDoubles: [114] },
   {
     name: 'folded',
     make: (polynomials) => folded(transversal(polynomials)).matrix,
@@ -93,13 +95,14 @@ describe('complex S against 300 many-digit references', () => {
     expect(new Set(reference.specs.map(({ order }) => order)).size).toBe(64);
   });
 
-  it.each(FORMS)('$name', ({ name, make, limit }) => {
+  it.each(FORMS)('$name', ({ name, make, limit, beyondDoubles = [] }) => {
     const worst = { ordinary: 0, hard: 0, ratio: 0, narrow: 0 };
     const beyond: string[] = [];
     for (const spec of reference.specs) {
       errorsOf(make(generalizedChebyshev(spec)), spec).forEach((error, n) => {
         const kind = n < ORDINARY ? 'ordinary' : 'hard';
-        const room = Math.max(limit(spec.order), 2 * roundingAt(spec, spec.omega[n] as number));
+        const isWide = kind === 'hard' || beyondDoubles.includes(spec.id);
+        const room = Math.max(limit(spec.order), isWide ? 2 * roundingAt(spec, spec.omega[n] as number) : 0);
         worst[kind] = Math.max(worst[kind], error);
         worst.ratio = Math.max(worst.ratio, error / room);
         if (kind === 'ordinary' && error > limit(spec.order)) worst.narrow++;

@@ -133,6 +133,18 @@ describe('evaluateMask(model, band, mask)', () => {
     expect(below?.worstHz).toBe(0);
   });
 
+  it('places the worst of a flat open end at the end, whatever the band', () => {
+    const canonical = generalizedChebyshev({ order: 2, returnLossDb: 20, transmissionZeros: [2, -2] });
+    for (let n = 0; n < 120; n++) {
+      const wide = { centerHz: 1e9 + 7.3e6 * n, bandwidthHz: 36e6, ...(n % 3 === 0 ? {} : { unloadedQ: 1000 * n }) };
+      const [above, below] = evaluateMask(canonical, wide, [
+        { fromHz: 1.2 * wide.centerHz, rejectionDb: 50 },
+        { toHz: 0.8 * wide.centerHz, rejectionDb: 50 },
+      ]);
+      expect([above?.worstHz, below?.worstHz]).toEqual([null, 0]);
+    }
+  });
+
   it('states 400 dB on a zero that is hit exactly, and refuses what is no mask', () => {
     const [row] = evaluateMask(
       generalizedChebyshev({ order: 2, returnLossDb: 20, transmissionZeros: [2] }),

@@ -96,12 +96,38 @@ function faultsOf(file: string, text: string): string[] {
   return faults;
 }
 
+/** What code that certifies may import from other rooms, beside types: nothing that could share a fault with the synthesis. */
+const CERTIFICATION_VALUES = ['FilterFailure'];
+
+/** Values (not types) that a file of the certification room takes from other rooms. */
+function sharedValues(file: string, text: string): string[] {
+  const found: string[] = [];
+  const source = ts.createSourceFile(file, text, ts.ScriptTarget.ES2022);
+  source.forEachChild((node) => {
+    if (!ts.isImportDeclaration(node) || !ts.isStringLiteral(node.moduleSpecifier)) return;
+    if (node.importClause?.isTypeOnly || !node.moduleSpecifier.text.startsWith('../')) return;
+    const names = node.importClause?.namedBindings;
+    if (names === undefined || !ts.isNamedImports(names)) found.push(`${file}: ${node.moduleSpecifier.text}`);
+    else found.push(...names.elements.filter((each) => !each.isTypeOnly).map((each) => each.name.text));
+  });
+  return found.filter((name) => !CERTIFICATION_VALUES.includes(name));
+}
+
 describe('rooms', () => {
   const files = filesUnder(SRC);
 
   it('flow one way, by their indexes, with their own packages, and no edge in the core', () => {
     expect(files.length).toBeGreaterThan(80);
     expect(files.flatMap((file) => faultsOf(file, readFileSync(file, 'utf8')))).toEqual([]);
+  });
+
+  it('let certification share no code with what it certifies', () => {
+    const room = files.filter((file) => roomOf(file) === 'certification');
+    expect(room.length).toBeGreaterThan(15);
+    expect(room.flatMap((file) => sharedValues(file, readFileSync(file, 'utf8')))).toEqual([]);
+    expect(sharedValues('x.ts', "import { type Complex, multiply } from '../numerics/index.js';")).toEqual([
+      'multiply',
+    ]);
   });
 
   it('are all on the list', () => {

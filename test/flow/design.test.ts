@@ -1,5 +1,15 @@
 import { describe, expect, it } from 'vitest';
-import { certify, design, FilterFailure, generalizedChebyshev, scatteringAt, transversal } from '../../src/index.js';
+import {
+  arrow,
+  certify,
+  design,
+  FilterFailure,
+  folded,
+  generalizedChebyshev,
+  type Rotation,
+  scatteringAt,
+  transversal,
+} from '../../src/index.js';
 
 const passband = { lowerHz: '2516 MHz', upperHz: 2558e6 };
 
@@ -40,10 +50,10 @@ describe('design(specification)', () => {
     const failure = refusalOf(() => design({ ...request, transmissionZeros: [1 + 1e-12] }));
     expect(failure.code).toBe('E_CERT');
     expect(failure.message).toMatch(
-      /C\d .*: found .*; allowed .*; move the transmission zeros out to \|omega\| >= 1\.0+1/,
+      /C\d .*: found .*; allowed .*; move the transmission zeros out to \|omega\| >= 1\.0+[1-9]/,
     );
     expect(failure.value).toBeGreaterThan(failure.limit as number);
-    const passing = Number(/>= (1\.0+1)/.exec(failure.hint ?? '')?.[1]);
+    const passing = Number(/>= (1\.0\d+)/.exec(failure.hint ?? '')?.[1]);
     expect(design({ ...request, transmissionZeros: [passing] }).certificates.every(({ holds }) => holds)).toBe(true);
   });
 
@@ -118,5 +128,36 @@ describe('adversarial zeros', () => {
     { order: 4, returnLossDb: 20, transmissionZeros: [...pair(1e-9, 0), ...pair(1e-9, 0)] },
   ])('order $order within rounding of the axis are refused', (request) => {
     expect(refusalOf(() => generalizedChebyshev(request)).code).toMatch(/E_ILL_CONDITIONED|E_NO_CONVERGENCE/);
+  });
+});
+
+describe('certify with rotations', () => {
+  const response = generalizedChebyshev({ order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.3] });
+  const before = transversal(response);
+  const { matrix, rotations } = folded(before);
+  const red = (changed: readonly Rotation[]): string[] =>
+    certify(response, matrix, { before, rotations: changed })
+      .filter(({ holds }) => !holds)
+      .map(({ check }) => check);
+
+  it('holds for the rotations that were made, to order 100', () => {
+    expect(red(rotations)).toEqual([]);
+    const long = generalizedChebyshev({ order: 100, returnLossDb: 25, transmissionZeros: [1.05, -1.1] });
+    const start = transversal(long);
+    const reduced = arrow(start);
+    expect(
+      certify(long, reduced.matrix, { before: start, rotations: reduced.rotations }).every(({ holds }) => holds),
+    ).toBe(true);
+  });
+
+  it.each<readonly [string, readonly Rotation[]]>([
+    [
+      'a stale one',
+      rotations.map((rotation, n) => (n === 3 ? { ...rotation, angle: rotation.angle + 1e-6 } : rotation)),
+    ],
+    ['a missing one', rotations.slice(1)],
+    ['two exchanged', [rotations[1], rotations[0], ...rotations.slice(2)] as Rotation[]],
+  ])('is red for %s', (_, changed) => {
+    expect(red(changed)).toEqual(['C7 rotations replayed against the matrix']);
   });
 });

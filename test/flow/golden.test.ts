@@ -8,8 +8,8 @@ import { folded } from '../../src/topology/index.js';
 import { entry } from '../support/models.js';
 
 /**
- * Three filters invented for these tests, from passband to mask. Golden numbers were computed by another program from the
- * same mathematics and are stated to the digits below; limits are half a unit of the last digit, a whole one where the text
+ * Three filters invented for these tests, from passband to mask. Golden numbers were computed by a separate 60-digit script
+ * from the same mathematics and are stated to the digits below; limits are half a unit of the last digit, a whole one where the text
  * gives a rounded worst value.
  */
 interface Golden {

@@ -41,6 +41,7 @@ it.each<readonly [string, () => unknown]>([
   ['generalizedChebyshev()', () => generalizedChebyshev(undefined as never)],
   ['chebyshev()', () => chebyshev(undefined as never)],
   ['butterworth(null)', () => butterworth(none)],
+  ['chebyshev with zeros', () => chebyshev({ order: 3, returnLossDb: 20, transmissionZeros: [2] } as never)],
   ['zeros null', () => generalizedChebyshev({ order: 3, returnLossDb: 20, transmissionZeros: none })],
   ['folded(null)', () => folded(none)],
   ['folded of an endless order', () => folded({ order: Number.POSITIVE_INFINITY, values: [] })],

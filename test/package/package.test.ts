@@ -83,6 +83,28 @@ describe('the packed package', () => {
     expect(compiled.status).toBe(0);
   });
 
+  it('compiles the example of the README strictly', () => {
+    const block = /```ts\n([\s\S]*?)```/.exec(readFileSync(join(ROOT, 'README.md'), 'utf8'))?.[1] ?? '';
+    expect(block).toContain("from 'irisloom'");
+    writeFileSync(join(folder, 'readme.ts'), block);
+    const options = [
+      '--noEmit',
+      '--strict',
+      '--noUncheckedIndexedAccess',
+      '--skipLibCheck',
+      '--module',
+      'nodenext',
+      '--target',
+      'es2022',
+    ];
+    const compiler = join(ROOT, 'node_modules/typescript/bin/tsc');
+    const compiled = spawnSync(process.execPath, [compiler, ...options, 'readme.ts'], {
+      cwd: folder,
+      encoding: 'utf8',
+    });
+    expect(compiled.stdout).toBe('');
+  });
+
   it('holds what it should and nothing else', () => {
     const top = readdirSync(join(folder, 'node_modules/irisloom')).sort();
     expect(top).toEqual(['LICENSE', 'README.md', 'dist', 'package.json']);
