@@ -38,7 +38,7 @@ export function verdictLines(rows: readonly MaskRow[], unit: FrequencyUnit, pain
   const some = missed === total ? all : `${missed} of ${counted(total)}`;
   const answer = missed === 0 ? `Meets ${all}` : `Short of ${some}`;
   const mark = missed === 0 ? paint.strong : paint.alarm;
-  const label = missed === 0 ? 'Least room' : 'Farthest off';
+  const label = missed === 0 ? 'Least room for its limit' : 'Farthest off for its limit';
   return wrapped(`${answer}. ${label}: ${place}${where}.`).map(mark);
 }
 

@@ -1,6 +1,6 @@
 import type { Band } from '../forms/index.js';
 import { bandFromEdges } from '../forms/index.js';
-import { echo } from './echo.js';
+import { echo, hertzText } from './echo.js';
 import type { Fault, Path } from './faults.js';
 import { frequencyFromText } from './quantity.js';
 import type { FrequencyInput, PassbandInput } from './specification.js';
@@ -12,6 +12,9 @@ export const MOST_HZ = 1e18;
 const LEAST_FRACTION = 1e-9;
 /** Above this fractional bandwidth the narrow-band model of couplings is questionable. */
 const WIDE_FRACTION = 0.2;
+
+/** A center below this is more likely a missing unit than a microwave filter. */
+const LOW_HZ = 1e6;
 
 const ALLOWED = '0 < lower edge < upper edge, in Hz';
 
@@ -107,5 +110,6 @@ export function readBand(passband: PassbandInput, faults: Fault[]): BandRead | u
   if (band === undefined) return undefined;
   const fraction = band.bandwidthHz / band.centerHz;
   const wide = `passband: fractional bandwidth ${fraction.toPrecision(3)}, and couplings are a narrow-band model`;
-  return { band, remarks: fraction > WIDE_FRACTION ? [wide] : [] };
+  const low = `passband: center ${hertzText(band.centerHz)}, low for a microwave filter; a bare number is hertz, text may carry a unit`;
+  return { band, remarks: [...(fraction > WIDE_FRACTION ? [wide] : []), ...(band.centerHz < LOW_HZ ? [low] : [])] };
 }

@@ -67,7 +67,7 @@ describe('summaryText(design)', () => {
     ];
     const text = summaryText(sampleDesign({ mask }), tagged);
     expect(text.replaceAll('</a>\n<a>', ' ')).toMatch(
-      /<a>Short of 1 of 2 requirements\. Farthest off: rejection at and above 1011 MHz, short by \d/,
+      /<a>Short of 1 of 2 requirements\. Farthest off for its limit: rejection at and above 1011 MHz, short by \d/,
     );
     expect(text.match(/<a>rejection, dB +>= 1011 .*short by +\d+\.\d\d +1011\.000<\/a>/)).not.toBeNull();
   });
