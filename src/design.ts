@@ -49,7 +49,6 @@ export function designChecked(specification: Specification): Design {
   const { polynomials, start, reduced, certificates } = synthesize(specification);
   const { matrix, rotations } = reduced;
   refuseUncertified(certificates, specification, (tried) => synthesize(tried).certificates);
-  const { band, unloadedQ } = specification;
   return {
     version: VERSION,
     specification,
@@ -58,10 +57,23 @@ export function designChecked(specification: Specification): Design {
     transversal: start,
     matrix,
     rotations,
-    handOver: denormalize(matrix, band),
-    mask: evaluateMask(matrix, unloadedQ === undefined ? band : { ...band, unloadedQ }, specification.mask),
+    handOver: denormalize(matrix, specification.band),
+    mask: maskRows(specification, polynomials, matrix),
     certificates,
   };
+}
+
+/**
+ * The verdict on the mask. With one Q for all resonators it comes from the transfer function, which the matrix is certified
+ * to equal and which keeps its digits below -250 dB, where the matrix has none; otherwise from the matrix.
+ */
+function maskRows(
+  { band, unloadedQ, mask }: Specification,
+  polynomials: FilterPolynomials,
+  matrix: CouplingMatrix,
+): readonly MaskRow[] {
+  if (unloadedQ === undefined) return evaluateMask(polynomials, band, mask);
+  return evaluateMask(typeof unloadedQ === 'number' ? polynomials : matrix, { ...band, unloadedQ }, mask);
 }
 
 /** Transfer function, matrices and certificates, whether these hold or not. */
