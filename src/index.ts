@@ -16,7 +16,7 @@ export type {
   SweepHz,
 } from './bandpass/index.js';
 export { denormalize, evaluateMask, sweepHz } from './bandpass/index.js';
-export type { CertificationContext } from './certification/index.js';
+export type { CertificationContext, Structure } from './certification/index.js';
 export { certify, certifyMatrix } from './certification/index.js';
 export type { Design } from './design.js';
 export { design } from './design.js';
@@ -27,6 +27,7 @@ export type {
   CouplingMatrix,
   Family,
   FilterPolynomials,
+  FineRoot,
   Level,
   MaskLine,
   MaskRow,
@@ -41,7 +42,20 @@ export type { FailureDetail, PolynomialRoot } from './numerics/index.js';
 export { FilterFailure, polynomialRoots } from './numerics/index.js';
 export type { ComplexSamples, Curves, Model, Sweep, SweepOptions } from './response/index.js';
 export { scatteringAt, sweep } from './response/index.js';
-export type { Specification, SpecificationInput } from './specification/index.js';
+export type {
+  FrequencyInput,
+  LevelInput,
+  MaskLineInput,
+  PassbandInput,
+  PortCouplings,
+  Specification,
+  SpecificationFamily,
+  SpecificationInput,
+  SweepInput,
+  SweepRange,
+  Topology,
+  ZeroInput,
+} from './specification/index.js';
 export { checkSpecification, parseSpecification, specificationJsonSchema } from './specification/index.js';
 export { transversal } from './synthesis/index.js';
 export type { Annihilation, Reduced, RotationRequest, RotationTrace, TraceStep } from './topology/index.js';
