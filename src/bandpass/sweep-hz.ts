@@ -22,7 +22,7 @@ export function sweeperHz(model: Model, band: LossyBand): (frequenciesHz: Float6
 }
 
 /** `d omega/d(2*pi*f)` = `(1 + (f0/f)^2)/(2*pi*B)`: turns normalized delay into seconds at f. */
-export function secondsPerUnit({ centerHz, bandwidthHz }: LossyBand, hz: number): number {
+function secondsPerUnit({ centerHz, bandwidthHz }: LossyBand, hz: number): number {
   return (1 + (centerHz / hz) ** 2) / (2 * Math.PI * bandwidthHz);
 }
 

@@ -21,7 +21,7 @@ import { transmissionZeros } from './transmission-zeros.js';
  * C1 lossless and reciprocal matrix; C2 lossless polynomials; C3 stable, and the poles are roots of the true E; C4 ripple
  * (equiripple families), or flatness; C5 transmission zeros; C6 matrix against polynomials; C7 power sums of the roots, and what a
  * rotation keeps; C8 structure; C9 digits left. Numbers are normalized (omega, s = j*omega); levels in dB say so.
- * Cost about 45 ms at order 40 and 0.3 s at order 100, with `before` 65 ms and 0.6 s.
+ * Cost about 12 ms at order 40 and 70 ms at order 100.
  *
  * @throws FilterFailure E_TYPE, E_NOT_FINITE, E_MATRIX_SHAPE, E_NOT_SYMMETRIC on malformed arguments; never for a wrong result.
  *

@@ -34,7 +34,7 @@ export class Interrupted extends Error {
 }
 
 /** Exit status of a refusal. */
-export function exitStatusOf({ code }: FilterFailure): number {
+function exitStatusOf({ code }: FilterFailure): number {
   if (UNPROVEN_CODES.includes(code)) return EXIT.certificate;
   return FILE_CODES.includes(code) ? EXIT.file : EXIT.badInput;
 }

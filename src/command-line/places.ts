@@ -23,7 +23,7 @@ function placed(failure: FilterFailure, positionOf: JsonText['positionOf'], befo
 }
 
 /** The single faults of whatever was thrown; undefined when it is no refusal. */
-export function faultsIn(error: unknown): readonly FilterFailure[] | undefined {
+function faultsIn(error: unknown): readonly FilterFailure[] | undefined {
   if (!(error instanceof FilterFailure)) return undefined;
   return error.faults.length > 0 ? error.faults : [error];
 }

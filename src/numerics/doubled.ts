@@ -50,7 +50,7 @@ export function doubledAdd(a: Doubled, b: Doubled): Doubled {
 }
 
 /** A pair times a double. */
-export function doubledTimes(a: Doubled, factor: number): Doubled {
+function doubledTimes(a: Doubled, factor: number): Doubled {
   return doubledDot(Float64Array.of(factor), Float64Array.of(a.hi), Float64Array.of(a.lo));
 }
 

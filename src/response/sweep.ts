@@ -28,8 +28,8 @@ export interface Sweep extends Curves {
  * `omega` any array of finite numbers; the result holds Float64Arrays of the same length. `groupDelay` is `-d phase(S21) /
  * d omega`, from the model's own derivative, never from differences; where S21 of a lossless model is 0 it is the limit.
  * With one common loss a point costs O(order); with a loss for each resonator it costs what the matrix's pattern costs (a
- * loss list needs a matrix; a transfer function has no resonators). In the deep stop band S21 of a matrix is a difference
- * of numbers near 1: below about -250 dB neither it nor its delay has digits left.
+ * loss list needs a matrix; a transfer function has no resonators). In the deep stop band a sweep forms S21 of a
+ * matrix as a difference of numbers near 1: three digits are left at -250 dB, none at -320 dB.
  *
  * @throws FilterFailure E_TYPE, E_NOT_FINITE, E_LOSS, E_MATRIX_SHAPE, E_NOT_SYMMETRIC, E_SINGULAR
  *

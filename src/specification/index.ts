@@ -7,8 +7,8 @@
 export { checkSpecification } from './check.js';
 export { checkBand, checkMask, checkUnloadedQ } from './doors.js';
 export { echo, escapeText } from './echo.js';
-export type { Fault, Locate, Path, Position } from './faults.js';
-export { failureOf, kindFault, pathText, refuseAny } from './faults.js';
+export type { Fault, Path, Position } from './faults.js';
+export { failureOf, kindFault, pathText } from './faults.js';
 export type { JsonValue } from './json/places.js';
 export type { JsonText } from './json/reader.js';
 export { readJson } from './json/reader.js';

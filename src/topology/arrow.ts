@@ -13,7 +13,7 @@ import { type Reduced, reduce } from './reduction.js';
  *
  * Method: the classical elimination (row r = source, 1, 2, ...: pivots [r+1, k], k = N..r+2) started from the folded form
  * instead of the transversal one. Started from a transversal matrix it is as unstable as a one-sided Lanczos recursion:
- * the rounding of that matrix alone puts 0.2 into load couplings that should be 0 (order 64, 40 dB). In the folded form
+ * the rounding of that matrix alone puts 0.5 into load couplings that should be 0 (order 64, 40 dB, four zeros; see the tests). In the folded form
  * each row couples only to nodes equally far from the source; rotations among those leave every structural zero exactly 0,
  * so the rounding that remains is that of a slightly different filter of the same kind.
  *

@@ -47,7 +47,7 @@ export function applyRotations(matrix: CouplingMatrix, rotations: readonly Rotat
 }
 
 /** Pivot nodes are resonators; [i, i] is allowed only for a step that turns nothing (angle 0) and flips. */
-export function checkRotation(rotation: Rotation, order: number, where: string): void {
+function checkRotation(rotation: Rotation, order: number, where: string): void {
   if (typeof rotation?.angle !== 'number')
     throw refusal('E_TYPE', `${where}.angle`, rotation?.angle, 'a number of radians', 'give { pivot: [i, j], angle }');
   if (!Number.isFinite(rotation.angle))

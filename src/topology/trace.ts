@@ -108,7 +108,7 @@ function invariantsOf(matrix: CouplingMatrix): readonly number[] {
 }
 
 /** Largest entry of the upper triangle that the pattern does not allow. */
-export function largestOutside(matrix: CouplingMatrix, pattern: readonly (readonly [number, number])[]): number {
+function largestOutside(matrix: CouplingMatrix, pattern: readonly (readonly [number, number])[]): number {
   const allowed = new Set(pattern.map(([i, j]) => `${Math.min(i, j)},${Math.max(i, j)}`));
   let largest = 0;
   matrix.values.forEach((row, i) => {

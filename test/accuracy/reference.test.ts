@@ -117,6 +117,18 @@ describe('complex S against 300 many-digit references', () => {
     expect(worst.narrow).toBeLessThanOrEqual(1);
   });
 
+  it('hold poles as close to the axis as the README says', () => {
+    const closest = Math.min(...reference.specs.flatMap(({ poles }) => poles.re.map(Math.abs)));
+    const effect = Math.max(
+      ...reference.specs.flatMap((spec) => spec.omega.map((omega) => 2 * roundingAt(spec, omega))),
+    );
+    console.log(
+      `closest pole ${closest.toExponential(1)} from the axis; an ulp in one diagonal entry moves S by up to ${effect.toExponential(1)}`,
+    );
+    expect(closest).toBeLessThan(5e-6);
+    expect(effect).toBeLessThan(2e-10);
+  });
+
   it('ripple constants agree to 1e-13 relative', () => {
     for (const spec of reference.specs) {
       const { epsilon, epsilonR } = generalizedChebyshev(spec);

@@ -40,7 +40,7 @@ function factsOf(file: MatrixFile, band: LossyBand): Pick<Analysis, 'worstReturn
 }
 
 /** Everything that can be told about a matrix file. */
-export function analysisOf(file: MatrixFile): Analysis {
+function analysisOf(file: MatrixFile): Analysis {
   const { matrix, specification, isStated, hasBand } = file;
   const { name, band, unloadedQ, mask } = specification;
   const lossy = unloadedQ === undefined ? band : { ...band, unloadedQ };
