@@ -3,18 +3,19 @@
  *  Gives    strings: summaries for a terminal of 80 columns, JSON, CSV, the text of the predicted two-port response
  *  Refuses  nothing of its own: what it is given has been checked
  *  Source   Y. Shafranovich, RFC 4180, 2005 (CSV); OWASP, CSV Injection (guarded cells); both from memory */
-export type { Analysis, Dip } from './analysis-text.js';
-export { analysisText } from './analysis-text.js';
-export { csvCell, csvText } from './csv.js';
+
 export type { DesignReport } from './design-report.js';
-export { handOverCsv } from './hand-over-csv.js';
-export { jsonText } from './json-text.js';
-export { matrixCsv } from './matrix-csv.js';
-export type { Paint } from './paint.js';
-export { PLAIN } from './paint.js';
-export { responseGrid, responseText } from './response-text.js';
-export type { DesignSource } from './result-json.js';
-export { resultJson } from './result-json.js';
-export type { TracedStep, TraceReport } from './rotation-text.js';
-export { rotationText } from './rotation-text.js';
-export { summaryText } from './summary-text.js';
+export { csvCell, csvText } from './files/csv.js';
+export { handOverCsv } from './files/hand-over-csv.js';
+export { jsonText } from './files/json-text.js';
+export { matrixCsv } from './files/matrix-csv.js';
+export { responseGrid, responseText } from './files/response-text.js';
+export type { DesignSource } from './files/result-json.js';
+export { resultJson } from './files/result-json.js';
+export type { Analysis, Dip } from './terminal/analysis-text.js';
+export { analysisText } from './terminal/analysis-text.js';
+export type { Paint } from './terminal/paint.js';
+export { PLAIN } from './terminal/paint.js';
+export type { TracedStep, TraceReport } from './terminal/rotation-text.js';
+export { rotationText } from './terminal/rotation-text.js';
+export { summaryText } from './terminal/summary-text.js';

@@ -1,5 +1,5 @@
-import type { MaskLine, MaskRow } from '../forms/index.js';
-import { type FrequencyUnit, fixed, frequencyText } from './numbers.js';
+import type { MaskLine, MaskRow } from '../../forms/index.js';
+import { type FrequencyUnit, fixed, frequencyText, trimmed } from './numbers.js';
 
 /**
  * A margin this small, as a share of the limit, is rounding: return loss levels are certified to 1e-8 dB, and a mask that
@@ -82,4 +82,15 @@ export function placeText({ span }: Requirement, unit: FrequencyUnit): string {
   if (span.startsWith('>= ')) return `at and above ${span.slice(3)} ${unit.name}`;
   if (span.includes('-')) return `over ${span.replace('-', ' to ')} ${unit.name}`;
   return `at ${span} ${unit.name}`;
+}
+
+/** Two decimals where they say it all: a limit is never shown rounded. */
+export function limitText(limit: number): string {
+  const exact = trimmed(limit, 6);
+  return Number(fixed(limit, 2)) === Number(exact) ? fixed(limit, 2) : exact;
+}
+
+/** Attenuations are stated to 400 dB only; beyond, the figure is a floor and not a prediction. */
+export function predictedText(predicted: number, unit: string): string {
+  return unit === 'dB' && predicted >= 400 ? 'over 400' : fixed(predicted, 2);
 }

@@ -1,5 +1,5 @@
-import { CONVENTIONS } from './conventions.js';
-import type { DesignReport } from './design-report.js';
+import type { DesignReport } from '../design-report.js';
+import { CONVENTIONS } from '../words/conventions.js';
 import { jsonText } from './json-text.js';
 
 /** The design file that a result came from: its path relative to the folder of the result, and its SHA-256 digest. */

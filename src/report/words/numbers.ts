@@ -1,4 +1,4 @@
-import type { Band } from '../forms/index.js';
+import type { Band } from '../../forms/index.js';
 
 /** Fixed decimals; what rounds to zero loses its minus. */
 export function fixed(value: number, digits: number): string {

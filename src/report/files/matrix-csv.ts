@@ -1,6 +1,6 @@
-import type { CouplingMatrix } from '../forms/index.js';
+import type { CouplingMatrix } from '../../forms/index.js';
+import { nodeNames } from '../words/nodes.js';
 import { csvText } from './csv.js';
-import { nodeNames } from './nodes.js';
 
 /** The whole coupling matrix as CSV: a head row and a head column with S, 1..N, L; numbers with 12 significant digits. */
 export function matrixCsv(matrix: CouplingMatrix): string {

@@ -1,5 +1,5 @@
+import type { DesignReport } from '../design-report.js';
 import { csvText } from './csv.js';
-import type { DesignReport } from './design-report.js';
 
 type Cell = string | number | null;
 

@@ -1,15 +1,14 @@
-import type { HandOver } from '../bandpass/index.js';
-import { type Band, type Certificate, type CouplingMatrix, hzFromOmega, type MaskRow } from '../forms/index.js';
-import type { Specification } from '../specification/index.js';
+import type { HandOver } from '../../bandpass/index.js';
+import { type Band, type Certificate, type CouplingMatrix, hzFromOmega, type MaskRow } from '../../forms/index.js';
+import type { Specification } from '../../specification/index.js';
+import { CONVENTIONS, cautionsOf } from '../words/conventions.js';
+import { type FrequencyUnit, fixed, frequencyText, signed, sizeText, unitOf } from '../words/numbers.js';
 import { certificateTable } from './certificate-text.js';
-import { CONVENTIONS } from './conventions.js';
 import { handOverLines } from './hand-over-text.js';
 import { blocks, table, wrapped } from './layout.js';
 import { maskTable, verdictLines } from './mask-text.js';
 import { matrixTable } from './matrix-text.js';
-import { type FrequencyUnit, fixed, frequencyText, signed, sizeText, unitOf } from './numbers.js';
 import { type Paint, PLAIN } from './paint.js';
-import { cautionLines } from './summary-text.js';
 import { bandText, qualityText } from './title-text.js';
 
 /** A frequency outside the band where little gets through: a minimum of |S21|. */
@@ -100,6 +99,9 @@ export function analysisText(analysis: Analysis, paint: Paint = PLAIN): string {
     inHertz && handOver !== undefined ? handOverLines({ band, matrix, handOver, unit }, paint) : [],
     matrixTable(matrix, paint),
     certificateTable(certificates, paint),
-    [...CONVENTIONS.map(paint.dim), ...(band === undefined ? [] : cautionLines(band))],
+    [
+      ...CONVENTIONS.map(paint.dim),
+      ...(band === undefined ? [] : cautionsOf(band).flatMap((caution) => wrapped(caution, 2))),
+    ],
   );
 }

@@ -1,8 +1,8 @@
-import type { HandOver } from '../bandpass/index.js';
-import type { Band, CouplingMatrix } from '../forms/index.js';
+import type { HandOver } from '../../bandpass/index.js';
+import type { Band, CouplingMatrix } from '../../forms/index.js';
+import { nodeName } from '../words/nodes.js';
+import { type FrequencyUnit, figures, fixed, frequencyText, signed } from '../words/numbers.js';
 import { beside, table } from './layout.js';
-import { nodeName } from './nodes.js';
-import { type FrequencyUnit, figures, fixed, frequencyText, signed } from './numbers.js';
 import type { Paint } from './paint.js';
 
 const K_DIGITS = 6;

@@ -1,6 +1,6 @@
-import type { Certificate } from '../forms/index.js';
+import type { Certificate } from '../../forms/index.js';
+import { sizeText } from '../words/numbers.js';
 import { table, wrapped } from './layout.js';
-import { sizeText } from './numbers.js';
 import type { Paint } from './paint.js';
 
 /** Share of its limit that a held check has used; a count that must be met exactly uses none. */

@@ -1,9 +1,9 @@
-import { sweepHz } from '../bandpass/index.js';
-import { type Band, edgesOfBand, hzFromOmega, type MaskLine } from '../forms/index.js';
-import { formatTouchstone } from '../measurement/index.js';
-import { CONVENTIONS } from './conventions.js';
-import type { DesignReport } from './design-report.js';
-import { frequencyText, unitOf } from './numbers.js';
+import { sweepHz } from '../../bandpass/index.js';
+import { type Band, edgesOfBand, hzFromOmega, type MaskLine } from '../../forms/index.js';
+import { formatTouchstone } from '../../measurement/index.js';
+import type { DesignReport } from '../design-report.js';
+import { CONVENTIONS } from '../words/conventions.js';
+import { frequencyText, unitOf } from '../words/numbers.js';
 
 const INTERVALS = 1000;
 /** In omega, where 2 is one bandwidth: 2.5 bandwidths each side, and at most 10 to reach the ends of the mask. */

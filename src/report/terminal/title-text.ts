@@ -1,7 +1,7 @@
-import { type Band, type Complex, edgesOfBand, hzFromOmega } from '../forms/index.js';
-import type { Specification } from '../specification/index.js';
+import { type Band, type Complex, edgesOfBand, hzFromOmega } from '../../forms/index.js';
+import type { Specification } from '../../specification/index.js';
+import { type FrequencyUnit, frequencyText, trimmed } from '../words/numbers.js';
 import { wrapped } from './layout.js';
-import { type FrequencyUnit, frequencyText, trimmed } from './numbers.js';
 import type { Paint } from './paint.js';
 
 /** Zeros told one by one. */

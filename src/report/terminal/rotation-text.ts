@@ -1,9 +1,9 @@
-import type { CouplingMatrix } from '../forms/index.js';
-import { CONVENTIONS } from './conventions.js';
+import type { CouplingMatrix } from '../../forms/index.js';
+import { CONVENTIONS } from '../words/conventions.js';
+import { nodeName } from '../words/nodes.js';
+import { signed, sizeText } from '../words/numbers.js';
 import { blocks, table, wrapped } from './layout.js';
 import { matrixTable } from './matrix-text.js';
-import { nodeName } from './nodes.js';
-import { signed, sizeText } from './numbers.js';
 import { type Paint, PLAIN } from './paint.js';
 
 const ANGLE_DIGITS = 6;

@@ -1,29 +1,16 @@
-import type { Band } from '../forms/index.js';
+import type { DesignReport } from '../design-report.js';
+import { CONVENTIONS, cautionsOf } from '../words/conventions.js';
+import { unitOf } from '../words/numbers.js';
 import { certificateSentence } from './certificate-text.js';
-import { CONVENTIONS, NOT_MODELED } from './conventions.js';
-import type { DesignReport } from './design-report.js';
 import { handOverLines } from './hand-over-text.js';
 import { blocks, wrapped } from './layout.js';
 import { maskTable, verdictLines } from './mask-text.js';
 import { matrixTable } from './matrix-text.js';
-import { fixed, unitOf } from './numbers.js';
 import { type Paint, PLAIN } from './paint.js';
 import { titleLines } from './title-text.js';
 
 /** Beyond this order the list of couplings stands for the matrix. */
 const LARGEST_MATRIX = 10;
-/** Fractional bandwidth from which couplings that vary with frequency show. */
-const NARROW = 0.1;
-
-/** What a reader should keep in mind about a model that takes couplings and Q as constant. */
-export function cautionLines(band: Band): readonly string[] {
-  const share = band.bandwidthHz / band.centerHz;
-  const percent = fixed(100 * share, 1);
-  const edge = fixed(50 * share, 0);
-  const wide = `Caution: the band is ${percent} % wide, and couplings and Q are taken as constant over it; a coupling that follows frequency is ${edge} % off at the edges.`;
-  return [...(share > NARROW ? wrapped(wide, 2) : []), ...wrapped(NOT_MODELED, 2)];
-}
-
 /**
  * A design as a person reads it in ten seconds: what it is, whether it meets its mask and where it is tightest, then the
  * mask line by line, the hand-over numbers, the matrix, what was certified, and the conventions. 80 columns at most, but
@@ -42,6 +29,6 @@ export function summaryText(design: DesignReport, paint: Paint = PLAIN): string 
     isLarge ? ['All couplings are listed above; the whole matrix is in matrix.csv.'] : matrixTable(matrix, paint),
     certificateSentence(certificates),
     remarks.flatMap((remark) => wrapped(`Remark: ${remark}`, 2)),
-    [...CONVENTIONS.map(paint.dim), ...cautionLines(band)],
+    [...CONVENTIONS.map(paint.dim), ...cautionsOf(band).flatMap((caution) => wrapped(caution, 2))],
   );
 }

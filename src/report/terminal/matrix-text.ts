@@ -1,7 +1,7 @@
-import type { CouplingMatrix } from '../forms/index.js';
+import type { CouplingMatrix } from '../../forms/index.js';
+import { nodeNames } from '../words/nodes.js';
+import { signed } from '../words/numbers.js';
 import { table, WIDTH } from './layout.js';
-import { nodeNames } from './nodes.js';
-import { signed } from './numbers.js';
 import type { Paint } from './paint.js';
 
 const DIGITS = 4;
