@@ -25,6 +25,7 @@ const ORDER = [
 const PACKAGES: Record<string, readonly string[]> = {
   numerics: ['ml-matrix', 'complex.js'],
   specification: ['zod'],
+  report: ['d3-scale', 'd3-shape'],
   'command-line': ['picocolors'],
 };
 

@@ -1,0 +1,59 @@
+/** Text that is markup already; only this file makes it from plain text, and it escapes what it is given. */
+export interface Markup {
+  readonly markup: string;
+}
+
+/** What an element holds: markup as it is, plain text escaped. */
+export type Child = Markup | string;
+
+/** Values of attributes; an absent one is left out. */
+export type Attributes = Readonly<Record<string, string | number | undefined>>;
+
+const ENTITIES: Readonly<Record<string, string>> = {
+  '&': '&amp;',
+  '<': '&lt;',
+  '>': '&gt;',
+  '"': '&quot;',
+  "'": '&#39;',
+};
+
+/** Characters that no XML file may hold, lone surrogates among them, and those that turn the direction of a line. */
+const FORBIDDEN =
+  // biome-ignore lint/suspicious/noControlCharactersInRegex: these are the characters to be removed
+  /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f-\u009f\u200e\u200f\u2028-\u202e\u2066-\u2069\u061c\ufeff\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g;
+
+/** Plain text as it may stand between tags and in quoted attributes. */
+export function escapeMarkup(text: string): string {
+  return text.replace(FORBIDDEN, '\ufffd').replace(/[&<>"']/g, (character) => ENTITIES[character] ?? character);
+}
+
+/** A coordinate to a tenth of a pixel. */
+function coordinate(value: number): string {
+  return String(Math.round(value * 10) / 10 + 0);
+}
+
+function attributeText([name, value]: readonly [string, string | number | undefined]): string {
+  if (value === undefined) return '';
+  return ` ${name}="${typeof value === 'number' ? coordinate(value) : escapeMarkup(value)}"`;
+}
+
+function childText(child: Child): string {
+  return typeof child === 'string' ? escapeMarkup(child) : child.markup;
+}
+
+/** One element with its attributes and children; numbers are rounded to a tenth of a pixel. */
+export function element(name: string, attributes: Attributes, ...children: readonly Child[]): Markup {
+  const open = `<${name}${Object.entries(attributes).map(attributeText).join('')}`;
+  const isSvgLeaf = children.length === 0 && LEAVES.has(name);
+  return { markup: isSvgLeaf ? `${open}/>` : `${open}>${children.map(childText).join('')}</${name}>` };
+}
+
+/** Elements that are written closed in themselves; HTML allows that of its own void elements and inside SVG only. */
+const LEAVES: ReadonlySet<string> = new Set(
+  'path line rect circle polygon polyline use meta input br hr link img'.split(' '),
+);
+
+/** Several pieces one after the other. */
+export function fragment(...children: readonly Child[]): Markup {
+  return { markup: children.map(childText).join('') };
+}
