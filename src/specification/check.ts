@@ -1,10 +1,11 @@
 import type { Band } from '../forms/index.js';
 import { readBand } from './band.js';
+import { dateFault } from './calendar-date.js';
 import { deepFreeze, definedOnly } from './defined.js';
 import type { Fault, Locate } from './faults.js';
 import { kindFault, refuseAny } from './faults.js';
 import { formFaults } from './form-rules.js';
-import { nameFault, notesFault } from './labels.js';
+import { nameFault, notesFault, revisionFault } from './labels.js';
 import { lossRemarks, readSweep, readUnloadedQ } from './losses-and-sweep.js';
 import { readMask } from './mask/lines.js';
 import { levelRemarks, orderFault, returnLossFault } from './order-and-level.js';
@@ -48,11 +49,13 @@ function readPartZeros(parts: Parts, band: Band | undefined, unsound: readonly F
 
 /** The rules on one part each, then those between parts. */
 function readParts({ parts, unsound }: Structured, faults: Fault[]): Specification {
-  const { name, notes, order = 0, family = 'generalizedChebyshev', returnLossDb, unloadedQ } = parts;
+  const { name, notes, revision, date, order = 0, family = 'generalizedChebyshev', returnLossDb, unloadedQ } = parts;
   const { topology = 'folded', portCouplings = 'any' } = parts;
   const isBad = (key: string): boolean => unsound.some(({ path }) => path.length === 0 || path[0] === key);
   if (name !== undefined) push(faults, nameFault(name));
   if (notes !== undefined) push(faults, notesFault(notes));
+  if (revision !== undefined) push(faults, revisionFault(revision));
+  if (date !== undefined) push(faults, dateFault(date));
   const read = parts.passband === undefined ? undefined : readBand(parts.passband, faults);
   if (parts.order !== undefined) push(faults, orderFault(order));
   if (!isBad('family')) readReturnLoss(parts, returnLossDb !== undefined || isBad('returnLossDb'), faults);
@@ -72,7 +75,7 @@ function readParts({ parts, unsound }: Structured, faults: Fault[]): Specificati
     ...levelRemarks(returnLossDb),
     ...lossRemarks(unloadedQ, band),
   ];
-  const optional = definedOnly({ name, notes, returnLossDb, unloadedQ, sweep });
+  const optional = definedOnly({ name, notes, revision, date, returnLossDb, unloadedQ, sweep });
   return { ...optional, band, order, family, transmissionZeros: zeros.zeros, topology, portCouplings, mask, remarks };
 }
 
@@ -107,7 +110,7 @@ function inOrder(faults: readonly Fault[], locate: Locate | undefined): readonly
  * @param specification anything; never written to, every field read once
  * @returns a deep-frozen copy with frequencies in hertz and zeros in the s-plane, and remarks on what was adjusted
  * @throws FilterFailure with one code, or with the first code and all faults (20 at most) in `faults`: E_MISSING,
- *   E_UNKNOWN_KEY, E_FORBIDDEN_KEY, E_TYPE, E_NOT_FINITE, E_CHOICE, E_QUANTITY, E_NUMBER_OVERFLOW, E_NAME, E_BAND,
+ *   E_UNKNOWN_KEY, E_FORBIDDEN_KEY, E_TYPE, E_NOT_FINITE, E_CHOICE, E_QUANTITY, E_NUMBER_OVERFLOW, E_NAME, E_DATE, E_BAND,
  *   E_ORDER_RANGE, E_RL_RANGE, E_ZERO_COUNT, E_ZERO_RANGE, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR,
  *   E_ZERO_TOPOLOGY, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
  * @example

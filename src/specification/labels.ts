@@ -3,6 +3,7 @@ import type { Fault } from './faults.js';
 
 const NAME_LIMIT = 120;
 const NOTES_LIMIT = 1000;
+const REVISION_LIMIT = 20;
 /** Line ends and tabs may stand in notes, not in a name. */
 const NOTES_CONTROLS = '\n\r\t';
 
@@ -20,6 +21,11 @@ function labelFault(key: string, text: string, limit: number, controls: string):
 /** The fault of a name, if it has one. What remains is kept as written and escaped wherever it goes. */
 export function nameFault(name: string): Fault | undefined {
   return labelFault('name', name, NAME_LIMIT, '');
+}
+
+/** The fault of a revision, if it has one. */
+export function revisionFault(revision: string): Fault | undefined {
+  return labelFault('revision', revision, REVISION_LIMIT, '');
 }
 
 /** The fault of notes, if they have one. */

@@ -60,6 +60,8 @@ export const specificationSchema: z.ZodType<SpecificationInput> = z.strictObject
   $schema: described(z.string(), '$schema').optional(),
   name: described(z.string(), 'name', { maxLength: 120 }).optional(),
   notes: described(z.string(), 'notes', { maxLength: 1000 }).optional(),
+  revision: described(z.string(), 'revision', { maxLength: 20 }).optional(),
+  date: described(z.string(), 'date', { format: 'date' }).optional(),
   passband,
   family: described(z.enum(['generalizedChebyshev', 'chebyshev', 'butterworth']), 'family', {
     default: 'generalizedChebyshev',

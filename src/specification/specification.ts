@@ -23,6 +23,9 @@ export interface SweepRange {
 export interface Specification {
   readonly name?: string;
   readonly notes?: string;
+  readonly revision?: string;
+  /** Calendar date, YYYY-MM-DD. */
+  readonly date?: string;
   /** Geometric center and width (equiripple, or half-power for `butterworth`). */
   readonly band: Band;
   readonly order: number;
@@ -81,6 +84,8 @@ export interface SweepInput {
 export interface SpecificationInput {
   readonly name?: string | undefined;
   readonly notes?: string | undefined;
+  readonly revision?: string | undefined;
+  readonly date?: string | undefined;
   /** For editors; not read. */
   readonly $schema?: string | undefined;
   readonly passband: PassbandInput;

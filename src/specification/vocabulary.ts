@@ -1,3 +1,4 @@
+import { DATE_ALLOWED } from './calendar-date.js';
 import { MAX_ORDER } from './order-and-level.js';
 import { FREQUENCY_ALLOWED } from './quantity.js';
 import { ZERO_ALLOWED } from './zeros/values.js';
@@ -15,6 +16,14 @@ export const VOCABULARY: Readonly<Record<string, Term>> = {
   $schema: { meaning: 'Where an editor finds the schema of this file; not read.', allowed: 'text' },
   name: { meaning: 'Name of the filter, at most 120 characters.', allowed: 'text of at most 120 characters' },
   notes: { meaning: 'Remarks in free text, at most 1000 characters.', allowed: 'text of at most 1000 characters' },
+  revision: {
+    meaning: 'Revision of the design, at most 20 characters, for the head of the report.',
+    allowed: 'text of at most 20 characters',
+  },
+  date: {
+    meaning: 'Date of the design, YYYY-MM-DD, for the head of the report; nothing else knows what day it is.',
+    allowed: DATE_ALLOWED,
+  },
   passband: {
     meaning:
       'The passband: lowerHz and upperHz, or centerHz and bandwidthHz. Its width is the equiripple width (half-power for butterworth).',
@@ -90,6 +99,8 @@ export const KEYS: Readonly<Record<string, readonly string[]>> = {
     '$schema',
     'name',
     'notes',
+    'revision',
+    'date',
     'passband',
     'family',
     'order',

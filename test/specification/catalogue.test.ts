@@ -177,6 +177,28 @@ const ROWS: readonly Row[] = [
   ['28 NUL', file('"order": 6, "returnLossDb": 22, "name": "a\\u0000b"'), 'E_NAME', 'name (3:43)', '\\u0000'],
   ['28 direction mark', spec({ name: 'abc\u202etxt' }), 'E_NAME', '\\u202e'],
   ['28 a megabyte', spec({ name: 'a'.repeat(1e6) }), 'E_NAME', '1000000', '120'],
+  [
+    '28 revision',
+    file('"order": 6, "returnLossDb": 22, "revision": "a\\u202eb"'),
+    'E_NAME',
+    'revision (3:47)',
+    '\\u202e',
+  ],
+  [
+    '28 no date',
+    spec({ date: '1 December 2026' }),
+    'E_DATE',
+    'the string "1 December 2026"',
+    'YYYY-MM-DD',
+    '"2026-12-01"',
+  ],
+  ['28 no such day', file('"order": 6, "returnLossDb": 22, "date": "2026-02-29"'), 'E_DATE', 'date (3:43)', '28 days'],
+  ['28 no such month', spec({ date: '2026-13-01' }), 'E_DATE', '2026-13-01', '01 to 12'],
+  ['28 day 0', spec({ date: '2026-04-00' }), 'E_DATE', '30 days'],
+  ['28 leap century', spec({ date: '1900-02-29' }), 'E_DATE', '28 days'],
+  ['28 a year before the calendar', spec({ date: '1582-10-15' }), 'E_DATE', '1583'],
+  ['28 date with marks', spec({ date: '2026-12-01\u202e' }), 'E_DATE', '\\u202e'],
+  ['28 digits of another script', spec({ date: '２０２６-12-01' }), 'E_DATE'],
   ['29 center 0', spec({ passband: { centerHz: 0, bandwidthHz: 5 } }), 'E_BAND', '-2.5 Hz', '2.5 Hz'],
   ['29 width negative', spec({ passband: { centerHz: 100, bandwidthHz: -10 } }), 'E_BAND', '105 Hz', '95 Hz'],
   [
@@ -245,6 +267,9 @@ describe('input that looks bad and is not', () => {
   it('20 no zeros, or none listed, is all-pole', () => {
     expect(checkSpecification(SOUND).transmissionZeros).toEqual([]);
     expect(checkSpecification({ ...SOUND, transmissionZeros: [] }).transmissionZeros).toEqual([]);
+  });
+  it.each(['2026-12-01', '2024-02-29', '2000-02-29', '1583-01-01', '9999-12-31'])('28 the date %s is a day', (date) => {
+    expect(checkSpecification({ ...SOUND, date }).date).toBe(date);
   });
   it.each(['<script>', '=1+1', '../x', '"; DROP', 'Füllhorn 滤波器 😀'])(
     '28 the name %s is kept as written',

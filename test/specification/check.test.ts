@@ -14,6 +14,8 @@ import { expectRefusal, onlyRefuses, refusal, SOUND } from './refusal.js';
 const FULL = `{
   "name": "Larkmoor",
   "notes": "channel filter\\nsecond issue",
+  "revision": "C",
+  "date": "2024-02-29",
   "passband": { "lowerHz": "3822 MHz", "upperHz": "3.858 GHz" },
   "family": "generalizedChebyshev",
   "order": 6,
@@ -37,6 +39,8 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     expect(rest).toEqual({
       name: 'Larkmoor',
       notes: 'channel filter\nsecond issue',
+      revision: 'C',
+      date: '2024-02-29',
       band: { centerHz: Math.sqrt(3822e6) * Math.sqrt(3858e6), bandwidthHz: 36e6 },
       family: 'generalizedChebyshev',
       order: 6,
@@ -199,6 +203,9 @@ describe('checkSpecification(specification) and parseSpecification(text)', () =>
     ['a sweep of one point', { sweep: { fromHz: 1, toHz: 2, points: 1 } }, 'E_SWEEP', '2 to 100001'],
     ['a sweep without points', { sweep: { fromHz: 1, toHz: 2 } }, 'E_MISSING', 'sweep.points'],
     ['notes too long', { notes: 'x'.repeat(1001) }, 'E_NAME', 'notes', '1000'],
+    ['a revision too long', { revision: 'x'.repeat(21) }, 'E_NAME', 'revision', '21 characters', '20'],
+    ['a line end in a revision', { revision: 'A\nB' }, 'E_NAME', 'revision', '\\u000a'],
+    ['a date that is no text', { date: 20261201 }, 'E_TYPE', 'date', 'YYYY-MM-DD'],
     ['a hole in the zeros', { transmissionZeros: new Array(2) }, 'E_TYPE', 'transmissionZeros[0]', 'nothing'],
     ['a zero with half its parts', { transmissionZeros: [{ re: 1 }] }, 'E_MISSING', 'transmissionZeros[0].im'],
     ['a zero with a part too many', { transmissionZeros: [{ re: 0, im: 2, abs: 2 }] }, 'E_UNKNOWN_KEY', 'abs'],
