@@ -3,13 +3,13 @@ import { type Band, type Certificate, type CouplingMatrix, hzFromOmega, type Mas
 import type { Specification } from '../../specification/index.js';
 import { CONVENTIONS, cautionsOf } from '../words/conventions.js';
 import { type FrequencyUnit, fixed, frequencyText, signed, sizeText, unitOf } from '../words/numbers.js';
+import { bandText, qualityText } from '../words/title.js';
 import { certificateTable } from './certificate-text.js';
 import { handOverLines } from './hand-over-text.js';
 import { blocks, table, wrapped } from './layout.js';
 import { maskTable, verdictLines } from './mask-text.js';
 import { matrixTable } from './matrix-text.js';
 import { type Paint, PLAIN } from './paint.js';
-import { bandText, qualityText } from './title-text.js';
 
 /** A frequency outside the band where little gets through: a minimum of |S21|. */
 export interface Dip {

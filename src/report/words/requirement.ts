@@ -9,21 +9,28 @@ const ROUNDING = 1e-8;
 
 const NANO = 1e9;
 
+/** Margins below are rounding, dB or ns. */
+const NOTHING = 1e-7;
+
 /** Marks the name of a requirement whose levels are relative to the loss at the center. */
 export const RELATIVE = '*';
 
 interface Kind {
   readonly name: string;
   readonly unit: 'dB' | 'ns';
+  readonly bound: 'atLeast' | 'atMost';
+  /** Decimals on a page; a terminal shows two of everything. */
+  readonly decimals: number;
 }
 
 const KINDS: readonly (readonly [string, Kind])[] = [
-  ['rejectionDb', { name: 'rejection', unit: 'dB' }],
-  ['returnLossDb', { name: 'return loss', unit: 'dB' }],
-  ['insertionLossDb', { name: 'insertion loss', unit: 'dB' }],
-  ['insertionLossVariationDb', { name: 'loss variation', unit: 'dB' }],
-  ['groupDelayVariationSeconds', { name: 'delay variation', unit: 'ns' }],
+  ['rejectionDb', { name: 'rejection', unit: 'dB', bound: 'atLeast', decimals: 1 }],
+  ['returnLossDb', { name: 'return loss', unit: 'dB', bound: 'atLeast', decimals: 1 }],
+  ['insertionLossDb', { name: 'insertion loss', unit: 'dB', bound: 'atMost', decimals: 2 }],
+  ['insertionLossVariationDb', { name: 'loss variation', unit: 'dB', bound: 'atMost', decimals: 2 }],
+  ['groupDelayVariationSeconds', { name: 'delay variation', unit: 'ns', bound: 'atMost', decimals: 1 }],
 ];
+const ANY_KIND: Kind = { name: 'requirement', unit: 'dB', bound: 'atLeast', decimals: 2 };
 
 /** One line of a mask with its verdict, in the words and units of a report. */
 export interface Requirement {
@@ -37,10 +44,13 @@ export interface Requirement {
   /** Margin as a share of the limit: what makes decibels and nanoseconds comparable. */
   readonly share: number;
   readonly at: string;
+  readonly bound: 'atLeast' | 'atMost';
+  /** Decimals on a page: those of its kind, more where the clearance would round to zero. */
+  readonly decimals: number;
 }
 
 function kindOf(line: MaskLine): Kind {
-  const found = KINDS.find(([key]) => key in line)?.[1] ?? { name: 'requirement', unit: 'dB' };
+  const found = KINDS.find(([key]) => key in line)?.[1] ?? ANY_KIND;
   return line.relativeTo === 'center' ? { ...found, name: `${found.name}${RELATIVE}` } : found;
 }
 
@@ -51,9 +61,16 @@ function spanText({ fromHz, toHz }: MaskLine, unit: FrequencyUnit): string {
   return `${frequencyText(fromHz, unit)}-${frequencyText(toHz, unit)}`;
 }
 
+/** Decimals that show a margin, unless it is nothing but rounding. */
+function shownDecimals(margin: number, least: number): number {
+  const size = Math.abs(margin);
+  if (size < NOTHING) return least;
+  return Math.max(least, Math.ceil(-Math.log10(2 * size)));
+}
+
 /** Puts a verdict into words. */
 export function requirementOf({ line, limit, predicted, margin, worstHz }: MaskRow, unit: FrequencyUnit): Requirement {
-  const { name, unit: level } = kindOf(line);
+  const { name, unit: level, bound, decimals } = kindOf(line);
   const scale = level === 'ns' ? NANO : 1;
   const size = Math.max(Math.abs(limit), level === 'ns' ? Number.MIN_VALUE : 1e-3);
   return {
@@ -66,14 +83,16 @@ export function requirementOf({ line, limit, predicted, margin, worstHz }: MaskR
     isMet: margin >= -ROUNDING * size,
     share: margin / size,
     at: worstHz === null ? 'far above' : fixed(worstHz / unit.hertz, unit.digits),
+    bound,
+    decimals: shownDecimals(margin * scale, decimals),
   };
 }
 
-/** A clearance: two decimals, more where it would round to zero. */
-export function clearanceText(margin: number): string {
+/** A clearance: so many decimals, more where it would round to zero. */
+export function clearanceText(margin: number, decimals = 2): string {
   const size = Math.abs(margin);
-  if (size < 1e-7) return '0.00';
-  return size < 0.005 ? size.toPrecision(1) : fixed(size, 2);
+  if (size < NOTHING) return fixed(0, decimals);
+  return size < 0.5 * 10 ** -decimals ? size.toPrecision(1) : fixed(size, decimals);
 }
 
 /** Where a requirement applies, in words. */
@@ -84,13 +103,13 @@ export function placeText({ span }: Requirement, unit: FrequencyUnit): string {
   return `at ${span} ${unit.name}`;
 }
 
-/** Two decimals where they say it all: a limit is never shown rounded. */
-export function limitText(limit: number): string {
+/** So many decimals where they say it all: a limit is never shown rounded. */
+export function limitText(limit: number, decimals = 2): string {
   const exact = trimmed(limit, 6);
-  return Number(fixed(limit, 2)) === Number(exact) ? fixed(limit, 2) : exact;
+  return Number(fixed(limit, decimals)) === Number(exact) ? fixed(limit, decimals) : exact;
 }
 
 /** Attenuations are stated to 400 dB only; beyond, the figure is a floor and not a prediction. */
-export function predictedText(predicted: number, unit: string): string {
-  return unit === 'dB' && predicted >= 400 ? 'over 400' : fixed(predicted, 2);
+export function predictedText(predicted: number, unit: string, decimals = 2): string {
+  return unit === 'dB' && predicted >= 400 ? 'over 400' : fixed(predicted, decimals);
 }

@@ -27,10 +27,10 @@ export function counted(count: number): string {
   return count === 1 ? '1 requirement' : `${count} requirements`;
 }
 
-function nearestText(worst: Requirement, unit: FrequencyUnit): string {
+function nearestText(worst: Requirement, unit: FrequencyUnit, decimals: number): string {
   const percent = Math.round(Math.abs(100 * worst.share));
   const share = percent > 100 || percent === 0 ? '' : ` (${percent} % of the limit)`;
-  const room = `${worst.isMet ? 'clear' : 'short'} by ${clearanceText(worst.margin)} ${worst.unit}${share}`;
+  const room = `${worst.isMet ? 'clear' : 'short'} by ${clearanceText(worst.margin, decimals)} ${worst.unit}${share}`;
   const relative = worst.name.endsWith(RELATIVE) ? ' relative to the center' : '';
   const place = `${worst.name.replace(RELATIVE, '')}${relative} ${placeText(worst, unit)}, ${room}`;
   const at =
@@ -39,8 +39,12 @@ function nearestText(worst: Requirement, unit: FrequencyUnit): string {
   return `${place}${where}`;
 }
 
-/** How many requirements are met, and which has the least room; undefined without a mask. */
-export function verdictOf(rows: readonly MaskRow[], unit: FrequencyUnit): Verdict | undefined {
+/** How many requirements are met, and which has the least room, to so many decimals; undefined without a mask. */
+export function verdictOf(
+  rows: readonly MaskRow[],
+  unit: FrequencyUnit,
+  decimals: (requirement: Requirement) => number = () => 2,
+): Verdict | undefined {
   const requirements = rows.map((row) => requirementOf(row, unit));
   const worst = tightest(requirements);
   if (worst === undefined) return undefined;
@@ -52,6 +56,6 @@ export function verdictOf(rows: readonly MaskRow[], unit: FrequencyUnit): Verdic
   return {
     isMet: missed === 0,
     answer: missed === 0 ? `Meets ${all}.` : `Short of ${some}.`,
-    nearest: `${label}: ${nearestText(worst, unit)}.`,
+    nearest: `${label}: ${nearestText(worst, unit, decimals(worst))}.`,
   };
 }
