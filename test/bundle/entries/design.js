@@ -1,0 +1,1 @@
+export { design } from 'irisloom';

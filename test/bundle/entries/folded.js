@@ -1,0 +1,1 @@
+export { folded, generalizedChebyshev, transversal } from 'irisloom';
