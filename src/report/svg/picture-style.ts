@@ -17,8 +17,9 @@ export function pictureRules(color: (role: Role) => string): string {
     `.pic .bold{font-weight:700}`,
     `.pic .mid{text-anchor:middle}`,
     `.pic .end{text-anchor:end}`,
-    // A label over a curve or a hatch is drawn twice: a halo of the ground below, the letters above it.
+    // A label over a curve or a hatch has a rim in the color of its ground; the letters lie above it.
     `.pic .halo{paint-order:stroke;stroke:${color('window')};stroke-width:4px;stroke-linejoin:round}`,
+    `.pic .halo-ground{paint-order:stroke;stroke:${color('ground')};stroke-width:4px;stroke-linejoin:round}`,
     ...colors.map((role) => `.pic .f-${role},.pic text.f-${role}{fill:${color(role)}}`),
     ...(['paper', 'window', 'ground'] as const).map((role) => `.pic .f-${role}{fill:${color(role)}}`),
     ...colors.map((role) => `.pic .s-${role}{stroke:${color(role)}}`),

@@ -1,0 +1,112 @@
+import { decibels, type SweepHz, sweepHz } from '../../../bandpass/index.js';
+import { type Band, edgesOfBand, hzFromOmega, type MaskLine } from '../../../forms/index.js';
+import type { DesignReport } from '../../design-report.js';
+import { responseGrid } from '../../files/response-text.js';
+
+/** Positive decibels and seconds over the grid of the pictures. */
+export interface Curve {
+  readonly attenuationDb: Float64Array;
+  readonly returnLossDb: Float64Array;
+  readonly delaySeconds: Float64Array;
+}
+
+/** What every picture with a frequency axis is drawn from. */
+export interface CurveData {
+  readonly hz: Float64Array;
+  /** Ends of the wide picture. */
+  readonly spanHz: readonly [number, number];
+  /** Ends of the pictures of the passband. */
+  readonly closeHz: readonly [number, number];
+  /** With the loss of the design; equal to `lossless` where the design states none. */
+  readonly lossy: Curve;
+  readonly lossless: Curve;
+  readonly hasLoss: boolean;
+  readonly centerLossDb: number;
+}
+
+/** Extra points in the passband, where the curves are looked at closely. */
+const CLOSE_POINTS = 601;
+/** Room in bandwidths that the wide picture leaves beside the band, beside the end of a mask line, and where one runs on. */
+const BESIDE = { band: 0.75, end: 0.15, open: 0.8 } as const;
+/** Farthest place that the wide picture reaches to, in omega. */
+const FAR = 20;
+/** Ends of the close pictures in omega: a quarter of the band on each side, up to twice that for a mask that reaches out. */
+const CLOSE = 1.25;
+const CLOSE_AT_MOST = 2;
+
+/** A mask line that is about the passband and not about what is kept out. */
+export function isInBand(line: MaskLine): boolean {
+  return !('rejectionDb' in line);
+}
+
+function closeSpan(band: Band, mask: readonly MaskLine[]): readonly [number, number] {
+  const ends = mask.filter(isInBand).flatMap(({ fromHz, toHz }) => [fromHz, toHz]);
+  const reach = [hzFromOmega(band, -CLOSE_AT_MOST), hzFromOmega(band, CLOSE_AT_MOST)] as const;
+  const room = 0.05 * band.bandwidthHz;
+  const near = ends.filter((hz) => hz !== undefined).filter((hz) => hz - room > reach[0] && hz + room < reach[1]);
+  return [
+    Math.min(hzFromOmega(band, -CLOSE), ...near.map((hz) => hz - room)),
+    Math.max(hzFromOmega(band, CLOSE), ...near.map((hz) => hz + room)),
+  ];
+}
+
+/** What the wide picture shows: the sweep that was asked for, or else the band and everything that the mask asks around it. */
+function wideSpan({ specification, mask }: DesignReport): readonly [number, number] {
+  const { band, sweep } = specification;
+  if (sweep !== undefined) return [sweep.fromHz, sweep.toHz];
+  const { lowerHz, upperHz } = edgesOfBand(band);
+  const [lowest, highest] = [hzFromOmega(band, -FAR), hzFromOmega(band, FAR)];
+  const room = (share: number): number => share * band.bandwidthHz;
+  const ends = mask.flatMap(({ line: { fromHz, toHz }, worstHz }) => {
+    const open =
+      fromHz === undefined
+        ? [(toHz as number) - room(BESIDE.open)]
+        : toHz === undefined
+          ? [fromHz + room(BESIDE.open)]
+          : [];
+    const shut = [fromHz, toHz, worstHz].filter((hz) => typeof hz === 'number');
+    return [...open, ...shut.flatMap((hz) => [hz - room(BESIDE.end), hz + room(BESIDE.end)])];
+  });
+  const within = ends.filter((hz) => hz > lowest && hz < highest);
+  return [Math.min(lowerHz - room(BESIDE.band), ...within), Math.max(upperHz + room(BESIDE.band), ...within)];
+}
+
+/** The points of the response file, more of them in the passband, and every notch and edge exactly. */
+function gridOf(design: DesignReport, [from, to]: readonly [number, number]): Float64Array {
+  const { band } = design.specification;
+  const { reflectionZeros, transmissionZeros } = design.polynomials;
+  const { lowerHz, upperHz } = edgesOfBand(band);
+  const close = Array.from({ length: CLOSE_POINTS }, (_, n) => from + ((to - from) * n) / (CLOSE_POINTS - 1));
+  const notches = [...reflectionZeros, ...transmissionZeros].map(({ im }) => hzFromOmega(band, im));
+  const all = [...responseGrid(design.specification), ...close, ...notches, lowerHz, upperHz, band.centerHz];
+  return Float64Array.from(new Set(all)).sort();
+}
+
+function curveOf({ s11, s21, groupDelaySeconds }: SweepHz): Curve {
+  return {
+    attenuationDb: s21.re.map((re, n) => decibels(re, s21.im[n] as number)),
+    returnLossDb: s11.re.map((re, n) => decibels(re, s11.im[n] as number)),
+    delaySeconds: groupDelaySeconds,
+  };
+}
+
+/** Sweeps a design once for all its pictures. */
+export function curveData(design: DesignReport): CurveData {
+  const { specification, polynomials, matrix } = design;
+  const { band, unloadedQ, mask } = specification;
+  const closeHz = closeSpan(band, mask);
+  const hz = gridOf(design, closeHz);
+  const lossless = curveOf(sweepHz(polynomials, band, hz));
+  // The transfer function keeps its digits in the deep stop band; only a list of Q needs the matrix.
+  const model = typeof unloadedQ === 'object' ? matrix : polynomials;
+  const lossy = unloadedQ === undefined ? lossless : curveOf(sweepHz(model, { ...band, unloadedQ }, hz));
+  return {
+    hz,
+    spanHz: wideSpan(design),
+    closeHz,
+    lossy,
+    lossless,
+    hasLoss: unloadedQ !== undefined,
+    centerLossDb: lossy.attenuationDb[hz.indexOf(band.centerHz)] as number,
+  };
+}

@@ -1,0 +1,53 @@
+import type { DesignReport } from '../../design-report.js';
+import type { Picture } from '../../svg/drawing.js';
+import { type FrequencyUnit, fixed, unitOf } from '../../words/numbers.js';
+import { type Requirement, requirementOf, roomText } from '../../words/requirement.js';
+import { NO_MASK, verdictOf } from '../../words/verdict.js';
+import { type CurveData, isInBand } from './curve-data.js';
+import { spanWords } from './flags.js';
+
+/** Where a requirement is tightest, in words. */
+function where({ at }: Requirement, unit: FrequencyUnit): string {
+  if (at === 'far above') return 'far above the band';
+  return `at ${fixed(Number(at), Math.min(unit.digits, 1))} ${unit.name}`;
+}
+
+/** What a frequency picture finds about some of the requirements: clear of every limit, or which is short. */
+export function limitFinding(requirements: readonly Requirement[], unit: FrequencyUnit): string {
+  // All are in one unit here, so room counts as it is; between units only its share of the limit can be compared.
+  const worst = [...requirements].sort((a, b) => a.margin - b.margin)[0];
+  if (worst === undefined) return 'No limits are asked for here';
+  const short = requirements.filter(({ isMet }) => !isMet).length;
+  const room = roomText(worst.margin, worst.isMet, worst.unit);
+  if (short === 0) {
+    const limits = requirements.length === 1 ? 'the limit' : 'every limit';
+    return `Clear of ${limits}; closest ${room.replace(' clear', '')}, ${where(worst, unit)}`;
+  }
+  const many = short === 1 ? 'one limit' : `${short} limits`;
+  return `Short of ${many}; farthest ${room.replace(' short', '')}, ${where(worst, unit)}`;
+}
+
+/** Finding, caption and alternative of the response picture. */
+export function responseWords(
+  design: DesignReport,
+  { hasLoss }: CurveData,
+): Pick<Picture, 'finding' | 'caption' | 'alternative'> {
+  const { band } = design.specification;
+  const unit = unitOf(band);
+  const shown = design.mask.filter(({ line }) => !isInBand(line) || 'returnLossDb' in line);
+  const requirements = shown.map((row) => requirementOf(row, unit));
+  const finding = requirements.length === 0 ? 'Transmission and reflection' : limitFinding(requirements, unit);
+  const lines = hasLoss ? 'Thick: transmission with loss; thin: lossless.' : 'Lossless: no unloaded Q is stated.';
+  const verdict = verdictOf(shown, unit);
+  const list = requirements
+    .map((each) => `${each.name} ${spanWords(each.span)} ${unit.name} ${roomText(each.margin, each.isMet, each.unit)}`)
+    .join('; ');
+  return {
+    finding,
+    caption: `${lines} Hatching wears the color of the curve it forbids; dot: worst point; ▽ transmission zero.`,
+    alternative:
+      verdict === undefined
+        ? `Transmission and reflection in dB over frequency. ${NO_MASK}`
+        : `Transmission and reflection in dB over frequency with the limits of the mask: ${list}.`,
+  };
+}
