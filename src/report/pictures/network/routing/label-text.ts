@@ -1,0 +1,73 @@
+import type { HandOver } from '../../../../bandpass/index.js';
+import type { Band } from '../../../../forms/index.js';
+import { minus } from '../../../svg/words.js';
+import { figures, signed, sizeText, unitOf } from '../../../words/numbers.js';
+import type { Link, Network } from './couplings.js';
+import type { Line } from './layout.js';
+
+/** Above this order only cross couplings are labelled. */
+export const MOST_LABELLED = 14;
+
+/** A coupling to four decimals, with its sign; sizes that four decimals do not show, by their power of ten. */
+export function couplingText(value: number): string {
+  const size = Math.abs(value);
+  if (size === 0 || (size >= PRINTED && size < 1000)) return minus(signed(value, 4));
+  return minus(`${value > 0 ? '+' : ''}${sizeText(value)}`);
+}
+
+const PRINTED = 5e-5;
+
+/** One decimal less than frequencies carry: still a thousandth of the band. */
+function widthText(hertz: number, band: Band, withUnit: boolean): string {
+  const unit = unitOf(band);
+  return minus(`${signed(hertz / unit.hertz, unit.digits - 1)}${withUnit ? ` ${unit.name}` : ''}`);
+}
+
+/** What labels are made from. */
+export interface Wording {
+  readonly network: Network;
+  readonly band: Band | undefined;
+  readonly handOver: HandOver;
+  readonly isDense: boolean;
+  /** The second line of a label: bandwidth or external Q. */
+  readonly withSecond: boolean;
+}
+
+function portQuality({ from, to }: Link, { handOver, network }: Wording): number | null {
+  if (from === 0 && to <= network.order) return handOver.externalQ.source;
+  if (to === network.order + 1 && from > 0) return handOver.externalQ.load;
+  return null;
+}
+
+/** The second line: external Q where a port has one coupling only, otherwise the coupling bandwidth. */
+function secondText(link: Link, wording: Wording): string | undefined {
+  if (wording.band === undefined) return undefined;
+  const quality = portQuality(link, wording);
+  if (quality !== null) return `Qe ${figures(quality, 4)}`;
+  return widthText(link.value * wording.band.bandwidthHz, wording.band, !wording.isDense);
+}
+
+/** The label of a coupling; empty where it has none. */
+export function linesOf(link: Link, wording: Wording): readonly Line[] {
+  const { isDense, withSecond, network } = wording;
+  if (link.isMain && network.order > MOST_LABELLED) return [];
+  const color = link.value < 0 ? ' f-negative' : '';
+  const first = {
+    text: couplingText(link.value),
+    classes: `bold${isDense ? ' small' : ''}${color}`,
+    size: isDense ? 11 : 13,
+  };
+  const second = withSecond ? secondText(link, wording) : undefined;
+  if (second === undefined) return [first];
+  return [first, { text: second, classes: `${isDense ? 'small f-second' : 'tick'}`, size: isDense ? 11 : 12.5 }];
+}
+
+/** How far a resonator is tuned off the center: a number in the unit of the band, or as M_ii where no band is given; else nothing. */
+export function offsetText(node: number, { network, band, handOver }: Wording): string | undefined {
+  const value = network.detuning[node - 1] ?? 0;
+  if (band === undefined) return Math.abs(value) < PRINTED ? undefined : `M ${couplingText(value)}`;
+  const hertz = (handOver.resonators[node - 1]?.frequencyHz ?? band.centerHz) - band.centerHz;
+  // The unit stands once, in the caption: beside a row of couplings there is room for the number only.
+  const text = widthText(hertz, band, false);
+  return Number(text.replace('−', '-')) === 0 ? undefined : text;
+}
