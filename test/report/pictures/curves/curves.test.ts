@@ -1,0 +1,248 @@
+import { describe, expect, it } from 'vitest';
+import { type Design, edgesOfBand, hzFromOmega, omegaFromHz, type SpecificationInput } from '../../../../src/index.js';
+import { bandPicture } from '../../../../src/report/pictures/curves/band-picture.js';
+import { groupDelayPicture } from '../../../../src/report/pictures/curves/group-delay-picture.js';
+import { responsePicture } from '../../../../src/report/pictures/curves/response-picture.js';
+import type { Picture } from '../../../../src/report/svg/drawing.js';
+import { fixtureDesign, sampleDesign } from '../../designs.js';
+
+const FIXTURES = ['brackwater', 'larkmoor', 'tern-quay'] as const;
+const DRAW = [responsePicture, bandPicture, groupDelayPicture] as const;
+
+interface Frame {
+  readonly hz: (x: number) => number;
+  readonly left: number;
+  readonly right: number;
+}
+
+function frameOf(markup: string): Frame {
+  const value = (name: string): number => Number(new RegExp(`data-${name}="([^"]+)"`).exec(markup)![1]);
+  const [from, to, left, right] = ['from-hz', 'to-hz', 'left', 'right'].map(value) as [number, number, number, number];
+  return { hz: (x) => from + ((x - left) / (right - left)) * (to - from), left, right };
+}
+
+/** Corner points of the paths of a class, straight pieces only. */
+function pathsOf(markup: string, classes: string): [number, number][][] {
+  return [...markup.matchAll(new RegExp(`<path d="([^"]*)" class="line ${classes}"`, 'g'))].map(([, d]) =>
+    d!
+      .slice(1)
+      .split('L')
+      .map((pair) => pair.split(',').map(Number) as [number, number]),
+  );
+}
+
+/** The level axis of a panel from the numbers beside its hairlines; the unit ends each panel's numbers. */
+function levelAxis(markup: string, panel: number): (y: number) => number {
+  const part = markup.split(/>(?:dB|ns)<\/text>/)[panel]!;
+  const ticks = [...part.matchAll(/y="([\d.]+)" class="tick end">([−\d.]+)</g)].map(([, y, text]) => ({
+    y: Number(y) - 4.4,
+    level: Number(text!.replace('−', '-')),
+  }));
+  const [a, b] = [ticks[0]!, ticks.at(-1)!];
+  return (y) => a.level + ((y - a.y) / (b.y - a.y)) * (b.level - a.level);
+}
+
+/** 20 log10 of the size of prod(s - root). */
+function productDb(roots: readonly { re: number; im: number }[], re: number, im: number): number {
+  return roots.reduce((sum, root) => sum + 20 * Math.log10(Math.hypot(re - root.re, im - root.im)), 0);
+}
+
+/** S21 and S11 in dB from the roots by their definition, loss as a shift of s to the right. */
+function decibelsAt(
+  { polynomials, specification: { band, unloadedQ } }: Design,
+  hz: number,
+): { s21: number; s11: number } {
+  const re = typeof unloadedQ === 'number' ? band.centerHz / (band.bandwidthHz * unloadedQ) : 0;
+  const im = omegaFromHz(band, hz);
+  const { poles, reflectionZeros, transmissionZeros, epsilon, epsilonR } = polynomials;
+  const below = productDb(poles, re, im);
+  return {
+    s21: productDb(transmissionZeros, re, im) - below - 20 * Math.log10(epsilon),
+    s11: productDb(reflectionZeros, re, im) - below - 20 * Math.log10(epsilonR),
+  };
+}
+
+/** Whether the curve passes within a pixel of its place: horizontally or vertically, for it may be steep. */
+function passes(
+  value: (hz: number) => number,
+  frame: Frame,
+  axis: (y: number) => number,
+  [x, y]: [number, number],
+): boolean {
+  const near = Array.from({ length: 41 }, (_, n) => value(frame.hz(x - 1 + n / 20)));
+  const [high, low] = [axis(y - 1), axis(y + 1)];
+  return Math.min(...near) <= Math.max(high, low) && Math.max(...near) >= Math.min(high, low);
+}
+
+describe.each(FIXTURES)('curves of %s', (name) => {
+  const design = fixtureDesign(name);
+
+  it.each(['wide', 'narrow'] as const)('%s response: stands where the roots say', (format) => {
+    const { markup } = responsePicture(design)[format].body;
+    const [frame, axis] = [frameOf(markup), levelAxis(markup, 0)];
+    for (const [classes, key] of [
+      ['thick s-transmission', 's21'],
+      ['medium s-reflection', 's11'],
+    ] as const) {
+      const [points = []] = pathsOf(markup, classes);
+      const inside = points.filter(([x, y]) => x > frame.left && x < frame.right && axis(y) > -50 && axis(y) < -0.5);
+      expect(inside.length).toBeGreaterThan(20);
+      for (const point of inside)
+        expect(
+          passes((hz) => decibelsAt(design, hz)[key], frame, axis, point),
+          `${key} ${point}`,
+        ).toBe(true);
+    }
+  });
+
+  it.each(['wide', 'narrow'] as const)('%s band picture: loss down, return loss down', (format) => {
+    const { markup } = bandPicture(design)[format].body;
+    const frame = frameOf(markup);
+    const [loss = []] = pathsOf(markup, 'thick s-transmission');
+    const inside = loss.filter(([x, y]) => x > frame.left && x < frame.right && levelAxis(markup, 0)(y) < 0.9);
+    expect(inside.length).toBeGreaterThan(5);
+    for (const point of inside)
+      expect(
+        passes((hz) => -decibelsAt(design, hz).s21, frame, levelAxis(markup, 0), point),
+        `${point}`,
+      ).toBe(true);
+    const [match = []] = pathsOf(markup, 'medium s-reflection');
+    const lower = match.filter(
+      ([x, y]) => x > frame.left && x < frame.right && Math.abs(levelAxis(markup, 1)(y) - 25) < 8,
+    );
+    expect(lower.length).toBeGreaterThan(10);
+    for (const point of lower)
+      expect(
+        passes((hz) => -decibelsAt(design, hz).s11, frame, levelAxis(markup, 1), point),
+        `${point}`,
+      ).toBe(true);
+  });
+
+  it('group delay: lowest point and worst points are those of the mask rows', () => {
+    const { markup } = groupDelayPicture(design).wide.body;
+    const [frame, axis] = [frameOf(markup), levelAxis(markup, 0)];
+    const [points = []] = pathsOf(markup, 'thick s-transmission');
+    for (const row of design.mask.filter(({ line }) => 'groupDelayVariationSeconds' in line)) {
+      const { fromHz = 0, toHz = 0 } = row.line;
+      const ends = [fromHz, toHz].map((hz) => {
+        const next = points.findIndex(([x]) => frame.hz(x) >= hz);
+        const [[x0, y0], [x1, y1]] = [points[next - 1]!, points[next]!];
+        return axis(y0 + ((hz - frame.hz(x0)) / (frame.hz(x1) - frame.hz(x0))) * (y1 - y0));
+      });
+      const inner = points.filter(([x]) => frame.hz(x) >= fromHz && frame.hz(x) <= toHz).map(([, y]) => axis(y));
+      const within = [...ends, ...inner];
+      const spread = Math.max(...within) - Math.min(...within);
+      // A pixel is 0.3 to 0.5 ns.
+      expect(Math.abs(spread - 1e9 * row.predicted)).toBeLessThan(0.6);
+    }
+  });
+
+  it('marks the worst point of every rejection line in the picture where its row has it', () => {
+    const { markup } = responsePicture(design).wide.body;
+    const [frame, axis] = [frameOf(markup), levelAxis(markup, 0)];
+    const dots = [...markup.matchAll(/<circle cx="([\d.]+)" cy="([\d.]+)" r="3.6" class="f-ink/g)].map(
+      ([, x, y]) => [frame.hz(Number(x)), axis(Number(y))] as const,
+    );
+    const rows = design.mask.filter(({ line }) => 'rejectionDb' in line);
+    expect(dots).toHaveLength(rows.length);
+    for (const { worstHz, predicted } of rows)
+      expect(dots.some(([hz, db]) => Math.abs(hz - worstHz!) < 2e-4 * hz && Math.abs(db + predicted) < 0.2)).toBe(true);
+  });
+});
+
+/** Designs at the edges of what a file may ask for. */
+const HARD: readonly (readonly [string, Partial<SpecificationInput>])[] = [
+  ['order 1, no mask', { order: 1 }],
+  ['order 2', { order: 2, unloadedQ: 300 }],
+  ['order 40', { order: 40, returnLossDb: 26, transmissionZeros: [1.05, 1.2, -1.1], unloadedQ: 50_000 }],
+  ['Butterworth', { family: 'butterworth', returnLossDb: undefined, order: 5 }],
+  [
+    'complex zeros',
+    {
+      order: 6,
+      transmissionZeros: [
+        { re: 0.8, im: 0 },
+        { re: -0.8, im: 0 },
+      ],
+    },
+  ],
+  ['Q of each', { order: 4, unloadedQ: [1000, 2000, 3000, 4000] }],
+  ['heavy loss', { order: 8, unloadedQ: 60 }],
+  ['return loss 60 dB', { order: 5, returnLossDb: 60 }],
+  ['return loss 0.1 dB', { order: 5, returnLossDb: 0.1 }],
+  ['two-point sweep', { sweep: { fromHz: '0.9 GHz', toHz: '1.2 GHz', points: 2 } }],
+  ['sweep without the band', { sweep: { fromHz: '2 GHz', toHz: '3 GHz', points: 101 } }],
+  ['a band of hertz', { passband: { centerHz: 20, bandwidthHz: 0.002 }, unloadedQ: 1e6 }],
+  ['a band of an octave', { passband: { lowerHz: '1 GHz', upperHz: '2 GHz' } }],
+  [
+    'slopes, relative levels, open ends, misses',
+    {
+      order: 5,
+      unloadedQ: 700,
+      mask: [
+        { fromHz: '1.02 GHz', toHz: '1.05 GHz', rejectionDb: [20, 50], relativeTo: 'center' },
+        { fromHz: '1.04 GHz', rejectionDb: 95 },
+        { toHz: '0.1 GHz', rejectionDb: 200 },
+        { fromHz: '0.985 GHz', toHz: '0.985 GHz', rejectionDb: 30 },
+        { fromHz: '0.99 GHz', toHz: '1.01 GHz', insertionLossDb: [0.1, 0.2], relativeTo: 'center' },
+        { fromHz: '0.991 GHz', toHz: '1.009 GHz', insertionLossVariationDb: 0 },
+        { fromHz: '0.99 GHz', toHz: '1.01 GHz', returnLossDb: [30, 10] },
+        { fromHz: '0.95 GHz', toHz: '1.06 GHz', returnLossDb: 25 },
+        { fromHz: '0.999 GHz', toHz: '1.001 GHz', groupDelayVariationSeconds: 0 },
+        { fromHz: '0.99 GHz', toHz: '1.01 GHz', groupDelayVariationSeconds: 1e-12 },
+        { rejectionDb: 1, fromHz: '10 GHz', toHz: '20 GHz' },
+      ],
+    },
+  ],
+];
+
+describe.each(HARD)('hard case: %s', (_, more) => {
+  const design = sampleDesign(more);
+
+  it.each(DRAW.map((draw) => [draw.name, draw] as const))('%s draws without a hole, the same twice', (__, draw) => {
+    const picture = draw(design);
+    for (const { body, width, height } of [picture.wide, picture.narrow]) {
+      expect(body.markup).not.toMatch(/NaN|Infinity|undefined|null/);
+      for (const [, value] of body.markup.matchAll(/ (?:x|y|x1|x2|y1|y2|cx|cy)="(-?[\d.]+)"/g))
+        expect(Math.abs(Number(value))).toBeLessThan(5000);
+      expect(width).toBeGreaterThan(300);
+      expect(height).toBeGreaterThan(200);
+    }
+    expect(`${picture.finding}${picture.caption}${picture.alternative}`).not.toMatch(/NaN|Infinity|undefined/);
+    const again: Picture = draw(sampleDesign(more));
+    expect(again).toEqual(picture);
+  });
+});
+
+describe('what a missed limit looks like', () => {
+  const design = sampleDesign({
+    order: 3,
+    mask: [
+      { fromHz: '1.02 GHz', rejectionDb: 60 },
+      { fromHz: '0.992 GHz', toHz: '1.008 GHz', returnLossDb: 30 },
+    ],
+  });
+
+  it('has an octagon, the word short and a finding that says so', () => {
+    const { finding, wide } = responsePicture(design);
+    expect(finding).toMatch(/^Short of 2 limits; farthest [\d.]+ dB, at [\d.]+ MHz$/);
+    expect(wide.body.markup.match(/class="f-short s-window edge"/g)).toHaveLength(2);
+    expect(wide.body.markup).toMatch(/dB short</);
+  });
+});
+
+describe('the lit window', () => {
+  it('is the passband', () => {
+    const design = fixtureDesign('larkmoor');
+    const { lowerHz, upperHz } = edgesOfBand(design.specification.band);
+    const { markup } = responsePicture(design).wide.body;
+    const frame = frameOf(markup);
+    const [, x, , width] = /<rect x="([\d.]+)" y="([\d.]+)" width="([\d.]+)" height="[\d.]+" class="f-window"/.exec(
+      markup,
+    )!;
+    const pixel = frame.hz(1) - frame.hz(0);
+    expect(Math.abs(frame.hz(Number(x)) - lowerHz)).toBeLessThan(0.1 * pixel);
+    expect(Math.abs(frame.hz(Number(x) + Number(width)) - upperHz)).toBeLessThan(0.1 * pixel);
+    expect(hzFromOmega(design.specification.band, 1)).toBe(upperHz);
+  });
+});
