@@ -1,0 +1,88 @@
+import type { DesignReport } from '../../design-report.js';
+import type { DesignSource } from '../../files/result-json.js';
+import { type Drawing, inlineSvg } from '../../svg/drawing.js';
+import { element, fragment, type Markup } from '../../svg/markup.js';
+import { unitOf } from '../../words/numbers.js';
+import { NO_MASK } from '../../words/verdict.js';
+import { listedRequirements, pageVerdict } from '../content/requirements.js';
+import { conditionsText, KICKER, nameOf, SIGNATURES, titleCells, titleFacts } from '../content/title.js';
+import { requirementsMarkup } from './requirements-html.js';
+import { cellMarkup } from './table-html.js';
+import { sentenceSigns, spanSigns } from './typography.js';
+
+const DOT = ' \u00b7 ';
+
+/** The title strip: what this is, its own emblem, and the facts that tell one issue of it from another. */
+export function titleStrip(
+  design: DesignReport,
+  source: DesignSource | undefined,
+  emblem: Drawing | undefined,
+): Markup {
+  const cells = titleCells(design, source).map(({ head, value }) =>
+    element(
+      'div',
+      {},
+      element('dt', {}, head),
+      element(
+        'dd',
+        {},
+        cellMarkup(value, (text) => text),
+      ),
+    ),
+  );
+  const picture = emblem === undefined ? [] : [inlineSvg(emblem, 'Routing of this design, small', 'emblem')];
+  return element(
+    'header',
+    { class: 'title' },
+    element(
+      'div',
+      { class: 'name' },
+      element('p', { class: 'kicker' }, KICKER),
+      element(
+        'h1',
+        {},
+        cellMarkup(nameOf(design.specification), (text) => text),
+      ),
+      element('p', { class: 'facts' }, spanSigns(titleFacts(design.specification).join(DOT))),
+    ),
+    ...picture,
+    element('dl', { class: 'cells' }, ...cells),
+  );
+}
+
+/** The verdict: the answer, what is tightest, and the conditions under which it holds. */
+function verdictMarkup({ specification, mask }: DesignReport): Markup {
+  const verdict = pageVerdict(mask, unitOf(specification.band));
+  const isShort = verdict !== undefined && !verdict.isMet;
+  const nearest = verdict === undefined ? [] : [element('p', { class: 'nearest' }, sentenceSigns(verdict.nearest))];
+  return element(
+    'div',
+    { class: isShort ? 'verdict short' : 'verdict' },
+    element('h2', { id: 'verdict' }, verdict === undefined ? NO_MASK : verdict.answer),
+    ...nearest,
+    element('p', { class: 'conditions' }, conditionsText(specification)),
+  );
+}
+
+function signatureLines(): Markup {
+  return element('div', { class: 'signatures' }, ...SIGNATURES.map((who) => element('p', {}, who)));
+}
+
+/** The first page below its title: it answers before it explains. */
+export function firstPage(design: DesignReport, response: Markup | undefined): Markup {
+  const { specification, mask } = design;
+  const unit = unitOf(specification.band);
+  const table = mask.length === 0 ? [] : [requirementsMarkup(listedRequirements(mask, unit), unit)];
+  return element(
+    'section',
+    { class: 'first', 'aria-labelledby': 'verdict' },
+    verdictMarkup(design),
+    element(
+      'div',
+      { class: mask.length === 0 ? 'answer alone' : 'answer' },
+      ...(table.length === 0 ? [] : [element('div', { class: 'limits' }, ...table)]),
+      ...(response === undefined ? [] : [fragment(response)]),
+    ),
+    signatureLines(),
+  );
+}

@@ -1,0 +1,58 @@
+const CODE = 'ui-monospace,Consolas,"Liberation Mono","DejaVu Sans Mono",monospace';
+
+/** Tables: words left, numbers right with equal decimals, hairlines between rows and nothing else. */
+export const TABLES: string = `
+table{border-collapse:collapse;width:100%;font-size:15px;line-height:1.35}
+caption{text-align:left;font-weight:700;font-size:16px;padding-bottom:6px}
+th,td{padding:5px 0 5px 16px;text-align:right;font-weight:400;vertical-align:baseline;white-space:nowrap;
+border-bottom:1px solid var(--hairline)}
+th:first-child,td:first-child{padding-left:0}
+th:not(.n),td.l{text-align:left}
+thead th{color:var(--second);font-size:14px;vertical-align:bottom;border-bottom:1.5px solid var(--ink)}
+.unit{color:var(--second);font-size:13px}
+td.l{white-space:normal}
+tbody th:not(.n){white-space:normal}
+tr.tightest :is(th,td){font-weight:700}
+tr.negative :is(th,td){font-weight:700;color:var(--negative)}
+tr.short :is(th,td){color:var(--short);font-weight:700}
+.again{color:var(--second)}
+.tightest .again,.short .again{color:inherit}
+.note{font-size:14px;color:var(--second);margin-top:6px;max-width:68ch}
+.scroll{overflow-x:auto}
+.figures td{font:13px/1.35 ${CODE}}
+.figures td,.figures th.n{text-align:right}
+#matrix,[id^=matrix-]{width:auto}
+[id^=matrix] :is(th,td){font-size:14px}
+[id^=matrix] :is(th,td):not(:first-child){padding-left:14px}
+[id^=matrix] thead th:not(:first-child){text-align:right}
+.words td{white-space:normal;overflow-wrap:anywhere}
+.words tbody th{width:9em;color:var(--second);white-space:normal}
+#requirements :is(th,td):not(:first-child){padding-left:12px}
+#requirements td{vertical-align:middle}
+#requirements th{vertical-align:middle}
+#requirements thead th{vertical-align:bottom}
+#requirements .room{font-weight:700}
+#requirements tbody th{white-space:nowrap}
+#requirements .share{width:136px;text-align:left}
+#requirements thead .share .unit{display:block;padding-left:22px;font-size:13px}
+#requirements td.share{padding-block:0}
+.strip{display:block}
+.word{display:none}
+summary{cursor:pointer;font-weight:700;padding:4px 0;width:fit-content}
+details caption{font-size:0;padding:0}
+@media (max-width:639px){
+#requirements{display:block}
+#requirements thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
+#requirements tbody{display:block;border-top:1.5px solid var(--ink)}
+#requirements tbody tr{display:flex;flex-wrap:wrap;justify-content:space-between;column-gap:10px;padding:7px 0;
+border-bottom:1px solid var(--hairline)}
+#requirements tbody :is(th,td):is(th,td){border:0;padding:0;font-size:14.5px}
+#requirements tbody th{flex:1 1 60%;font-size:15px}
+#requirements .room{flex:0 0 auto;order:1;font-size:15px}
+#requirements .over{order:2}
+#requirements .limit{order:3}
+#requirements .predicted{order:4}
+#requirements .share{order:5;flex:0 0 124px;width:auto}
+#requirements .word{display:inline;color:var(--second);font-weight:400}
+th,td{padding-left:10px}}
+`.trim();
