@@ -97,7 +97,7 @@ export function bandPictureOf(design: DesignReport, data: CurveData): Picture {
  *   passband: { lowerHz: '3822 MHz', upperHz: '3858 MHz' }, order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.45],
  *   unloadedQ: 9000, mask: [{ fromHz: '3823 MHz', toHz: '3857 MHz', returnLossDb: 20 }],
  * }));
- * picture.finding; // 'Loss and match: clear of the limit; closest 2.3 dB, at 3840.0 MHz'
+ * picture.finding; // 'Loss and match: clear of the limit; least room: 2.3 dB, at 3840.0 MHz'
  */
 export function bandPicture(design: DesignReport): Picture {
   return bandPictureOf(design, curveData(design));

@@ -28,7 +28,7 @@ export function worstPoints(plot: Plot, mask: readonly MaskRow[], centerLossDb: 
       const x = xOf(plot, row.worstHz as number);
       return { requirement: requirementOf(row, plot.unit), x, y, isInside: y <= plot.bottom };
     })
-    .sort((a, b) => a.requirement.margin - b.requirement.margin);
+    .sort((a, b) => a.requirement.share - b.requirement.share);
 }
 
 /** A span as pictures write it. */

@@ -1,8 +1,8 @@
 import type { DesignReport } from '../../design-report.js';
 import type { Picture } from '../../svg/drawing.js';
 import { type FrequencyUnit, fixed, unitOf } from '../../words/numbers.js';
-import { type Requirement, requirementOf, roomText } from '../../words/requirement.js';
-import { NO_MASK, verdictOf } from '../../words/verdict.js';
+import { RELATIVE, type Requirement, requirementOf, roomText } from '../../words/requirement.js';
+import { NO_MASK, tightest, verdictOf } from '../../words/verdict.js';
 import { type CurveData, isInBand } from './curve-data.js';
 import { spanWords } from './flags.js';
 
@@ -14,17 +14,15 @@ function where({ at }: Requirement, unit: FrequencyUnit): string {
 
 /** What a frequency picture finds about some of the requirements: clear of every limit, or which is short. */
 export function limitFinding(requirements: readonly Requirement[], unit: FrequencyUnit): string {
-  // All are in one unit here, so room counts as it is; between units only its share of the limit can be compared.
-  const worst = [...requirements].sort((a, b) => a.margin - b.margin)[0];
+  const worst = tightest(requirements);
   if (worst === undefined) return 'No limits are asked for here';
   const short = requirements.filter(({ isMet }) => !isMet).length;
-  const room = roomText(worst.margin, worst.isMet, worst.unit);
-  if (short === 0) {
-    const limits = requirements.length === 1 ? 'the limit' : 'every limit';
-    return `Clear of ${limits}; closest ${room.replace(' clear', '')}, ${where(worst, unit)}`;
-  }
-  const many = short === 1 ? 'one limit' : `${short} limits`;
-  return `Short of ${many}; farthest ${room.replace(' short', '')}, ${where(worst, unit)}`;
+  const size = roomText(worst.margin, worst.isMet, worst.unit).replace(/ (clear|short)$/, '');
+  const isOneKind = requirements.every(({ name }) => name === worst.name);
+  const name = isOneKind ? '' : `${worst.name.replace(RELATIVE, '')} `;
+  const place = `${name}${size}, ${where(worst, unit)}`;
+  if (short === 0) return `Clear of ${requirements.length === 1 ? 'the limit' : 'every limit'}; least room: ${place}`;
+  return `Short of ${short === 1 ? 'one limit' : `${short} limits`}; farthest off: ${place}`;
 }
 
 /** Finding, caption and alternative of the response picture. */

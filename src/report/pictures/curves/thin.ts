@@ -4,20 +4,31 @@ export type Point = readonly [number, number];
 /** Largest distance, pixels, between a curve and its thinned form. */
 const TOLERANCE = 0.12;
 
-/** Square of the distance of `p` from the segment a-b. */
-function distanceSquared([px, py]: Point, [ax, ay]: Point, [bx, by]: Point): number {
-  const [dx, dy] = [bx - ax, by - ay];
-  const length = dx * dx + dy * dy;
-  const t = length === 0 ? 0 : Math.max(0, Math.min(1, ((px - ax) * dx + (py - ay) * dy) / length));
-  return (px - ax - t * dx) ** 2 + (py - ay - t * dy) ** 2;
+/** Coordinates in two arrays: this is the one loop of the pictures that thousands of points go through. */
+interface Track {
+  readonly xs: Float64Array;
+  readonly ys: Float64Array;
 }
 
-/** The point between two that lies farthest from the straight line through them. */
-function farthest(points: readonly Point[], from: number, to: number): { readonly at: number; readonly size: number } {
-  let [at, size] = [from, 0];
+/** The point between two that lies farthest from the segment through them, and the square of its distance. */
+function farthest({ xs, ys }: Track, from: number, to: number): { readonly at: number; readonly size: number } {
+  const ax = xs[from] as number;
+  const ay = ys[from] as number;
+  const dx = (xs[to] as number) - ax;
+  const dy = (ys[to] as number) - ay;
+  const length = dx * dx + dy * dy;
+  let at = from;
+  let size = 0;
   for (let n = from + 1; n < to; n += 1) {
-    const here = distanceSquared(points[n] as Point, points[from] as Point, points[to] as Point);
-    if (here > size) [at, size] = [n, here];
+    const px = (xs[n] as number) - ax;
+    const py = (ys[n] as number) - ay;
+    const share = length === 0 ? 0 : (px * dx + py * dy) / length;
+    const t = Math.min(Math.max(share, 0), 1);
+    const here = (px - t * dx) * (px - t * dx) + (py - t * dy) * (py - t * dy);
+    if (here > size) {
+      size = here;
+      at = n;
+    }
   }
   return { at, size };
 }
@@ -30,13 +41,14 @@ function farthest(points: readonly Point[], from: number, to: number): { readonl
  */
 export function thinned(points: readonly Point[]): readonly Point[] {
   if (points.length < 3) return points;
+  const track = { xs: Float64Array.from(points, ([x]) => x), ys: Float64Array.from(points, ([, y]) => y) };
   const keep = new Uint8Array(points.length);
   keep[0] = 1;
   keep[points.length - 1] = 1;
   const open: (readonly [number, number])[] = [[0, points.length - 1]];
   for (let next = open.pop(); next !== undefined; next = open.pop()) {
     const [from, to] = next;
-    const { at, size } = farthest(points, from, to);
+    const { at, size } = farthest(track, from, to);
     if (size <= TOLERANCE * TOLERANCE) continue;
     keep[at] = 1;
     open.push([from, at], [at, to]);
