@@ -1,6 +1,6 @@
 import type { Network } from './couplings.js';
 import type { Point } from './geometry.js';
-import { type Disc, disc, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
+import { type Disc, disc, portRadius, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
 import { offsetSpots } from './offset-spots.js';
 import type { Section } from './pattern.js';
 import { spotsAlong } from './place.js';
@@ -181,7 +181,7 @@ export function cascade(
   const at = positions(rows, { scale, radius, left, right: left + used, pitch });
   const discs = Array.from({ length: order + 2 }, (_, node): Disc => {
     const [x, y] = at.get(node) as Point;
-    return disc(node, x, y, node === 0 || node === order + 1 ? radius * (13 / 15) : radius);
+    return disc(node, x, y, node === 0 || node === order + 1 ? portRadius(radius) : radius);
   });
   const offsets = offsetSpots(discs, order, [width / 2, 1e6]);
   return { discs, routes: routesOf(network, at, sections, labelOff), offsets, isDense };

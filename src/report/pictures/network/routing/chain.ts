@@ -1,12 +1,15 @@
 import { type Arcs, arcsOf } from './arcs.js';
 import type { Link, Network } from './couplings.js';
 import type { Point } from './geometry.js';
-import type { Disc, Route, Sizing, Skeleton, Spot } from './layout.js';
+import { type Disc, portRadius, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
 import { offsetSpots } from './offset-spots.js';
 import { spotsAlong } from './place.js';
 
 /** Landings of arcs on one node lie so far apart, px. */
 const LANDING = 14;
+
+/** All bars of a column together are at most so long, px. */
+const LONGEST_BARS = 900;
 
 /** A chain along an axis, before it is laid to the right or downward. */
 interface Axis {
@@ -89,7 +92,7 @@ function figure(network: Network, arcs: Arcs, axis: Axis, isDense: boolean, labe
     const [x, y] = onPaper(along, 0, axis);
     const isPort = node === 0 || node === order + 1;
     const half = halfBar(node, arcs, axis);
-    const radius = isPort ? axis.radius * (13 / 15) : axis.radius;
+    const radius = isPort ? portRadius(axis.radius) : axis.radius;
     return { node, x, y, radius, reach: axis.turned ? [0, half] : [half, 0] };
   });
   const routes = links.map((link) =>
@@ -135,10 +138,11 @@ export function chainColumn(network: Network, sizing: Sizing): Skeleton {
   const first = Math.min(92, Math.max(width - left - 20, 20) / 2);
   const level = Math.min(20, (width - left - 16 - first) / Math.max(arcs.levels - 1, 1));
   const gap = (isLabelled ? 24 + 14 * mainLines : 32) + (hasOffsets ? 4 : 0);
+  const crowd = [...arcs.landings.values()].reduce((sum, each) => sum + each.length, 0);
   const axis = {
     turned: true,
     radius: isLabelled ? 13 : 11,
-    landing: LANDING,
+    landing: Math.min(LANDING, LONGEST_BARS / Math.max(crowd, 1)),
     gap,
     first,
     level,

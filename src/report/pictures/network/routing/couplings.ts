@@ -26,7 +26,7 @@ export interface Network {
 const PRINTED = 5e-5;
 
 /** Beyond so many cross couplings lines cover each other: the strongest are drawn. */
-const MOST_CROSS = 300;
+const MOST_CROSS = 150;
 
 /** The band that stands in where none is given: hand-over numbers are then not shown. */
 const NO_BAND: Band = { centerHz: 1, bandwidthHz: 1 };

@@ -7,7 +7,7 @@ import { drawn } from './draw.js';
 import { fan } from './fan.js';
 import { foldedRows } from './folded.js';
 import { boxAround, type Point } from './geometry.js';
-import type { Layout, Sizing, Skeleton } from './layout.js';
+import { type Layout, portRadius, type Sizing, type Skeleton } from './layout.js';
 import { patternOf } from './pattern.js';
 import { placeLozenges } from './place.js';
 
@@ -76,7 +76,7 @@ export function emblemLayout(network: Network): Layout {
   ];
   const small = discs.map((disc) => {
     const [x, y] = moved([disc.x, disc.y]);
-    const own = disc.node === 0 || disc.node === network.order + 1 ? radius * (13 / 15) : radius;
+    const own = disc.node === 0 || disc.node === network.order + 1 ? portRadius(radius) : radius;
     return { ...disc, x, y, radius: own, reach: [disc.reach[0] * scaleX, disc.reach[1] * scaleY] as const };
   });
   const ways = routes.map((route) => ({ ...route, points: route.points.map(moved), marks: route.marks.map(moved) }));

@@ -1,6 +1,6 @@
 import type { Link, Network } from './couplings.js';
 import { normalOf, type Point } from './geometry.js';
-import { type Disc, disc, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
+import { type Disc, disc, portRadius, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
 import { offsetSpots } from './offset-spots.js';
 import { spotsAlong } from './place.js';
 
@@ -63,7 +63,7 @@ function discsOf({ order }: Network, grid: Grid): Disc[] {
   return Array.from({ length: order + 2 }, (_, node) => {
     const isPort = node === 0 || node === order + 1;
     const [x, y] = pointOf(node, order, grid);
-    return disc(node, x, y, isPort ? grid.radius * (13 / 15) : grid.radius);
+    return disc(node, x, y, isPort ? portRadius(grid.radius) : grid.radius);
   });
 }
 

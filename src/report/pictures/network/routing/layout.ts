@@ -82,6 +82,11 @@ export interface Sizing {
   readonly hasOffsets: boolean;
 }
 
+/** Ports are a little smaller than resonators, unless these are small already. */
+export function portRadius(radius: number): number {
+  return radius < 12 ? radius : radius * (13 / 15);
+}
+
 /** A disc without a reach. */
 export function disc(node: number, x: number, y: number, radius: number): Disc {
   return { node, x, y, radius, reach: [0, 0] };

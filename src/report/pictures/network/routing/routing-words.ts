@@ -6,7 +6,9 @@ import { couplingText, MOST_LABELLED, offsetText, type Wording } from './label-t
 import type { Layout } from './layout.js';
 import { patternOf } from './pattern.js';
 
-const pairName = ({ from, to }: Link, order: number): string => `${nodeName(from, order)}–${nodeName(to, order)}`;
+/** Two nodes that are coupled. */
+export const pairName = ({ from, to }: Pick<Link, 'from' | 'to'>, order: number): string =>
+  `${nodeName(from, order)}–${nodeName(to, order)}`;
 
 function crossWords({ order, links }: Network): string {
   const cross = links.filter(({ isMain }) => !isMain);
@@ -48,7 +50,8 @@ export function findingOf(network: Network): string {
 
 function tuningWords(wording: Wording, band: Band | undefined): string {
   const detuned = wording.network.detuning.filter((_, n) => offsetText(n + 1, wording) !== undefined).length;
-  if (detuned > 0 && wording.network.order > MOST_LABELLED) return `${detuned} resonators are detuned`;
+  if (detuned > 0 && wording.network.order > MOST_LABELLED)
+    return detuned === 1 ? 'one resonator is detuned' : `${detuned} resonators are detuned`;
   if (detuned > 0)
     return band === undefined
       ? 'M at a resonator: its detuning, positive tunes below the center'
@@ -63,7 +66,10 @@ function omissions({ network }: Wording, layouts: readonly Layout[]): string[] {
   const words: string[] = [];
   if (network.order > MOST_LABELLED) words.push('only cross couplings carry a number');
   if (dropped > 0) words.push('numbers without room stand in the table only');
-  if (network.hidden > 0) words.push(`${network.hidden} weaker couplings are not drawn`);
+  if (network.hidden > 0)
+    words.push(
+      network.hidden === 1 ? 'one weaker coupling is not drawn' : `${network.hidden} weaker couplings are not drawn`,
+    );
   return words;
 }
 
