@@ -1,7 +1,16 @@
 import { createHash } from 'node:crypto';
 import { resolve } from 'node:path';
 import { designChecked } from '../design.js';
-import { handOverCsv, matrixCsv, responseText, resultJson, summaryText } from '../report/index.js';
+import {
+  documentParts,
+  handOverCsv,
+  matrixCsv,
+  reportFileNames,
+  reportFiles,
+  responseText,
+  resultJson,
+  summaryText,
+} from '../report/index.js';
 import { decodeUtf8, parseSpecification } from '../specification/index.js';
 import type { CommandShape, CommandWords } from './arguments.js';
 import { EXIT, Interrupted } from './failures.js';
@@ -9,10 +18,13 @@ import { folderBeside, type OutputFolder, RESULT_NAME, settleFolder } from './fi
 import { type InputFile, readInput } from './files/read-input.js';
 import { ioFailure, shownPath } from './files/trouble.js';
 import { type OutputFile, replaceFiles, writeNewFolder } from './files/write-folder.js';
-import { progressOf } from './progress.js';
+import { type Progress, progressOf } from './progress.js';
 import type { World } from './world.js';
 
-const NAMES = ['matrix.csv', 'hand-over.csv', 'response.s2p', RESULT_NAME] as const;
+/** Names of the files with numbers; the last tells that all others are there. */
+const NUMBER_NAMES = ['matrix.csv', 'hand-over.csv', 'response.s2p', RESULT_NAME] as const;
+
+const WIDTH = 80;
 
 /** What `irisloom design` accepts. */
 export const DESIGN_SHAPE: CommandShape = {
@@ -23,25 +35,32 @@ export const DESIGN_SHAPE: CommandShape = {
 /** Everything a design file leads to, before any of it is written. */
 interface Results {
   readonly summary: string;
+  /** In the order in which they are told. */
+  readonly names: readonly string[];
   readonly outputs: (toDesign: string) => readonly OutputFile[];
 }
 
-function resultsOf({ bytes }: InputFile, world: World): Results {
-  const progress = progressOf(world);
+function resultsOf({ bytes }: InputFile, world: World, progress: Progress): Results {
   const specification = parseSpecification(decodeUtf8(bytes));
   const design = designChecked(specification);
   progress.step('Predicting the response');
   const response = responseText(design);
-  progress.end();
+  progress.step('Drawing the pictures');
+  const parts = documentParts(design);
   const sha256 = createHash('sha256').update(bytes).digest('hex');
   return {
     summary: summaryText(design, world.paint),
-    outputs: (toDesign) => [
-      { name: 'matrix.csv', text: matrixCsv(design.matrix) },
-      { name: 'hand-over.csv', text: handOverCsv(design) },
-      { name: 'response.s2p', text: response },
-      { name: RESULT_NAME, text: resultJson(design, { file: toDesign, sha256 }) },
-    ],
+    names: [...reportFileNames(parts), ...NUMBER_NAMES],
+    outputs: (toDesign) => {
+      const source = { file: toDesign, sha256 };
+      return [
+        ...reportFiles(design, source, parts),
+        { name: 'matrix.csv', text: matrixCsv(design.matrix) },
+        { name: 'hand-over.csv', text: handOverCsv(design) },
+        { name: 'response.s2p', text: response },
+        { name: RESULT_NAME, text: resultJson(design, source) },
+      ];
+    },
   };
 }
 
@@ -62,22 +81,44 @@ async function write(world: World, place: OutputFolder, outputs: readonly Output
   }
 }
 
-/** `irisloom design`: from a design file to a folder of results and a summary. */
-export async function designCommand(words: CommandWords, world: World): Promise<number> {
-  const [path = ''] = words.operands;
-  const input = await readInput(world.files, world.folder, path);
-  const results = resultsOf(input, world);
-  const wanted = words.values.get('out') ?? folderBeside(path);
+/** Names in lines that fit a terminal. */
+function namesText(names: readonly string[]): string {
+  const lines: string[] = [];
+  for (const name of names) {
+    const longer = lines.length === 0 ? '' : `${lines.at(-1)}, ${name}`;
+    if (longer !== '' && longer.length < WIDTH) lines[lines.length - 1] = longer;
+    else lines.push(`  ${name}`);
+  }
+  return lines.map((line, n) => `${line}${n === lines.length - 1 ? '' : ','}\n`).join('');
+}
+
+async function writeResults(results: Results, input: InputFile, words: CommandWords, world: World): Promise<string> {
+  const wanted = words.values.get('out') ?? folderBeside(words.operands[0] ?? '');
   try {
     const absolute = resolve(world.folder, wanted);
     const mayOverwrite = words.flags.has('overwrite');
-    const request = { input: input.path, wanted, absolute, names: NAMES, mayOverwrite };
+    const request = { input: input.path, wanted, absolute, names: results.names, mayOverwrite };
     const place = await settleFolder(world.files, request);
     await write(world, place, results.outputs(place.toDesign));
+    return wanted;
   } catch (error) {
     throw ioFailure(error, wanted, 'writing the results');
   }
-  const names = NAMES.map((name) => `  ${name}`).join('\n');
-  world.stdout.write(`${results.summary}\nWritten to ${shownPath(wanted)}:\n${names}\n`);
+}
+
+/** `irisloom design`: from a design file to a folder of results and a summary. */
+export async function designCommand(words: CommandWords, world: World): Promise<number> {
+  const input = await readInput(world.files, world.folder, words.operands[0] ?? '');
+  const progress = progressOf(world);
+  try {
+    const results = resultsOf(input, world, progress);
+    progress.step('Writing the results');
+    const folder = await writeResults(results, input, words, world);
+    progress.end();
+    world.stdout.write(`${results.summary}\nWritten to ${shownPath(folder)}:\n${namesText(results.names)}`);
+  } finally {
+    // What was told must be gone before a refusal is told.
+    progress.end();
+  }
   return EXIT.done;
 }

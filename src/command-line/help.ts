@@ -36,11 +36,16 @@ written.
 Design file, the least:
   { "passband": { "lowerHz": "3822 MHz", "upperHz": "3858 MHz" },
     "order": 6, "returnLossDb": 22 }
-Further keys: name, notes, family, transmissionZeros, topology, portCouplings,
-unloadedQ, mask, sweep. Frequencies are text with a unit or numbers of hertz.
+Further keys: name, notes, revision, date, family, transmissionZeros, topology,
+portCouplings, unloadedQ, mask, sweep. Frequencies are text with a unit or
+numbers of hertz.
 "irisloom schema" describes every key.
 
 Results:
+  report.html    everything for people: verdict, pictures, tables, evidence; one
+                 file that opens and prints without a network
+  report.md      the same as Markdown, with links to the pictures
+  *.svg          the pictures, one file each
   result.json    everything, every digit, with the version, the design file and
                  its SHA-256 digest
   matrix.csv     the coupling matrix

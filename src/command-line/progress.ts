@@ -24,6 +24,7 @@ export function progressOf({ stderr, now }: World): Progress {
     },
     end: () => {
       if (shown > 0) stderr.write(`\r${' '.repeat(shown)}\r`);
+      shown = 0;
     },
   };
 }

@@ -5,6 +5,12 @@
  *  Source   Y. Shafranovich, RFC 4180, 2005 (CSV); OWASP, CSV Injection (guarded cells); both from memory */
 
 export type { DesignReport } from './design-report.js';
+export type { DocumentParts } from './document/html/document-html.js';
+export { documentParts } from './document/parts.js';
+export type { ReportFile } from './document/report-files.js';
+export { reportFileNames, reportFiles } from './document/report-files.js';
+export { reportHtml } from './document/report-html.js';
+export { reportMarkdown } from './document/report-markdown.js';
 export { csvCell, csvText } from './files/csv.js';
 export { handOverCsv } from './files/hand-over-csv.js';
 export { jsonText } from './files/json-text.js';

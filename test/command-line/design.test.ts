@@ -2,13 +2,12 @@ import { createHash } from 'node:crypto';
 import { cpSync, mkdirSync, readFileSync, renameSync, symlinkSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { fill, folderWith, freshFolder, running, SMALL, snapshot } from './room.js';
+import { fill, folderWith, freshFolder, RESULT_NAMES as NAMES, running, SMALL, snapshot } from './room.js';
 
-const NAMES = ['hand-over.csv', 'matrix.csv', 'response.s2p', 'result.json'];
 const fixtures = new URL('../../fixtures/designs/', import.meta.url).pathname;
 
 describe('irisloom design', () => {
-  it.each(['larkmoor', 'tern-quay', 'brackwater'])('makes the four files of %s and a summary', async (name) => {
+  it.each(['larkmoor', 'tern-quay', 'brackwater'])('makes the files of %s and a summary', async (name) => {
     const folder = freshFolder();
     cpSync(join(fixtures, `${name}.json`), join(folder, `${name}.json`));
     const { status, stdout, stderr } = await running(folder, ['design', `${name}.json`]);
@@ -17,9 +16,15 @@ describe('irisloom design', () => {
       [`${name}.json`, `${name}-design`, ...NAMES.map((file) => `${name}-design/${file}`)].sort(),
     );
     expect(stdout).toContain('Meets all 9 requirements.');
+    const [, told = ''] = stdout.split(`Written to ${name}-design:\n`);
+    expect(told.startsWith('  report.html, report.md, response.svg, ')).toBe(true);
+    expect(told.endsWith(', result.json\n')).toBe(true);
     expect(
-      stdout.endsWith(`Written to ${name}-design:\n  matrix.csv\n  hand-over.csv\n  response.s2p\n  result.json\n`),
-    ).toBe(true);
+      told
+        .split(/[\s,]+/)
+        .filter((file) => file !== '')
+        .sort(),
+    ).toEqual(NAMES);
     expect(stdout.split('\n').filter((line) => line.length > 80)).toEqual([]);
   });
 
@@ -30,8 +35,12 @@ describe('irisloom design', () => {
     const text = readFileSync(join(folder, 'deep/results/result.json'), 'utf8');
     const sha256 = createHash('sha256').update(JSON.stringify(SMALL)).digest('hex');
     expect(JSON.parse(text).source).toEqual({ file: '../../one.json', sha256 });
-    expect(text).not.toContain(folder);
-    expect(text).not.toMatch(/20\d\d-\d\d/);
+    for (const each of Object.values(snapshot(join(folder, 'deep/results')))) {
+      expect(each).not.toContain(folder);
+      expect(each).not.toMatch(/20\d\d-\d\d/);
+    }
+    const page = readFileSync(join(folder, 'deep/results/report.html'), 'utf8');
+    for (const told of ['../../one.json', sha256, sha256.slice(0, 12)]) expect(page).toContain(told);
   });
 
   it('gives the same bytes twice, in another folder too', async () => {
@@ -161,6 +170,35 @@ describe('irisloom design', () => {
     expect(texts).toEqual([]);
     await running(folder, ['design', 'one.json'], { stderr, now: () => (time += 600) });
     expect(texts.join('')).toContain('Predicting the response');
+    expect(texts.join('')).toContain('Drawing the pictures');
+    expect(texts.join('')).toContain('Writing the results');
     expect(texts.at(-1)).toMatch(/^\r +\r$/);
+    texts.splice(0);
+    await running(folder, ['design', 'one.json'], {
+      stderr: { ...stderr, isTerminal: false },
+      now: () => (time += 600),
+    });
+    expect(texts).toEqual([]);
+  });
+
+  it('clears what it was doing before it tells a refusal', async () => {
+    const folder = folderWith(SMALL);
+    const texts: string[] = [];
+    let time = 0;
+    const stderr = { write: (text: string) => texts.push(text), isTerminal: true };
+    const args = ['design', 'one.json', '--out', 'no/where'];
+    const { status } = await running(folder, args, { stderr, now: () => (time += 600) });
+    expect(status).toBe(4);
+    expect(texts.at(-2)).toMatch(/^\r +\r$/);
+    expect(texts.at(-1)).toMatch(/^E_IO /);
+  });
+
+  it('tells the names of many files in lines of 80 columns, each once', async () => {
+    const folder = folderWith(SMALL);
+    const { stdout } = await running(folder, ['design', 'one.json']);
+    const lines = stdout.slice(stdout.indexOf('Written to')).trimEnd().split('\n').slice(1);
+    expect(lines.length).toBeLessThan(4);
+    expect(lines.filter((line) => line.length > 80 || !line.startsWith('  '))).toEqual([]);
+    expect(lines.slice(0, -1).every((line) => line.endsWith(','))).toBe(true);
   });
 });

@@ -1,7 +1,7 @@
-import { writeFileSync } from 'node:fs';
+import { cpSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { folderWith, running, SMALL, snapshot, watchedFiles } from './room.js';
+import { folderWith, freshFolder, RESULT_NAMES, running, SMALL, snapshot, watchedFiles } from './room.js';
 
 const CODES = ['ENOSPC', 'EACCES', 'EIO', 'EXDEV'] as const;
 const LEAST = { ...SMALL, order: 1, sweep: { ...SMALL.sweep, points: 2 } };
@@ -23,13 +23,25 @@ function failingAt(k: number, code: string) {
 const visible = (folder: string) =>
   Object.fromEntries(Object.entries(snapshot(folder)).filter(([path]) => !/(^|\/)\./.test(path)));
 
+/** A folder of results of an earlier version of the design file, made once and copied. */
+let earlier: Promise<string> | undefined;
+
+async function writtenBefore(): Promise<string> {
+  const folder = folderWith({ ...LEAST, returnLossDb: 10 });
+  await running(folder, ['design', 'one.json']);
+  writeFileSync(join(folder, 'one.json'), JSON.stringify(LEAST));
+  return folder;
+}
+
 /** Folder with a design file, and with results of an earlier version of it when they are to be replaced. */
 async function prepared(isReplaced: boolean): Promise<{ folder: string; before: Record<string, string> }> {
-  const folder = folderWith(isReplaced ? { ...LEAST, returnLossDb: 10 } : LEAST);
-  if (isReplaced) {
-    await running(folder, ['design', 'one.json']);
-    writeFileSync(join(folder, 'one.json'), JSON.stringify(LEAST));
+  if (!isReplaced) {
+    const folder = folderWith(LEAST);
+    return { folder, before: visible(folder) };
   }
+  earlier ??= writtenBefore();
+  const folder = freshFolder();
+  cpSync(await earlier, folder, { recursive: true });
   return { folder, before: visible(folder) };
 }
 
@@ -73,7 +85,7 @@ describe.each([
 ])('an interrupt while %s is written', (_, isReplaced) => {
   it('leaves all or nothing, at any call', async () => {
     const outcomes = new Set<number>();
-    for (let k = 1; k <= 60; k += 1) {
+    for (let k = 1; k <= 160; k += 1) {
       const { folder, before } = await prepared(isReplaced);
       let interrupt = () => {};
       let calls = 0;
@@ -92,7 +104,8 @@ describe.each([
       if (status === 130) {
         expect(stdout).toBe('');
         expect(snapshot(folder)).toEqual(before);
-      } else expect(Object.keys(snapshot(folder)).filter((path) => path.includes('/'))).toHaveLength(4);
+      } else
+        expect(Object.keys(snapshot(folder)).filter((path) => path.includes('/'))).toHaveLength(RESULT_NAMES.length);
     }
     expect([...outcomes].sort()).toEqual([0, 130]);
   });

@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { readTwoPort } from '../measurement/read-two-port.js';
 import { start, useProgram } from './program.js';
-import { folderWith, snapshot } from './room.js';
+import { folderWith, RESULT_NAMES, snapshot } from './room.js';
 
 const program = useProgram();
 const POINTS = 10_001;
@@ -19,6 +19,9 @@ function expectWhole(folder: string): void {
   expect(JSON.parse(readFileSync(join(folder, 'result.json'), 'utf8')).matrix.order).toBe(6);
   expect(readFileSync(join(folder, 'matrix.csv'), 'utf8').split('\r\n')).toHaveLength(10);
   expect(readFileSync(join(folder, 'hand-over.csv'), 'utf8').endsWith('\r\n')).toBe(true);
+  expect(readFileSync(join(folder, 'report.html'), 'utf8').endsWith('</html>\n')).toBe(true);
+  for (const name of RESULT_NAMES.filter((each) => each.endsWith('.svg')))
+    expect(readFileSync(join(folder, name), 'utf8').endsWith('</svg>\n'), name).toBe(true);
   expect(readTwoPort(readFileSync(join(folder, 'response.s2p'), 'utf8')).records).toHaveLength(POINTS);
 }
 
@@ -68,7 +71,7 @@ describe('the program as a process', () => {
     expect(killed).toBeGreaterThan(5);
     await fullTime(folder);
     const names = readdirSync(join(folder, 'one-design')).sort();
-    expect(names).toEqual(['hand-over.csv', 'matrix.csv', 'response.s2p', 'result.json']);
+    expect(names).toEqual(RESULT_NAMES);
   });
 
   it('ends cleanly when the user interrupts', async () => {

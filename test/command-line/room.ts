@@ -25,6 +25,19 @@ export const SMALL = {
   sweep: { fromHz: '0.9 GHz', toHz: '1.1 GHz', points: 3 },
 };
 
+/** Files that a design leads to, sorted. */
+export const RESULT_NAMES: readonly string[] = [
+  'band.svg',
+  'group-delay.svg',
+  'hand-over.csv',
+  'matrix.csv',
+  'report.html',
+  'report.md',
+  'response.s2p',
+  'response.svg',
+  'result.json',
+];
+
 const made: string[] = [];
 afterAll(() => {
   for (const folder of made) rmSync(folder, { recursive: true, force: true });

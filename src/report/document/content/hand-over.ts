@@ -106,7 +106,7 @@ export function portTable(report: DesignReport): Table {
       tones: cells[1]?.startsWith('-') === true ? ['negative'] : [],
     }),
   );
-  const note = `${nodeName(0, matrix.order)} is the source, ${nodeName(matrix.order + 1, matrix.order)} the load. Peak delay is that of the reflected signal with all other resonators detuned.`;
+  const note = `${nodeName(0, matrix.order)} is the source, ${nodeName(matrix.order + 1, matrix.order)} the load. Peak delay is that of the reflected signal with all other resonators shorted.`;
   const alone = ' Where a port touches several resonators, each value is that of one coupling alone.';
   return {
     id: 'ports',
