@@ -166,7 +166,7 @@ describe('irisloom design', () => {
     const stderr = { write: (text: string) => texts.push(text), isTerminal: true };
     await running(folder, ['design', 'one.json'], { stderr });
     expect(texts).toEqual([]);
-    await running(folder, ['design', 'one.json'], { stderr, now: () => (time += 400) });
+    await running(folder, ['design', 'one.json'], { stderr, now: () => (time += 160) });
     expect(texts).toEqual([]);
     await running(folder, ['design', 'one.json'], { stderr, now: () => (time += 600) });
     expect(texts.join('')).toContain('Predicting the response');
