@@ -4,10 +4,24 @@ import { bandPictureOf } from './curves/band-picture.js';
 import { type CurveData, curveData } from './curves/curve-data.js';
 import { groupDelayPictureOf } from './curves/group-delay-picture.js';
 import { responsePictureOf } from './curves/response-picture.js';
+import { matrixPicture } from './network/matrix/matrix-picture.js';
+import { polesAndZerosPicture } from './network/poles-zeros/poles-zeros-picture.js';
+import { resonatorPicture } from './network/resonators/resonator-picture.js';
+import { routingPicture } from './network/routing/routing-picture.js';
 
 /** The pictures of a design in the order of its document, from curves that are there already. */
 export function designPicturesOf(design: DesignReport, data: CurveData): readonly Picture[] {
-  return [responsePictureOf(design, data), bandPictureOf(design, data), groupDelayPictureOf(design, data)];
+  const { matrix, polynomials, specification } = design;
+  const { band } = specification;
+  return [
+    responsePictureOf(design, data),
+    bandPictureOf(design, data),
+    groupDelayPictureOf(design, data),
+    routingPicture(matrix, band),
+    polesAndZerosPicture(polynomials),
+    matrixPicture(matrix),
+    resonatorPicture(matrix, band),
+  ];
 }
 
 /**
