@@ -31,11 +31,15 @@ export const RESULT_NAMES: readonly string[] = [
   'group-delay.svg',
   'hand-over.csv',
   'matrix.csv',
+  'matrix.svg',
+  'poles-zeros.svg',
   'report.html',
   'report.md',
+  'resonators.svg',
   'response.s2p',
   'response.svg',
   'result.json',
+  'routing.svg',
 ];
 
 const made: string[] = [];

@@ -5,7 +5,8 @@ import { CONVENTIONS, cautionsOf } from '../../words/conventions.js';
 import { sizeText, unitOf } from '../../words/numbers.js';
 import { bandText, levelText, qualityText, zerosText } from '../../words/title.js';
 import { counted } from '../../words/verdict.js';
-import { type Block, type Cell, numberColumn, type Row, type Table, textColumn } from './content.js';
+import { type Block, numberColumn, type Row, type Table, textColumn } from './content.js';
+import { userLines, userText } from './user-text.js';
 
 /** The limit with the side on which a value may lie; a count that must be met exactly has none. */
 function limitText({ value, limit, holds }: Certificate): string {
@@ -74,17 +75,13 @@ export function powerBlock(): Block {
   };
 }
 
-function passesText(line: string | undefined): readonly Cell[] {
-  return line === undefined || line === '' ? [] : [{ user: line }];
-}
-
 /** The design file, as it was understood. */
 export function inputTable({ specification }: DesignReport, source?: DesignSource): Table {
   const { name, revision, date, band, family, order, returnLossDb, topology, portCouplings, unloadedQ, mask, sweep } =
     specification;
   const unit = unitOf(band);
   const optional = (head: string, line: string | undefined): readonly Row[] =>
-    passesText(line).map((value) => ({ cells: [head, value] }));
+    line === undefined || line === '' ? [] : [{ cells: [head, userText(line)] }];
   const stated = (head: string, value: string): Row => ({ cells: [head, value] });
   const hertz = (value: number): string => String(Number((value / unit.hertz).toPrecision(12)));
   return {
@@ -113,9 +110,8 @@ export function inputTable({ specification }: DesignReport, source?: DesignSourc
 
 /** Notes of the user and remarks of the reader of the design file, where there are any. */
 export function remarkBlocks({ specification: { notes, remarks } }: DesignReport): readonly Block[] {
-  const lines = (notes ?? '').split(/\r\n|[\r\n]/).filter((line) => line.trim() !== '');
-  const own: readonly Block[] =
-    lines.length === 0 ? [] : [{ kind: 'text', head: 'Notes', sentences: lines.map((user) => ({ user })) }];
+  const lines = userLines(notes ?? '');
+  const own: readonly Block[] = lines.length === 0 ? [] : [{ kind: 'text', head: 'Notes', sentences: lines }];
   const read: readonly Block[] =
     remarks.length === 0 ? [] : [{ kind: 'list', head: 'Remarks on the input', items: remarks }];
   return [...own, ...read];

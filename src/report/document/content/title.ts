@@ -5,6 +5,7 @@ import type { DesignSource } from '../../files/result-json.js';
 import { frequencyText, unitOf } from '../../words/numbers.js';
 import { qualityText, UNNAMED } from '../../words/title.js';
 import type { Cell } from './content.js';
+import { userText } from './user-text.js';
 
 /** Digits of the digest that are enough to tell two design files apart on paper. */
 const DIGEST = 12;
@@ -27,7 +28,13 @@ function many(count: number, what: string): string {
 
 /** The name of a design. */
 export function nameOf({ name }: Specification): Cell {
-  return name === undefined || name === '' ? UNNAMED : { user: name };
+  return name === undefined || name === '' ? UNNAMED : userText(name);
+}
+
+/** The name for the head of a window. */
+export function windowTitle(specification: Specification): string {
+  const name = nameOf(specification);
+  return `${typeof name === 'string' ? name : name.user}: band-pass filter design`;
 }
 
 /** Band, order, zeros and topology; a hyphen between two numbers is a span. */
@@ -47,7 +54,7 @@ export function titleFacts({ band, order, transmissionZeros, topology }: Specifi
 export function titleCells({ specification, version }: DesignReport, source?: DesignSource): readonly TitleCell[] {
   const { revision, date } = specification;
   return [
-    ...(revision === undefined || revision === '' ? [] : [{ head: 'Revision', value: { user: revision } }]),
+    ...(revision === undefined || revision === '' ? [] : [{ head: 'Revision', value: userText(revision) }]),
     ...(date === undefined ? [] : [{ head: 'Date', value: date }]),
     ...(source === undefined ? [] : [{ head: 'Input digest', value: source.sha256.slice(0, DIGEST) }]),
     { head: 'Made with', value: `irisloom ${version}` },

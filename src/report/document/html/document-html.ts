@@ -3,9 +3,9 @@ import type { DesignSource } from '../../files/result-json.js';
 import type { Drawing, Picture } from '../../svg/drawing.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
 import { unitOf } from '../../words/numbers.js';
-import { UNNAMED } from '../../words/title.js';
 import type { Sheet } from '../content/content.js';
 import { sheetsOf } from '../content/sheets.js';
+import { windowTitle } from '../content/title.js';
 import { READOUT_SCRIPT } from '../script/readout-script.js';
 import { DOCUMENT_STYLE } from '../style/document-style.js';
 import { figureMarkup } from './figure-html.js';
@@ -24,7 +24,7 @@ export interface DocumentParts {
 
 const LOSSLESS_LABEL = 'Lossless curves in every picture';
 
-function headMarkup({ specification: { name } }: DesignReport): Markup {
+function headMarkup({ specification }: DesignReport): Markup {
   return element(
     'head',
     {},
@@ -32,7 +32,7 @@ function headMarkup({ specification: { name } }: DesignReport): Markup {
     element('meta', { 'http-equiv': 'Content-Security-Policy', content: POLICY }),
     element('meta', { name: 'referrer', content: 'no-referrer' }),
     element('meta', { name: 'viewport', content: 'width=device-width, initial-scale=1' }),
-    element('title', {}, `${name === undefined || name === '' ? UNNAMED : name}: band-pass filter design`),
+    element('title', {}, windowTitle(specification)),
     element('style', {}, { markup: DOCUMENT_STYLE }),
   );
 }
