@@ -40,6 +40,25 @@ export type { NumberList, ReImSamples, TwoPortData } from './measurement/index.j
 export { formatTouchstone } from './measurement/index.js';
 export type { FailureDetail, PolynomialRoot } from './numerics/index.js';
 export { FilterFailure, polynomialRoots } from './numerics/index.js';
+export type { DesignReport, DesignSource, Drawing, Markup, Paint, Picture } from './report/index.js';
+export {
+  bandPicture,
+  designPictures,
+  groupDelayPicture,
+  handOverCsv,
+  matrixCsv,
+  matrixPicture,
+  pictureSvg,
+  polesAndZerosPicture,
+  reportHtml,
+  reportMarkdown,
+  resonatorPicture,
+  responsePicture,
+  responseText,
+  resultJson,
+  routingPicture,
+  summaryText,
+} from './report/index.js';
 export type { ComplexSamples, Curves, Model, Sweep, SweepOptions } from './response/index.js';
 export { scatteringAt, sweep } from './response/index.js';
 export type {

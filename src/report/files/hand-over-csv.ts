@@ -50,6 +50,10 @@ function portRows({ specification, matrix, handOver }: DesignReport): readonly (
 /**
  * The hand-over numbers as one table: a row for each resonator, each coupling between resonators, each coupling of a port,
  * and the direct coupling of source and load. Units stand in the head row; a cell that has no meaning in its row is empty.
+ *
+ * @example
+ * const table = handOverCsv(design({ passband: { centerHz: '1 GHz', bandwidthHz: '20 MHz' }, order: 4, returnLossDb: 20 }));
+ * table.split('\r\n')[0]?.startsWith('kind,from,to,M,k,'); // true
  */
 export function handOverCsv(report: DesignReport): string {
   const { specification, matrix, handOver } = report;

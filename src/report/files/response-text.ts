@@ -56,7 +56,13 @@ function commentsOf({ version, specification }: DesignReport): readonly string[]
   ];
 }
 
-/** Text of the two-port data file with the response that the matrix predicts, loss included. */
+/**
+ * Text of the two-port data file with the response that the matrix predicts, loss included.
+ *
+ * @example
+ * const text = responseText(design({ passband: { centerHz: '1 GHz', bandwidthHz: '20 MHz' }, order: 4, returnLossDb: 20 }));
+ * text.includes('# Hz S RI R 50'); // true
+ */
 export function responseText(report: DesignReport): string {
   const { band, unloadedQ } = report.specification;
   const lossy = unloadedQ === undefined ? band : { ...band, unloadedQ };

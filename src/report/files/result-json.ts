@@ -11,6 +11,11 @@ export interface DesignSource {
 /**
  * A whole design as JSON text: everything `design` returned, with every digit, its version and its source first. No clock
  * and no absolute path is in it: the same design file gives the same bytes.
+ *
+ * @example
+ * const result = design({ passband: { centerHz: '1 GHz', bandwidthHz: '20 MHz' }, order: 4, returnLossDb: 20 });
+ * const text = resultJson(result, { file: '../filter.json', sha256: '0'.repeat(64) });
+ * JSON.parse(text).source.file; // '../filter.json'
  */
 export function resultJson(design: DesignReport, source: DesignSource): string {
   const { version, ...rest } = design;

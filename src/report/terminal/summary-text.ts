@@ -15,6 +15,10 @@ const LARGEST_MATRIX = 10;
  * A design as a person reads it in ten seconds: what it is, whether it meets its mask and where it is tightest, then the
  * mask line by line, the hand-over numbers, the matrix, what was certified, and the conventions. 80 columns at most, but
  * for a single word that is longer.
+ *
+ * @example
+ * const text = summaryText(design({ name: 'Larkmoor', passband: { centerHz: '1 GHz', bandwidthHz: '20 MHz' }, order: 4, returnLossDb: 20 }));
+ * text.split('\n')[0]; // 'Larkmoor'
  */
 export function summaryText(design: DesignReport, paint: Paint = PLAIN): string {
   const { specification, matrix, handOver, mask, certificates } = design;

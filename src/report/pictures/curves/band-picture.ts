@@ -1,8 +1,8 @@
 import type { DesignReport } from '../../design-report.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg/drawing.js';
 import { hatchPatterns } from '../../svg/hatch.js';
-import { unitOf } from '../../words/numbers.js';
-import { limitText, type Requirement, requirementOf } from '../../words/requirement.js';
+import { trimmed, unitOf } from '../../words/numbers.js';
+import { type Requirement, requirementOf } from '../../words/requirement.js';
 import { closePlot } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
 import { spanWords } from './flags.js';
@@ -61,7 +61,7 @@ function words(
   const requirements = requirementsOf(design);
   const limits = requirements.map(
     ({ name, span, predicted, limit }) =>
-      `${name} ${predicted.toFixed(2)} dB of ${limitText(limit)} dB at ${spanWords(span)} ${unit.name}`,
+      `${name} ${predicted.toFixed(2)} dB of ${trimmed(limit, 4)} dB at ${spanWords(span)} ${unit.name}`,
   );
   const loss = hasLoss ? `Insertion loss ${centerLossDb.toFixed(2)} dB at the center` : 'Lossless';
   const finding =

@@ -4,8 +4,8 @@ import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg
 import { hatchPatterns } from '../../svg/hatch.js';
 import { dot, octagon } from '../../svg/marks.js';
 import { element, type Markup } from '../../svg/markup.js';
-import { type FrequencyUnit, unitOf } from '../../words/numbers.js';
-import { limitText, requirementOf } from '../../words/requirement.js';
+import { type FrequencyUnit, trimmed, unitOf } from '../../words/numbers.js';
+import { requirementOf } from '../../words/requirement.js';
 import { closePlot, levelsBetween, roundRange } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
 import { drawNames } from './draw-names.js';
@@ -127,7 +127,7 @@ function words(design: DesignReport, unit: FrequencyUnit): Pick<Picture, 'findin
       : `Delay variation: ${limitFinding(requirements, unit).replace(/^[CS]/, (letter) => letter.toLowerCase())}`;
   const used = requirements.map(
     ({ predicted, limit, span }) =>
-      `${predicted.toFixed(1)} of ${limitText(limit)} ns over ${spanWords(span)} ${unit.name}`,
+      `${predicted.toFixed(1)} of ${trimmed(limit, 4)} ns over ${spanWords(span)} ${unit.name}`,
   );
   const boxes =
     'Each box is as wide as its band and as tall as the variation allowed; it stands on the lowest delay, and the curve must stay below the hatched lid.';

@@ -177,7 +177,7 @@ export function cascade(
   const radius = Math.min(15, isLabelled ? 15 : 12, plain * scale * 0.36);
   const labelOff = (isDense ? smallWidth : mainWidth) > plain * scale - 2 * radius - 4 ? radius + 2 : 6;
   const left = 22;
-  const pitch = (isLabelled ? 60 + 26 * mainLines : 40) + (sizing.hasOffsets ? 16 : 0);
+  const pitch = (isLabelled ? 60 + 26 * mainLines : 40) + (sizing.offsetWidth > 0 ? 16 : 0);
   const at = positions(rows, { scale, radius, left, right: left + used, pitch });
   const discs = Array.from({ length: order + 2 }, (_, node): Disc => {
     const [x, y] = at.get(node) as Point;

@@ -128,16 +128,16 @@ export function chainRow(network: Network, sizing: Sizing, isForced = false): Sk
 /** A column with arcs to its right: fits any order. */
 export function chainColumn(network: Network, sizing: Sizing): Skeleton {
   const { order, links } = network;
-  const { width, smallWidth, mainLines, hasOffsets } = sizing;
+  const { width, smallWidth, mainLines, offsetWidth } = sizing;
   const arcs = arcsOf(
     order,
     links.filter(({ isMain }) => !isMain),
   );
   const isLabelled = smallWidth > 0;
-  const left = Math.max(isLabelled ? smallWidth + 28 : 28, hasOffsets ? 98 : 0);
+  const left = Math.max(isLabelled ? smallWidth + 28 : 28, offsetWidth > 0 ? 98 : 0);
   const first = Math.min(92, Math.max(width - left - 20, 20) / 2);
   const level = Math.min(20, (width - left - 16 - first) / Math.max(arcs.levels - 1, 1));
-  const gap = (isLabelled ? 24 + 14 * mainLines : 32) + (hasOffsets ? 4 : 0);
+  const gap = (isLabelled ? 24 + 14 * mainLines : 32) + (offsetWidth > 0 ? 4 : 0);
   const crowd = [...arcs.landings.values()].reduce((sum, each) => sum + each.length, 0);
   const axis = {
     turned: true,

@@ -1,6 +1,7 @@
 import type { HandOver } from '../../../../bandpass/index.js';
 import type { Band } from '../../../../forms/index.js';
 import { FORMAT_WIDTH, type Format } from '../../../svg/drawing.js';
+import { textWidth } from '../../../svg/words.js';
 import { cascade } from './cascade.js';
 import { chainColumn, chainRow } from './chain.js';
 import type { Network } from './couplings.js';
@@ -40,14 +41,15 @@ function sizingOf(request: Request): Sizing {
         .map((link) => linesWidth(linesOf(link, wordingOf(request, isDense)))),
     );
   const wording = wordingOf(request, true);
+  const isWritten = network.order <= MOST_LABELLED;
+  const offsets = isWritten ? network.detuning.map((_, n) => offsetText(n + 1, wording) ?? '') : [];
   return {
     width: FORMAT_WIDTH[format],
     isNarrow: format === 'narrow',
     mainWidth: widest(false),
     smallWidth: widest(true),
     mainLines: wording.withSecond ? 2 : 1,
-    hasOffsets:
-      network.order <= MOST_LABELLED && network.detuning.some((_, n) => offsetText(n + 1, wording) !== undefined),
+    offsetWidth: Math.max(0, ...offsets.map((text) => textWidth(text, format === 'narrow' ? 11 : 12.5))),
   };
 }
 

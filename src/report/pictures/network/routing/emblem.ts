@@ -21,7 +21,7 @@ const MARGIN = 2;
 /** Layouts without labels in a width that is made fit afterward. */
 function figureOf(network: Network): Skeleton {
   const width = 120 * (network.order + 2);
-  const sizing: Sizing = { width, isNarrow: false, mainWidth: 1, smallWidth: 1, mainLines: 0, hasOffsets: false };
+  const sizing: Sizing = { width, isNarrow: false, mainWidth: 1, smallWidth: 1, mainLines: 0, offsetWidth: 0 };
   const pattern = patternOf(network);
   const found =
     pattern.kind === 'fan'
@@ -40,11 +40,6 @@ function figureOf(network: Network): Skeleton {
  * Cost: a few milliseconds up to order 20.
  *
  * @throws FilterFailure E_TYPE, E_MATRIX_SHAPE, E_NOT_FINITE, E_ENTRY_RANGE, E_NOT_SYMMETRIC
- *
- * @example
- * const { matrix } = folded(transversal(generalizedChebyshev({ order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.45] })));
- * const { width, height } = emblem(matrix);
- * width <= 150 && height <= 60; // true
  */
 export function emblem(matrix: CouplingMatrix): Drawing {
   checkedHandOver(matrix, undefined);
@@ -69,7 +64,7 @@ export function emblemLayout(network: Network): Layout {
   // Steps of 32 px at most, so that a small design does not become a wide emblem.
   const scaleX = Math.min(32 / closest, (WIDTH - 16 - 2 * MARGIN) / Math.max(spanX, 1));
   const scaleY = Math.min(32 / closest, (HEIGHT - 16 - 2 * MARGIN) / Math.max(spanY, 1));
-  const radius = Math.min(8, Math.max(closest * Math.min(scaleX, network.isFan ? scaleY : scaleX) * 0.36, 1));
+  const radius = Math.min(8, closest * Math.min(scaleX, network.isFan ? scaleY : scaleX) * 0.36);
   const moved = ([x, y]: Point): Point => [
     (x - all.left) * scaleX + radius + MARGIN,
     (y - all.top) * scaleY + radius + MARGIN,

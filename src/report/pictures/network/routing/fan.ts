@@ -41,22 +41,25 @@ function spokeRoute(link: Link, port: Point, resonator: Disc, stub: number): Rou
 
 /** Resonators one above the other between source and load; a direct coupling passes below them. */
 export function fan(network: Network, sizing: Sizing): Skeleton {
-  const { width, isNarrow, smallWidth, mainWidth, mainLines, hasOffsets } = sizing;
+  const { width, isNarrow, smallWidth, mainWidth, mainLines, offsetWidth } = sizing;
   const { order, links } = network;
   const isLabelled = smallWidth > 0;
-  const pitch = isLabelled ? 24 + 14 * mainLines + (hasOffsets ? 4 : 0) : Math.min(26, Math.max(HIGHEST / order, 5));
+  const least = offsetWidth > 0 ? 50 : 38;
+  const pitch = isLabelled ? Math.max(24 + 14 * mainLines, least) : Math.min(26, Math.max(HIGHEST / order, 5));
   const radius = Math.min(isLabelled ? 13 : 11, pitch * 0.42);
   const [left, right] = isNarrow ? [20, width - 20] : [40, width - 40];
   const middle = ((order - 1) * pitch) / 2;
   const center = width / 2;
-  const stub = isLabelled ? (isNarrow ? smallWidth : mainWidth) + radius + (hasOffsets ? 20 : 8) : BARE_STUB;
+  // Labels of both lines leave room for the offset that stands over the resonator between them.
+  const beside = Math.max(radius + 8, offsetWidth + 10 - radius);
+  const stub = isLabelled ? (isNarrow ? smallWidth : mainWidth) + beside : BARE_STUB;
   const discs = Array.from({ length: order + 2 }, (_, node): Disc => {
     if (node === 0) return disc(node, left, middle, 13);
     if (node === order + 1) return disc(node, right, middle, 13);
     return disc(node, center, (node - 1) * pitch, radius);
   });
   const pointOf = (node: number): Point => [discs[node]?.x ?? 0, discs[node]?.y ?? 0];
-  const foot = Math.max((order - 1) * pitch + radius + (hasOffsets ? 26 : 14), middle + 40);
+  const foot = Math.max((order - 1) * pitch + radius + (offsetWidth > 0 ? 26 : 14), middle + 40);
   const routes = links.map((link): Route => {
     if (!link.isMain) return directRoute(link, pointOf(link.from), pointOf(link.to), foot);
     const isSource = link.from === 0;

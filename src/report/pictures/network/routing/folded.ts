@@ -104,11 +104,11 @@ export function foldedRows(network: Network, sizing: Sizing): Skeleton | undefin
 
 /** Two columns that run downward, joined at the foot: fits any order. */
 export function foldedColumns(network: Network, sizing: Sizing): Skeleton {
-  const { width, smallWidth, mainLines, hasOffsets } = sizing;
+  const { width, smallWidth, mainLines, offsetWidth } = sizing;
   const crossCount = network.links.filter(({ isMain }) => !isMain).length;
   const isLabelled = smallWidth > 0;
   const radius = isLabelled ? 13 : 11;
-  const side = Math.max(isLabelled ? smallWidth + radius + 14 : 40, hasOffsets ? 92 : 0);
+  const side = Math.max(isLabelled ? smallWidth + radius + 14 : 40, offsetWidth > 0 ? 92 : 0);
   const across = Math.min(width - 2 * side, 300);
   const crowded = crossCount > stepsOf(network.order) ? 60 : 48;
   const along = isLabelled ? Math.max(crowded, 26 + 14 * mainLines) : crossCount > 3 ? 44 : 27;

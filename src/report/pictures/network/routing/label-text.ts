@@ -33,6 +33,14 @@ export interface Wording {
   readonly withSecond: boolean;
 }
 
+/** A coupling bandwidth; digits are added where it would print as zero. */
+export function bandwidthText(hertz: number, band: Band, withUnit: boolean): string {
+  const unit = unitOf(band);
+  const size = Math.abs(hertz) / unit.hertz;
+  if (size >= 0.5 * 10 ** (1 - unit.digits)) return widthText(hertz, band, withUnit);
+  return minus(`${hertz < 0 ? '-' : '+'}${figures(size, 1)}${withUnit ? ` ${unit.name}` : ''}`);
+}
+
 function portQuality({ from, to }: Link, { handOver, network }: Wording): number | null {
   if (from === 0 && to <= network.order) return handOver.externalQ.source;
   if (to === network.order + 1 && from > 0) return handOver.externalQ.load;
@@ -44,7 +52,7 @@ function secondText(link: Link, wording: Wording): string | undefined {
   if (wording.band === undefined) return undefined;
   const quality = portQuality(link, wording);
   if (quality !== null) return `Qe ${figures(quality, 4)}`;
-  return widthText(link.value * wording.band.bandwidthHz, wording.band, !wording.isDense);
+  return bandwidthText(link.value * wording.band.bandwidthHz, wording.band, !wording.isDense);
 }
 
 /** The label of a coupling; empty where it has none. */

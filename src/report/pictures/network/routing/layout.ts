@@ -79,7 +79,8 @@ export interface Sizing {
   readonly smallWidth: number;
   /** Lines of a label of the main path. */
   readonly mainLines: number;
-  readonly hasOffsets: boolean;
+  /** Widest offset of a resonator; 0 where none is written. */
+  readonly offsetWidth: number;
 }
 
 /** Ports are a little smaller than resonators, unless these are small already. */

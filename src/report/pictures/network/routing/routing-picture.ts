@@ -24,7 +24,7 @@ export function routingLayout(matrix: CouplingMatrix, band: Band | undefined, fo
  * @example
  * const { matrix } = folded(transversal(generalizedChebyshev({ order: 4, returnLossDb: 20, transmissionZeros: [2, -2] })));
  * const picture = routingPicture(matrix, { centerHz: 1e9, bandwidthHz: 20e6 });
- * picture.finding; // 'Folded in two rows: one cross coupling, 1–4, of −0.1823'
+ * picture.finding; // 'Folded in two rows: one cross coupling, 1–4, of −0.1705'
  * picture.wide.width; // 560
  */
 export function routingPicture(matrix: CouplingMatrix, band?: Band): Picture {
