@@ -1,0 +1,24 @@
+import type { Page } from 'playwright-core';
+
+/** Paper and its size in CSS pixels, 96 to the inch. */
+export const PAPERS = {
+  A4: { width: 793.7, height: 1122.5 },
+  Letter: { width: 816, height: 1056 },
+} as const;
+
+/** Names of papers. */
+export type Paper = keyof typeof PAPERS;
+
+/** A printed document: its bytes, and how many pages it has. */
+export interface Printed {
+  readonly bytes: Buffer;
+  readonly pages: number;
+}
+
+/** Prints as a reader would, with the margins the document asks for and without backgrounds. */
+export async function printed(page: Page, format: Paper): Promise<Printed> {
+  const bytes = await page.pdf({ format, printBackground: false, preferCSSPageSize: false });
+  // Chromium writes the page objects of a document uncompressed.
+  const pages = (bytes.toString('latin1').match(/\/Type\s*\/Page\b(?!s)/g) ?? []).length;
+  return { bytes, pages };
+}
