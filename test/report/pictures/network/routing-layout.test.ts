@@ -24,11 +24,11 @@ const overlap = (a: Box, b: Box): boolean =>
 const contains = ({ left, right, top, bottom }: Box, x: number, y: number): boolean =>
   x > left && x < right && y > top && y < bottom;
 
-/** Points every half pixel along the lines, corners not rounded: the drawn way never leaves the corner's inner side by more. */
+/** Points at least every pixel along the lines, corners not rounded: the drawn way never leaves the corner's inner side by more. */
 function pointsOf(points: readonly (readonly [number, number])[]): [number, number][] {
   return points.slice(1).flatMap(([x1, y1], n) => {
     const [x0, y0] = points[n]!;
-    const count = Math.ceil(2 * Math.hypot(x1 - x0, y1 - y0)) + 1;
+    const count = Math.ceil(Math.hypot(x1 - x0, y1 - y0)) + 1;
     return Array.from({ length: count + 1 }, (_, k): [number, number] => [
       x0 + ((x1 - x0) * k) / count,
       y0 + ((y1 - y0) * k) / count,
@@ -46,8 +46,11 @@ function markPoints({ discs, lozenges }: Layout): [number, number][] {
         points.push([x + share * radius * Math.cos(angle), y + share * radius * Math.sin(angle)]);
       }
   };
-  for (const { x, y, radius, reach } of discs)
-    for (let k = -8; k <= 8; k++) around(x + (reach[0] * k) / 8, y + (reach[1] * k) / 8, radius);
+  for (const { x, y, radius, reach } of discs) {
+    const stops = Math.ceil((reach[0] + reach[1]) / 4);
+    for (let k = -stops; k <= stops; k++)
+      around(x + (reach[0] * k) / (stops || 1), y + (reach[1] * k) / (stops || 1), radius);
+  }
   for (const { at, half } of lozenges)
     for (let k = -8; k <= 8; k++)
       for (const sign of [-1, 1]) points.push([at[0] + (half * k) / 8, at[1] + sign * half * (1 - Math.abs(k) / 8)]);
