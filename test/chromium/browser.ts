@@ -3,7 +3,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { type Browser, type BrowserContext, type BrowserContextOptions, chromium, type Page } from 'playwright-core';
-import { afterAll, beforeAll } from 'vitest';
+import { afterAll, beforeAll, expect } from 'vitest';
 import { CHROMIUM, CHROMIUM_ARGUMENTS } from './executable.js';
 
 /** Whether tests that need Chromium are skipped. */
@@ -126,6 +126,12 @@ export function useChromium(): Chromium {
     return openAddress(pathToFileURL(join(own, name)).href, look);
   };
   return { openText, openAddress };
+}
+
+/** Nothing was asked for, said, shown in a box, or refused by the policy. */
+export async function expectSilent({ requests, messages, dialogs, violations }: Opened): Promise<void> {
+  const noticed = { requests, messages, dialogs, violations: await violations() };
+  expect.soft(noticed).toEqual({ requests: [], messages: [], dialogs: [], violations: [] });
 }
 
 /** Saves what a page shows, for people to look at: only where IRISLOOM_SCREENSHOTS names a folder. */

@@ -37,8 +37,11 @@ export function labelFaultsOf(page: Page, least = 10.5): Promise<LabelFaults> {
           };
         });
       texts += boxes.length;
+      const tiny = boxes.filter(({ size }) => size < smallest - 0.01);
+      const least = Math.min(...tiny.map(({ size }) => size));
+      if (tiny.length > 0)
+        small.push(`${name}: ${tiny.length} texts, "${tiny[0]?.text}" first, ${least.toFixed(2)} px`);
       boxes.forEach((box, n) => {
-        if (box.size < smallest - 0.01) small.push(`${name}: "${box.text}" ${box.size.toFixed(2)} px`);
         const isOut =
           box.left < frame.left - TOLERANCE ||
           box.right > frame.right + TOLERANCE ||

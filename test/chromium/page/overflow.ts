@@ -19,6 +19,7 @@ export function overflowOf(page: Page): Promise<readonly string[]> {
         if (isRegion(outer) || outer.clientWidth === 1) return true;
       return false;
     };
+    const out = new Set<Element>();
     for (const element of document.body.querySelectorAll('*')) {
       if (element.closest('svg') !== null && element.tagName !== 'svg') continue;
       if (!element.checkVisibility({ visibilityProperty: true }) || isInRegion(element)) continue;
@@ -26,7 +27,10 @@ export function overflowOf(page: Page): Promise<readonly string[]> {
       if (width === 0 || height === 0) continue;
       // A skip link waits outside until it has the focus.
       if (element.matches('a[href^="#"]') && getComputedStyle(element).position !== 'static') continue;
-      if (left < -0.5 || right > clientWidth + 0.5)
+      if (left >= -0.5 && right <= clientWidth + 0.5) continue;
+      out.add(element);
+      // What stands in something that sticks out goes without saying.
+      if (element.parentElement === null || !out.has(element.parentElement))
         found.push(`${nameOf(element)}: ${left.toFixed(1)} to ${right.toFixed(1)} px in ${clientWidth}`);
     }
     return found;

@@ -9,6 +9,11 @@ export const PAPERS = {
 /** Names of papers. */
 export type Paper = keyof typeof PAPERS;
 
+/** What is left between the side margins that the document asks for, 12 mm each. */
+export function textWidth(paper: Paper): number {
+  return Math.floor(PAPERS[paper].width - (2 * 12 * 96) / 25.4);
+}
+
 /** A printed document: its bytes, and how many pages it has. */
 export interface Printed {
   readonly bytes: Buffer;
@@ -21,4 +26,12 @@ export async function printed(page: Page, format: Paper): Promise<Printed> {
   // Chromium writes the page objects of a document uncompressed.
   const pages = (bytes.toString('latin1').match(/\/Type\s*\/Page\b(?!s)/g) ?? []).length;
   return { bytes, pages };
+}
+
+/** How many pages the title and the first sheet take; the sheets after it are taken out of the page. */
+export async function firstPages(page: Page, format: Paper): Promise<number> {
+  await page.evaluate(() => {
+    for (const sheet of document.querySelectorAll('section.sheet')) sheet.remove();
+  });
+  return (await printed(page, format)).pages;
 }
