@@ -103,12 +103,39 @@ function touching({ discs }: Layout): string[] {
   );
 }
 
+/** Do two straight lines properly cross, not counting shared ends? */
+function cross(a: readonly number[], b: readonly number[], c: readonly number[], d: readonly number[]): boolean {
+  const side = (p: readonly number[], q: readonly number[], r: readonly number[]): number =>
+    (q[0]! - p[0]!) * (r[1]! - p[1]!) - (q[1]! - p[1]!) * (r[0]! - p[0]!);
+  return side(a, b, c) * side(a, b, d) < -1e-6 && side(c, d, a) * side(c, d, b) < -1e-6;
+}
+
+/** Labels that stand beyond a line that is not theirs, or far from their own; those whose number occurs once are tried. */
+function strays({ labels, routes }: Layout): string[] {
+  return labels.flatMap(({ box, lines }) => {
+    const text = lines[0]!.text;
+    const own = routes.filter(({ link }) => `${link.value < 0 ? '−' : '+'}${Math.abs(link.value).toFixed(4)}` === text);
+    if (own.length !== 1 || lines[0]!.classes.indexOf('bold') < 0) return [];
+    const gap = ([x, y]: readonly [number, number]): number =>
+      Math.hypot(Math.max(box.left - x, 0, x - box.right), Math.max(box.top - y, 0, y - box.bottom));
+    const from = pointsOf(own[0]!.points).reduce((a, b) => (gap(b) < gap(a) ? b : a));
+    const to = [Math.min(Math.max(from[0], box.left), box.right), Math.min(Math.max(from[1], box.top), box.bottom)];
+    const isBeyond = routes.some(
+      (route) => route !== own[0] && route.points.slice(1).some((end, n) => cross(from, to, route.points[n]!, end)),
+    );
+    return [
+      ...(isBeyond ? [`${text} beyond another line`] : []),
+      ...(gap(from) > 30 ? [`${text} far from its line`] : []),
+    ];
+  });
+}
+
 /** Everything that may be wrong with both drawings of a design. */
 function faults({ name, matrix }: Named, mayDrop = false): string[] {
   return [BAND, undefined].flatMap((band) =>
     (['wide', 'narrow'] as const).flatMap((format) => {
       const layout = routingLayout(matrix, band, format);
-      const found = [...collisions(layout), ...touching(layout)];
+      const found = [...collisions(layout), ...strays(layout), ...touching(layout)];
       if (outside(layout)) found.push('leaves the drawing');
       if (!mayDrop && layout.dropped > 0) found.push(`${layout.dropped} labels left out`);
       return found.map((fault) => `${name}, ${format}: ${fault}`);

@@ -50,10 +50,11 @@ export function rulerOf(network: Network, band: Band, toX: (node: number) => num
     const depth = radius + 10 + ((arcs.level.get(link) ?? 1) - 1) * level;
     return bracket(link, landing(link, link.from), landing(link, link.to), depth);
   });
-  const wanted = routes.map(({ link, spots }): Wanted => {
+  const wanted = routes.map((own): Wanted => {
+    const { link, spots } = own;
     const text = bandwidthText(link.value * band.bandwidthHz, band, false);
     const line: Line = { text, classes: `small bold${link.value < 0 ? ' f-negative' : ''}`, size: 11 };
-    return { versions: [[line]], spots };
+    return { versions: [[line]], spots, own };
   });
   return finish({ discs, routes, offsets: new Map(), isDense: true }, wanted, width, LOZENGE);
 }

@@ -53,28 +53,28 @@ function sizingOf(request: Request): Sizing {
   };
 }
 
-/** Ways to lay out a network, best first; at least one. */
-function skeletons(network: Network, sizing: Sizing): readonly Skeleton[] {
+/** Ways to lay out a network: first those that show its pattern, then those that show any. */
+function skeletons(network: Network, sizing: Sizing): readonly (readonly Skeleton[])[] {
   const pattern = patternOf(network);
-  const column = (): Skeleton => chainColumn(network, sizing);
   const known = (each: Skeleton | undefined): Skeleton[] => (each === undefined ? [] : [each]);
-  if (pattern.kind === 'fan') return [fan(network, sizing)];
-  if (pattern.kind === 'folded') return [...known(foldedRows(network, sizing)), foldedColumns(network, sizing)];
-  if (pattern.kind === 'inline') return [...known(cascade(network, sizing, [])), column()];
+  const anyway = (): Skeleton[] => [...known(chainRow(network, sizing)), chainColumn(network, sizing)];
+  if (pattern.kind === 'fan') return [[fan(network, sizing)]];
+  if (pattern.kind === 'folded') return [[...known(foldedRows(network, sizing)), foldedColumns(network, sizing)]];
+  if (pattern.kind === 'inline') return [known(cascade(network, sizing, [])), anyway()];
   if (pattern.kind === 'cascade') {
     const { sections } = pattern;
-    const figures = [0, 0.82, 1].map((smallest) => cascade(network, sizing, sections, smallest));
-    return [...figures.flatMap(known), ...known(chainRow(network, sizing)), column()];
+    return [[0, 0.82, 1].flatMap((smallest) => known(cascade(network, sizing, sections, smallest))), anyway()];
   }
-  return [...known(chainRow(network, sizing)), column()];
+  return [anyway()];
 }
 
 function wantedOf({ routes, offsets, isDense }: Skeleton, request: Request): Wanted[] {
   const wording = wordingOf(request, isDense);
   const short = { ...wording, withSecond: false };
-  const labelled = routes.map(({ link, spots }): Wanted => {
+  const labelled = routes.map((own): Wanted => {
+    const { link, spots } = own;
     const versions = wording.withSecond ? [linesOf(link, wording), linesOf(link, short)] : [linesOf(link, wording)];
-    return { versions: versions.filter((lines) => lines.length > 0), spots };
+    return { versions: versions.filter((lines) => lines.length > 0), spots, own };
   });
   const shift = [...(request.network.order <= MOST_LABELLED ? offsets : [])].flatMap(([node, spots]): Wanted[] => {
     const text = offsetText(node, wording);
@@ -94,10 +94,11 @@ const lossOf = ({ dropped, shortened }: Layout): number => 1000 * dropped + shor
 export function layoutOf(request: Request): Layout {
   const sizing = sizingOf(request);
   let best: Layout | undefined;
-  for (const skeleton of skeletons(request.network, sizing)) {
+  for (const group of skeletons(request.network, sizing)) {
+    // The pattern is given up only where that saves numbers, not for second lines.
+    if (best?.dropped === 0) break;
     // Small letters for all labels of a figure where one finds no room at full size.
-    const sizes = skeleton.isDense ? [skeleton] : [skeleton, { ...skeleton, isDense: true }];
-    for (const each of sizes) {
+    for (const each of group.flatMap((one) => (one.isDense ? [one] : [one, { ...one, isDense: true }]))) {
       const layout = finish(each, wantedOf(each, request), sizing.width, LOZENGE);
       if (best === undefined || lossOf(layout) < lossOf(best)) best = layout;
       if (lossOf(best) === 0) return best;

@@ -49,12 +49,14 @@ function routeOf(link: Link, order: number, grid: Grid, center: Point): Route {
     : spotsAlong(a, b, past, [0.5]);
   const shares = grid.turned && !isRim ? [0.25, 0.75, 0.3, 0.7, 0.2, 0.8, 0.35, 0.65, 0.15, 0.85, 0.5] : undefined;
   const marks = [0.5, 0.4, 0.6, 0.32, 0.68].map(at);
+  // Level lines take the room below them, so that each slanted line keeps the other half of its cell.
+  const crossSpots = spotsAlong(a, b, 6, shares).sort((p, q) => (a[1] === b[1] ? q.toward[1] - p.toward[1] : 0));
   // Right of an upright line first: normals point right for lines that run down.
   return {
     link,
     points: [a, b],
     marks,
-    spots: grid.turned && !isRim ? spotsAlong(a, b, 6, shares) : [...first, ...spotsAlong(a, b, 6)],
+    spots: grid.turned && !isRim ? crossSpots : [...first, ...spotsAlong(a, b, 6)],
   };
 }
 
@@ -111,7 +113,7 @@ export function foldedColumns(network: Network, sizing: Sizing): Skeleton {
   const side = Math.max(isLabelled ? smallWidth + radius + 14 : 40, offsetWidth > 0 ? 92 : 0);
   const across = Math.min(width - 2 * side, 300);
   const crowded = crossCount > stepsOf(network.order) ? 60 : 48;
-  const along = isLabelled ? Math.max(crowded, 26 + 14 * mainLines) : crossCount > 3 ? 44 : 27;
+  const along = isLabelled ? Math.max(crowded, 26 + 14 * mainLines) : crossCount > 1 ? 44 : 27;
   const start: Point = [(width - across) / 2, 0];
   return figure(network, { turned: true, radius, along, across, start, labelOff: 6 }, true);
 }

@@ -45,6 +45,29 @@ export function routeMeetsBox(points: readonly Point[], box: Box): boolean {
   return points.some((point, n) => n > 0 && lineMeetsBox(points[n - 1] as Point, point, box));
 }
 
+/** On which side of the line a-b a point lies. */
+function sideOf([ax, ay]: Point, [bx, by]: Point, [x, y]: Point): number {
+  return Math.sign((bx - ax) * (y - ay) - (by - ay) * (x - ax));
+}
+
+/** Do two straight lines share a range of x (axis 0) or of y (axis 1)? */
+function rangesMeet(a: Point, b: Point, c: Point, d: Point, axis: number): boolean {
+  const at = (point: Point): number => point[axis] as number;
+  return Math.max(at(a), at(b)) >= Math.min(at(c), at(d)) && Math.max(at(c), at(d)) >= Math.min(at(a), at(b));
+}
+
+/** Does a polyline cross the straight line from a to b? Touching an end counts as crossing. */
+export function routeCrosses(points: readonly Point[], a: Point, b: Point): boolean {
+  return points.some((end, n) => {
+    const start = points[n - 1];
+    if (start === undefined) return false;
+    // Lines on one straight line cross only where they overlap.
+    if (![0, 1].every((axis) => rangesMeet(start, end, a, b, axis))) return false;
+    const parts = sideOf(start, end, a) * sideOf(start, end, b) <= 0;
+    return parts && sideOf(a, b, start) * sideOf(a, b, end) <= 0;
+  });
+}
+
 /** The point at a share of the length of a straight line. */
 export function between([x0, y0]: Point, [x1, y1]: Point, share: number): Point {
   return [x0 + (x1 - x0) * share, y0 + (y1 - y0) * share];

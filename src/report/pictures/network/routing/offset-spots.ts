@@ -23,7 +23,9 @@ function spotsOf({ x, y, radius, reach }: Disc, out: number): Spot[] {
   const spot = (dx: number, dy: number, gap: number): Spot => {
     const length = Math.hypot(dx, dy);
     const toward: Point = [dx / length, dy / length];
-    return { at: [x, y], toward, off: radius + gap + Math.abs(toward[0]) * reach[0] + Math.abs(toward[1]) * reach[1] };
+    // From the rim on: the lines of the resonator itself are behind.
+    const rim = radius + Math.abs(toward[0]) * reach[0] + Math.abs(toward[1]) * reach[1] + 0.5;
+    return { at: [x + toward[0] * rim, y + toward[1] * rim], toward, off: gap };
   };
   const straight = [spot(0, out, NEAR), spot(0, -out, NEAR)];
   const beside = [spot(1, 0, NEAR), spot(-1, 0, NEAR)];

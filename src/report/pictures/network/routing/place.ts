@@ -1,5 +1,14 @@
 import { textWidth } from '../../../svg/words.js';
-import { type Box, boxAround, boxesMeet, grown, normalOf, type Point, routeMeetsBox } from './geometry.js';
+import {
+  type Box,
+  boxAround,
+  boxesMeet,
+  grown,
+  normalOf,
+  type Point,
+  routeCrosses,
+  routeMeetsBox,
+} from './geometry.js';
 import {
   type Disc,
   discBox,
@@ -29,6 +38,8 @@ const SHARES: readonly number[] = [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8, 0.12, 0.88
 export interface Wanted {
   readonly versions: readonly (readonly Line[])[];
   readonly spots: readonly Spot[];
+  /** The line the label belongs to, if it belongs to one. */
+  readonly own?: Route;
 }
 
 /** What is in the way of a label. */
@@ -80,18 +91,25 @@ function isFree(box: Box, { discs, routes, boxes, width }: Obstacles): boolean {
   return !routes.some(({ points }) => routeMeetsBox(points, room));
 }
 
+/** Does another line pass between a label and the place it belongs to? The label would be read as that line's. */
+function isCutOff({ at: [x, y] }: Spot, box: Box, own: Route | undefined, { routes }: Obstacles): boolean {
+  const near: Point = [Math.min(Math.max(x, box.left), box.right), Math.min(Math.max(y, box.top), box.bottom)];
+  return routes.some((route) => route !== own && routeCrosses(route.points, [x, y], near));
+}
+
 function anchorOf([nx]: Point): Placed['anchor'] {
   if (nx > 0.7) return 'start';
   return nx < -0.7 ? 'end' : 'mid';
 }
 
-function place({ versions, spots }: Wanted, obstacles: Obstacles): Placed | undefined {
+function place({ versions, spots, own }: Wanted, obstacles: Obstacles): Placed | undefined {
   for (const lines of versions) {
     const [width, height] = [linesWidth(lines), lines.reduce((sum, { size }) => sum + lineHeight(size), 0)];
     for (const push of PUSHES) {
       for (const spot of spots) {
         const box = boxAt(spot, push, width, height);
-        if (isFree(box, obstacles)) return { lines, box, anchor: anchorOf(spot.toward) };
+        if (isFree(box, obstacles) && !isCutOff(spot, box, own, obstacles))
+          return { lines, box, anchor: anchorOf(spot.toward) };
       }
     }
   }
