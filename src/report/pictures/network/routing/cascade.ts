@@ -1,76 +1,10 @@
+import { APEX, axisRows, lengthOf, PLAIN, type Row, SQUARE, stretchesOf } from './cascade-rows.js';
 import type { Network } from './couplings.js';
 import type { Point } from './geometry.js';
 import { type Disc, disc, portRadius, type Route, type Sizing, type Skeleton, type Spot } from './layout.js';
 import { offsetSpots } from './offset-spots.js';
 import type { Section } from './pattern.js';
 import { spotsAlong } from './place.js';
-
-/** A stretch of the axis: a plain step or a section, with its length and the side its corners stand on (-1 up, 1 down, 0 none). */
-interface Stretch {
-  readonly first: number;
-  readonly last: number;
-  readonly length: number;
-  readonly side: number;
-}
-
-const PLAIN = 92;
-const TRIANGLE = 144;
-const SQUARE = 118;
-const APEX = 90;
-
-/** The axis from source to load as stretches; sections that share a corner stand on opposite sides. */
-function stretchesOf(order: number, sections: readonly Section[], plain: number): Stretch[] {
-  const stretches: Stretch[] = [];
-  let node = 0;
-  while (node < order + 1) {
-    const section = sections.find(({ first }) => first === node);
-    const before = stretches.at(-1);
-    if (section === undefined) stretches.push({ first: node, last: node + 1, length: plain, side: 0 });
-    else {
-      const side = before !== undefined && before.side !== 0 ? -before.side : -1;
-      stretches.push({ ...section, length: section.last - section.first === 2 ? TRIANGLE : SQUARE, side });
-    }
-    node = (stretches.at(-1) as Stretch).last;
-  }
-  return stretches;
-}
-
-/** A row of the axis: its first node and what follows it. */
-interface Row {
-  readonly first: number;
-  readonly stretches: Stretch[];
-}
-
-const lengthOf = (stretches: readonly Stretch[]): number => stretches.reduce((sum, { length }) => sum + length, 0);
-
-/** Breaks the axis into rows at plain steps; the step that breaks becomes the way down. Undefined where a run is too long. */
-function rowsOf(stretches: readonly Stretch[], most: number): Row[] | undefined {
-  const rows: Row[] = [{ first: 0, stretches: [] }];
-  for (const [n, stretch] of stretches.entries()) {
-    const row = rows.at(-1) as Row;
-    const rest = stretches.slice(n + 1);
-    const next = rest.findIndex(({ side }) => side === 0);
-    // Sections that follow one another share corners and cannot be parted: they come along whole.
-    const run = stretch.side === 0 ? rest.slice(0, next < 0 ? rest.length : next) : [];
-    const isFull = lengthOf(row.stretches) + stretch.length + lengthOf(run) > most;
-    if (stretch.side === 0 && isFull && row.stretches.length > 0) rows.push({ first: stretch.last, stretches: [] });
-    else row.stretches.push(stretch);
-  }
-  return rows.some((row) => lengthOf(row.stretches) > most + 1e-6) ? undefined : rows;
-}
-
-/** Every row but the last as long as the longest, so that the ways down stand upright. */
-function justified(rows: readonly Row[]): Row[] {
-  const longest = Math.max(...rows.map(({ stretches }) => lengthOf(stretches)));
-  return rows.map((row, n): Row => {
-    const missing = longest - lengthOf(row.stretches);
-    const plain = row.stretches.filter(({ side }) => side === 0).length;
-    const share = n === rows.length - 1 ? 0 : missing / (plain || row.stretches.length || 1);
-    const takes = ({ side }: Stretch): boolean => side === 0 || plain === 0;
-    const stretches = row.stretches.map((each) => (takes(each) ? { ...each, length: each.length + share } : each));
-    return { first: row.first, stretches };
-  });
-}
 
 interface Frame {
   readonly scale: number;
@@ -153,30 +87,30 @@ function outwardFirst(spots: Spot[], at: ReadonlyMap<number, Point>, section: Se
 
 /**
  * A row of nodes with triangles and squares standing on it, broken into several rows where it is long; `smallest` keeps the
- * figure from shrinking further.
+ * figure from shrinking further, `inset` leaves room for labels on both sides.
  */
 export function cascade(
   network: Network,
   sizing: Sizing,
   sections: readonly Section[],
   smallest = 0,
+  inset = 0,
 ): Skeleton | undefined {
   const { order } = network;
   const { width, mainWidth, smallWidth, mainLines } = sizing;
   const isLabelled = smallWidth > 0;
   const plain = isLabelled ? PLAIN : 34;
   const stretches = stretchesOf(order, sections, plain);
-  const room = width - 48;
+  const room = width - 48 - 2 * inset;
   const least = isLabelled ? (smallWidth + 6) / plain : 1;
   const scale = Math.min(1, Math.max(room / lengthOf(stretches), Math.min(least, 0.9), smallest));
-  const broken = rowsOf(stretches, room / scale);
-  if (broken === undefined) return undefined;
-  const rows = justified(broken);
+  const rows = axisRows(stretches, room / scale);
+  if (rows === undefined) return undefined;
   const used = Math.max(...rows.map((row) => lengthOf(row.stretches))) * scale;
   const isDense = mainWidth + 4 > plain * scale;
   const radius = Math.min(15, isLabelled ? 15 : 12, plain * scale * 0.36);
   const labelOff = (isDense ? smallWidth : mainWidth) > plain * scale - 2 * radius - 4 ? radius + 2 : 6;
-  const left = 22;
+  const left = 22 + inset;
   const pitch = (isLabelled ? 60 + 26 * mainLines : 40) + (sizing.offsetWidth > 0 ? 16 : 0);
   const at = positions(rows, { scale, radius, left, right: left + used, pitch });
   const discs = Array.from({ length: order + 2 }, (_, node): Disc => {

@@ -15,6 +15,9 @@ import { finish, linesWidth, type Wanted } from './place.js';
 /** Half diagonal of a lozenge on a line, px. */
 const LOZENGE = 8;
 
+/** Room on both sides of a cascade for labels of upright lines, px. */
+const INSET = 40;
+
 /** Orders up to this keep the second line of their labels in the narrow drawing. */
 const MOST_NARROW_SECOND = 8;
 
@@ -63,7 +66,8 @@ function skeletons(network: Network, sizing: Sizing): readonly (readonly Skeleto
   if (pattern.kind === 'inline') return [known(cascade(network, sizing, [])), anyway()];
   if (pattern.kind === 'cascade') {
     const { sections } = pattern;
-    return [[0, 0.82, 1].flatMap((smallest) => known(cascade(network, sizing, sections, smallest))), anyway()];
+    const tried = [0, INSET].flatMap((inset) => [0, 0.82, 1].map((smallest) => [smallest, inset] as const));
+    return [tried.flatMap(([smallest, inset]) => known(cascade(network, sizing, sections, smallest, inset))), anyway()];
   }
   return [anyway()];
 }
