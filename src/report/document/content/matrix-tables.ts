@@ -5,7 +5,7 @@ import { numberColumn, type Row, type Table, textColumn } from './content.js';
 
 const M_DECIMALS = 4;
 /** Columns that fit a printed page. */
-const COLUMNS = 16;
+const COLUMNS = 14;
 
 /** An entry; one that is exactly 0 couples nothing. */
 function entryText(value: number): string {

@@ -1,5 +1,6 @@
 import { inlineSvg, type Picture } from '../../svg/drawing.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
+import { sentenceSigns } from './typography.js';
 
 /** How a figure stands in the document. */
 export interface FigurePlace {
@@ -21,12 +22,18 @@ export function figureMarkup(picture: Picture, { number, hasReadout, below }: Fi
   return element(
     'figure',
     { id, 'aria-labelledby': `${id}-head` },
-    element('h3', { id: `${id}-head` }, element('span', { class: 'number' }, String(number)), ' ', finding),
+    element(
+      'h3',
+      { id: `${id}-head` },
+      element('span', { class: 'number' }, String(number)),
+      ' ',
+      sentenceSigns(finding),
+    ),
     element(
       'div',
       { class: 'body' },
       element('div', { class: isChart ? 'drawing chart' : 'drawing' }, drawings, ...(isChart ? [readout] : [])),
-      element('figcaption', {}, caption, ...(below === undefined ? [] : [below])),
+      element('figcaption', {}, sentenceSigns(caption), ...(below === undefined ? [] : [below])),
     ),
   );
 }

@@ -1,7 +1,7 @@
 import type { DesignReport } from '../../design-report.js';
 import type { DesignSource } from '../../files/result-json.js';
 import { type Drawing, inlineSvg } from '../../svg/drawing.js';
-import { element, fragment, type Markup } from '../../svg/markup.js';
+import { element, type Markup } from '../../svg/markup.js';
 import { unitOf } from '../../words/numbers.js';
 import { NO_MASK } from '../../words/verdict.js';
 import { listedRequirements, pageVerdict } from '../content/requirements.js';
@@ -81,8 +81,8 @@ export function firstPage(design: DesignReport, response: Markup | undefined): M
       'div',
       { class: mask.length === 0 ? 'answer alone' : 'answer' },
       ...(table.length === 0 ? [] : [element('div', { class: 'limits' }, ...table)]),
-      ...(response === undefined ? [] : [fragment(response)]),
+      ...(response === undefined ? [] : [response]),
+      signatureLines(),
     ),
-    signatureLines(),
   );
 }

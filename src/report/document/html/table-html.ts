@@ -56,6 +56,7 @@ function classOf({ columns, rows }: Table): string | undefined {
 export function tableMarkup(table: Table): Markup {
   const { id, caption, columns, rows, note } = table;
   const signs = columns.map((_, n) => signsOf(table, n));
+  const isFigures = classOf(table) === 'figures';
   const inner = element(
     'table',
     { id, class: classOf(table) },
@@ -64,6 +65,6 @@ export function tableMarkup(table: Table): Markup {
     element('tbody', {}, ...rows.map((row) => bodyRow(table, row, signs))),
   );
   const region = { class: 'scroll', role: 'region', tabindex: '0', 'aria-labelledby': `${id}-caption` };
-  const body = columns.length > NARROW_COLUMNS ? element('div', region, inner) : inner;
+  const body = columns.length > NARROW_COLUMNS || isFigures ? element('div', region, inner) : inner;
   return note === undefined ? body : element('div', {}, body, element('p', { class: 'note' }, sentenceSigns(note)));
 }

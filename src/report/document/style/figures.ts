@@ -9,7 +9,7 @@ figure .number{font-weight:400;color:var(--second);margin-right:6px}
 figcaption{flex:1 1 176px;font-size:14px;line-height:1.4;color:var(--second);max-width:68ch}
 .drawing .pic{display:block;max-width:100%;height:auto}
 .drawing .wide{display:none}
-@container (min-width:475px){.drawing .wide{display:block}.drawing .narrow{display:none}.drawing .readout{min-height:42px}}
+@container (min-width:540px){.drawing .wide{display:block}.drawing .narrow{display:none}.drawing .readout{min-height:42px}}
 .readout{min-height:63px;font-size:14px;line-height:21px;color:var(--second)}
 .readout b{color:var(--ink);font-weight:600;margin-right:12px;white-space:nowrap}
 .chart{cursor:crosshair}

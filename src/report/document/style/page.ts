@@ -8,24 +8,26 @@ export const PAGE: string = `
 html{-webkit-text-size-adjust:100%;text-size-adjust:100%}
 body{margin:0 auto;max-width:1320px;padding:28px 36px 48px;background:var(--paper);color:var(--ink);
 font:400 16px/1.45 ${FONT};font-variant-numeric:tabular-nums lining-nums;overflow-wrap:break-word}
-h1,bdi{overflow-wrap:anywhere}
+bdi{overflow-wrap:anywhere}
+h1,h1 bdi{overflow-wrap:break-word}
 h1,h2,h3,p,dl,dd,ul,figure{margin:0}
 h1,h2{font-family:${HEADS};font-weight:700;line-height:1.15;text-wrap:balance}
 h1{font-size:44px}
 h2{font-size:25px}
-h3{font-size:16px;font-weight:700;line-height:1.3}
+h3{font-size:16px;font-weight:700;line-height:1.3;text-wrap:balance}
 a{color:var(--transmission)}
 :focus-visible{outline:3px solid var(--transmission);outline-offset:2px}
 [hidden]{display:none}
 .skip{position:absolute;left:-999em}
 .skip:focus{left:36px;top:6px;background:var(--paper);padding:4px 8px}
 .unseen{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%);white-space:nowrap}
-.title{display:flex;flex-wrap:wrap;align-items:flex-end;justify-content:space-between;gap:14px 32px;
-padding-bottom:20px;border-bottom:3px solid var(--ink)}
-.name{flex:1 1 420px}
+.title{display:flex;flex-wrap:wrap;align-items:center;gap:0 32px;padding-bottom:18px;border-bottom:3px solid var(--ink)}
+.name{display:contents}
+.kicker,h1{flex:0 0 100%;min-width:0}
 .kicker,.facts{color:var(--second)}
 .kicker{font-size:14px;margin-bottom:2px}
-.facts{margin-top:6px}
+.facts{flex:1 1 320px;margin-top:10px}
+.emblem,.cells{margin-top:12px}
 .emblem{flex:none}
 .cells{display:flex;flex-wrap:wrap;border:1px solid var(--hairline);border-width:1px 0 1px 1px}
 .cells div{padding:5px 12px 6px;border-right:1px solid var(--hairline)}
@@ -36,7 +38,7 @@ dd{font-weight:600}
 .verdict h2{font-size:30px}
 .nearest{font-size:20px;line-height:1.35;margin-top:6px}
 .conditions{color:var(--second);margin-top:6px}
-.signatures{display:flex;gap:24px;margin-top:44px;max-width:720px}
+.signatures{display:flex;gap:24px;margin-top:20px;max-width:720px}
 .signatures p{flex:1;border-top:1.5px solid var(--ink);padding-top:4px;font-size:14px;color:var(--second)}
 nav{margin-top:36px}
 nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
@@ -49,7 +51,9 @@ nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
 .text ul{padding-left:20px}
 @media (min-width:1060px){
 .pair{grid-template-columns:minmax(0,1fr) minmax(0,1fr)}
-.answer{grid-template-columns:minmax(0,12fr) minmax(0,11fr)}
+.answer{grid-template:auto 1fr/minmax(0,12fr) minmax(0,11fr)}
+.answer figure{grid-row:span 2}
+.answer .signatures{align-self:end;width:100%}
 .answer.alone{grid-template-columns:minmax(0,1fr)}
 .wide{grid-column:1/-1}
 .tall{grid-row:span 2}}

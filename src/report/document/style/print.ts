@@ -8,20 +8,28 @@ h1{font-size:25pt}
 h2{font-size:14pt;break-after:avoid}
 h3,caption{font-size:9pt;break-after:avoid}
 .kicker,dt,.conditions,.note,figcaption,.signatures p{font-size:8pt}
-.title{flex-wrap:nowrap;padding-bottom:3mm}
-.name{flex:1 1 0}
-.cells div{padding:1mm 2.5mm}
-.verdict{padding:3.5mm 0 3mm}
-.verdict.short{margin:3.5mm 0 3mm}
+.title{padding-bottom:3mm;column-gap:5mm}
+.facts{flex:1 1 0}
+.facts,.emblem,.cells{margin-top:2mm}
+.cells div{padding:1mm 1.6mm}
+dd{font-size:8pt}
+.verdict{padding:3mm 0 2mm}
+.verdict.short{margin:3mm 0 2mm;padding-block:0}
 .verdict h2{font-size:18pt}
-.nearest{font-size:11pt}
+.nearest{font-size:10.5pt;margin-top:1mm}
+.conditions{margin-top:1mm}
+.note{max-width:none}
 table,thead th{font-size:8.5pt}
-th,td{padding-block:1mm}
+th,td{padding:.9mm 0 .9mm 2mm}
+#requirements :is(th,td){padding-block:.5mm}
+#requirements .strip{width:30mm;height:auto}
 .unit,#requirements thead .share .unit{font-size:7.5pt}
-.answer{display:block}
-.answer figure{margin-top:5mm}
+.answer{display:grid;grid-template:auto auto/122mm minmax(0,1fr);gap:0 7mm}
+.answer .limits{grid-column:1/-1}
+.answer figure{grid-area:2/1/3/3;margin-top:4mm}
 .answer .wide{width:122mm}
-.signatures{margin-top:11mm;max-width:none}
+.answer .signatures{grid-area:2/2;align-self:end;flex-direction:column;gap:13mm;margin:0 0 6mm}
+.signatures p{flex:none}
 .first{break-after:page}
 .sheet{margin-top:0;padding-top:3mm}
 .sheet+.sheet{margin-top:8mm}
@@ -29,6 +37,8 @@ th,td{padding-block:1mm}
 .pair>div{gap:6mm}
 .pair>.wide{grid-column:1/-1}
 .pair>.tall{grid-row:span 2}
+#evidence .pair>:nth-child(-n+2){grid-column:1/-1}
+#evidence .pair>:nth-child(2){grid-template-columns:repeat(3,minmax(0,1fr))}
 figure,table,.text,dl,.verdict,.signatures,tr{break-inside:avoid}
 thead{display:table-header-group}
 .scroll{overflow:visible}

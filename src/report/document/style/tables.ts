@@ -8,7 +8,7 @@ th,td{padding:5px 0 5px 16px;text-align:right;font-weight:400;vertical-align:bas
 border-bottom:1px solid var(--hairline)}
 th:first-child,td:first-child{padding-left:0}
 th:not(.n),td.l{text-align:left}
-thead th{color:var(--second);font-size:14px;vertical-align:bottom;border-bottom:1.5px solid var(--ink)}
+thead th{color:var(--second);font-size:14px;white-space:normal;vertical-align:bottom;border-bottom:1.5px solid var(--ink)}
 .unit{color:var(--second);font-size:13px}
 td.l{white-space:normal}
 tbody th:not(.n){white-space:normal}
@@ -27,32 +27,39 @@ tr.short :is(th,td){color:var(--short);font-weight:700}
 [id^=matrix] thead th:not(:first-child){text-align:right}
 .words td{white-space:normal;overflow-wrap:anywhere}
 .words tbody th{width:9em;color:var(--second);white-space:normal}
-#requirements :is(th,td):not(:first-child){padding-left:12px}
 #requirements td{vertical-align:middle}
 #requirements th{vertical-align:middle}
 #requirements thead th{vertical-align:bottom}
 #requirements .room{font-weight:700}
-#requirements tbody th{white-space:nowrap}
+#requirements .over{white-space:normal}
 #requirements .share{width:136px;text-align:left}
-#requirements thead .share .unit{display:block;padding-left:22px;font-size:13px}
+#couplings td{white-space:nowrap}
+#requirements thead .share .unit{display:block;white-space:nowrap;padding-left:22px;font-size:13px}
 #requirements td.share{padding-block:0}
 .strip{display:block}
 .word{display:none}
 summary{cursor:pointer;font-weight:700;padding:4px 0;width:fit-content}
 details caption{font-size:0;padding:0}
-@media (max-width:639px){
+@media (min-width:700px){#requirements :is(th,td):not(:first-child){padding-left:12px}}
+@media (max-width:699px){
 #requirements{display:block}
 #requirements thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
 #requirements tbody{display:block;border-top:1.5px solid var(--ink)}
-#requirements tbody tr{display:flex;flex-wrap:wrap;justify-content:space-between;column-gap:10px;padding:7px 0;
+#requirements tbody tr{display:grid;grid-template-columns:minmax(0,1fr) auto 108px;column-gap:10px;padding:7px 0;
 border-bottom:1px solid var(--hairline)}
 #requirements tbody :is(th,td):is(th,td){border:0;padding:0;font-size:14.5px}
-#requirements tbody th{flex:1 1 60%;font-size:15px}
-#requirements .room{flex:0 0 auto;order:1;font-size:15px}
-#requirements .over{order:2}
-#requirements .limit{order:3}
-#requirements .predicted{order:4}
-#requirements .share{order:5;flex:0 0 124px;width:auto}
-#requirements .word{display:inline;color:var(--second);font-weight:400}
+#requirements tbody th{grid-area:1/1/2/3;font-size:15px}
+#requirements .room{grid-area:1/3;font-size:15px}
+#requirements .over{grid-area:2/1;text-align:left}
+#requirements .limit{grid-area:2/2}
+#requirements .predicted{grid-area:2/3}
+#requirements .share{grid-area:3/1/4/4;width:auto}
+#requirements .word{display:inline;color:var(--second);font-weight:400}}
+@media (min-width:480px) and (max-width:699px){
+#requirements tbody tr{grid-template-columns:minmax(0,1fr) 70px 108px 124px}
+#requirements tbody th{grid-area:1/1/2/4}
+#requirements .room{grid-area:1/4}
+#requirements .share{grid-area:2/4}}
+@media (max-width:639px){
 th,td{padding-left:10px}}
 `.trim();
