@@ -22,7 +22,8 @@ const HOSTILE: readonly Texts[] = [false, true].flatMap((isRude) => {
   return names.map((name, n) => ({ name, notes: notes[n] as string, revision: revisions[n] as string }));
 });
 
-const HARMLESS: Texts = { name: 'Name', notes: 'Notes', revision: 'A' };
+/** A harmless design whose name is as long: a long name may be set smaller. */
+const harmless = (length: number): Texts => ({ name: 'N'.repeat(length), notes: 'Notes', revision: 'A' });
 
 /** The texts as a reader must see them: what no file may hold is replaced by a sign for that. */
 const seen = (text: string): string => {
@@ -87,20 +88,24 @@ describe.skipIf(NO_CHROMIUM)('texts of a design in a report', () => {
   it(`${COUNT} names, notes and revisions make the same elements, texts and attributes as harmless ones`, async () => {
     const opened = await chromium.openText('empty.html', '<!doctype html><title>Parser</title>');
     const { page } = opened;
-    const right = await makeOf(page, html(HARMLESS));
-    expect(right.nodes.H1).toBe(1);
-    expect(right.nodes['#text']).toBeGreaterThan(100);
-    expect(right.attributes).toBeGreaterThan(300);
+    const rights = new Map<number, Make>();
+    for (const length of new Set(HOSTILE.map(({ name }) => name.length)))
+      rights.set(length, await makeOf(page, html(harmless(length))));
     const faults: string[] = [];
     for (const texts of HOSTILE) {
       const { nodes, attributes, name, title } = await makeOf(page, html(texts));
+      const right = rights.get(texts.name.length) as Make;
+      expect(right.nodes.H1).toBe(1);
+      expect(right.nodes['#text']).toBeGreaterThan(100);
+      expect(right.attributes).toBeGreaterThan(300);
       if (JSON.stringify(nodes) !== JSON.stringify(right.nodes)) faults.push(`nodes: ${JSON.stringify(texts)}`);
       if (attributes !== right.attributes) faults.push(`attributes: ${JSON.stringify(texts)}`);
       if (name !== seen(texts.name)) faults.push(`name: ${JSON.stringify(texts.name)} as ${JSON.stringify(name)}`);
       if (!title.startsWith(seen(texts.name).trim().replace(/\s+/g, ' ')))
         faults.push(`title: ${JSON.stringify(texts.name)} as ${JSON.stringify(title)}`);
     }
-    expect(faults).toEqual([]);
+    // The first few are enough to see what is wrong.
+    expect(faults.slice(0, 3)).toEqual([]);
     expect(opened.requests).toEqual([]);
     await opened.close();
   }, 240_000);
