@@ -46,6 +46,8 @@ nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
 .pair,.answer{display:grid;grid-template-columns:minmax(0,1fr);gap:32px 48px;align-items:start}
 .pair{margin-top:16px}
 .pair>div{display:grid;grid-template-columns:minmax(0,1fr);gap:28px;align-content:start}
+.pair>.wide:has(>.scroll+.scroll){display:flex;flex-wrap:wrap;gap:28px 36px}
+.scroll{max-width:100%}
 .text{max-width:68ch}
 .text p,.text li{margin-top:6px}
 .text ul{padding-left:20px}

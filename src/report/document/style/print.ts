@@ -4,11 +4,11 @@ export const PRINT_RULES: string = `
 @media print{
 body{padding:0;max-width:none;font-size:8.5pt;line-height:1.4;background:none}
 .skip,nav,label,.readout{display:none}
-h1{font-size:25pt}
+h1{font-size:25pt;line-height:1.08}
 h2{font-size:14pt;break-after:avoid}
 h3,caption{font-size:9pt;break-after:avoid}
 .kicker,dt,.conditions,.note,figcaption,.signatures p{font-size:8pt}
-.title{padding-bottom:3mm;column-gap:5mm}
+.title{padding-bottom:2mm;column-gap:5mm}
 .facts{flex:1 1 0}
 .facts,.emblem,.cells{margin-top:2mm}
 .cells div{padding:1mm 1.6mm}
@@ -21,12 +21,16 @@ dd{font-size:8pt}
 .note{max-width:none}
 table,thead th{font-size:8.5pt}
 th,td{padding:.9mm 0 .9mm 2mm}
-#requirements :is(th,td){padding-block:.5mm}
-#requirements .strip{width:30mm;height:auto}
+#requirements :is(th,td){padding-block:.4mm}
+#requirements .strip{width:28mm;height:auto}
+.half table{font-size:8pt}
+.half :is(th,td):not(:first-child){padding-left:1.3mm}
+#couplings td{white-space:normal}
+#couplings td:not(.l){white-space:nowrap}
 .unit,#requirements thead .share .unit{font-size:7.5pt}
 .answer{display:grid;grid-template:auto auto/122mm minmax(0,1fr);gap:0 7mm}
 .answer .limits{grid-column:1/-1}
-.answer figure{grid-area:2/1/3/3;margin-top:4mm}
+.answer figure{grid-area:2/1/3/3;margin-top:3mm}
 .answer .wide{width:122mm}
 .answer .signatures{grid-area:2/2;align-self:end;flex-direction:column;gap:13mm;margin:0 0 6mm}
 .signatures p{flex:none}

@@ -22,8 +22,8 @@ tr.short :is(th,td){color:var(--short);font-weight:700}
 .figures td{font:13px/1.35 ${CODE}}
 .figures td,.figures th.n{text-align:right}
 #matrix,[id^=matrix-]{width:auto}
-[id^=matrix] :is(th,td){font-size:14px}
-[id^=matrix] :is(th,td):not(:first-child){padding-left:14px}
+[id^=matrix] :is(th,td){font-size:13.5px}
+[id^=matrix] :is(th,td):not(:first-child){padding-left:10px}
 [id^=matrix] thead th:not(:first-child){text-align:right}
 .words td{white-space:normal;overflow-wrap:anywhere}
 .words tbody th{width:9em;color:var(--second);white-space:normal}
@@ -45,7 +45,7 @@ details caption{font-size:0;padding:0}
 #requirements{display:block}
 #requirements thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
 #requirements tbody{display:block;border-top:1.5px solid var(--ink)}
-#requirements tbody tr{display:grid;grid-template-columns:minmax(0,1fr) auto 108px;column-gap:10px;padding:7px 0;
+#requirements tbody tr{display:grid;grid-template-columns:minmax(0,1fr) auto minmax(108px,auto);column-gap:10px;padding:7px 0;
 border-bottom:1px solid var(--hairline)}
 #requirements tbody :is(th,td):is(th,td){border:0;padding:0;font-size:14.5px}
 #requirements tbody th{grid-area:1/1/2/3;font-size:15px}
@@ -56,7 +56,7 @@ border-bottom:1px solid var(--hairline)}
 #requirements .share{grid-area:3/1/4/4;width:auto}
 #requirements .word{display:inline;color:var(--second);font-weight:400}}
 @media (min-width:480px) and (max-width:699px){
-#requirements tbody tr{grid-template-columns:minmax(0,1fr) 70px 108px 124px}
+#requirements tbody tr{grid-template-columns:minmax(0,1fr) minmax(70px,auto) minmax(112px,auto) 124px}
 #requirements tbody th{grid-area:1/1/2/4}
 #requirements .room{grid-area:1/4}
 #requirements .share{grid-area:2/4}}
