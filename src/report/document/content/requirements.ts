@@ -15,7 +15,7 @@ import { numberColumn, type Row, type Table, type Tone, textColumn } from './con
 const LISTED = 10;
 
 /** Explains the mark after the name of a requirement. */
-export const RELATIVE_NOTE = `${RELATIVE} relative to the loss at the center`;
+export const RELATIVE_NOTE: string = `${RELATIVE} relative to the loss at the center`;
 
 /** The requirements of the first page: those listed, the tightest of all, and what to say of the others. */
 export interface Listed {
