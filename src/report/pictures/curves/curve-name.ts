@@ -1,5 +1,5 @@
 import { textWidth } from '../../svg/words.js';
-import { type Box, grown, isFree, type LabelMap } from './label-map.js';
+import { type Box, countedMap, grown, isCountedFree, isFree, type LabelMap } from './label-map.js';
 import type { Point } from './thin.js';
 
 /** Where the name of a curve stands, and the end of the leader to the curve when it stands apart. */
@@ -28,16 +28,21 @@ export function textSize(lines: readonly string[], size = 13, isBold = false): r
   return [Math.max(...lines.map((text) => textWidth(text, size, isBold))), LINE_HEIGHT * lines.length];
 }
 
-/** Points about 7 pixels apart along a line. */
-function walked(points: readonly Point[]): readonly Point[] {
-  return points.flatMap(([x, y], n) => {
-    const [px, py] = points[Math.max(0, n - 1)] as Point;
-    const steps = Math.max(1, Math.round(Math.hypot(x - px, y - py) / 7));
-    return Array.from({ length: steps }, (_, k): Point => {
-      const t = (k + 1) / steps;
-      return [px + (x - px) * t, py + (y - py) * t];
-    });
-  });
+/** Points about 7 pixels apart along a line, in the frame, those nearest to a wish first. */
+function walked(points: readonly Point[], frame: Box, wish: Point): readonly Point[] {
+  const found: { readonly point: Point; readonly away: number }[] = [];
+  for (let n = 1; n < points.length; n += 1) {
+    const from = points[n - 1] as Point;
+    const to = points[n] as Point;
+    const steps = Math.max(1, Math.round(Math.hypot(to[0] - from[0], to[1] - from[1]) / 7));
+    for (let k = 1; k <= steps; k += 1) {
+      const x = from[0] + ((to[0] - from[0]) * k) / steps;
+      const y = from[1] + ((to[1] - from[1]) * k) / steps;
+      if (x < frame.left || x > frame.right || y < frame.top || y > frame.bottom) continue;
+      found.push({ point: [x, y], away: Math.hypot(x - wish[0], y - wish[1]) });
+    }
+  }
+  return found.sort((a, b) => a.away - b.away).map(({ point }) => point);
 }
 
 function boxAt([x, y]: Point, [dx, dy]: Point, gap: number, [width, height]: readonly [number, number]): Box {
@@ -70,8 +75,8 @@ export function namePlace(
   size: readonly [number, number],
   wish: Point,
 ): NamePlace | undefined {
-  const distance = ([x, y]: Point): number => Math.hypot(x - wish[0], y - wish[1]);
-  const points = [...walked(curve)].sort((a, b) => distance(a) - distance(b));
+  const counted = countedMap(map);
+  const points = walked(curve, map.frame, wish);
   for (const room of [9, 3])
     for (const point of points)
       for (const direction of DIRECTIONS) {
@@ -82,14 +87,15 @@ export function namePlace(
           top: box.top - (direction[1] > 0 ? 0 : room),
           bottom: box.bottom + (direction[1] < 0 ? 0 : room),
         };
-        if (isFree(map, away)) return { box };
+        if (isCountedFree(counted, away)) return { box };
       }
   for (const gap of APART)
     for (const point of points)
       for (const direction of DIRECTIONS) {
         const box = boxAt(point, direction, gap, size);
+        if (!isCountedFree(counted, grown(box, 5))) continue;
         const end = nearestOf(box, point);
-        if (isFree(map, grown(box, 5)) && isLeaderFree(map, point, end)) return { box, leader: [end, point] };
+        if (isLeaderFree(map, point, end)) return { box, leader: [end, point] };
       }
   return undefined;
 }

@@ -45,15 +45,21 @@ const BEYOND = 40;
 
 /** The points of a curve within the plot, thinned. */
 export function curvePoints(plot: Plot, hz: ArrayLike<number>, levels: ArrayLike<number>): readonly Point[] {
-  const x = scaleLinear([plot.fromHz, plot.toHz], [plot.left, plot.right]);
-  const y = scaleLinear([plot.upper, plot.lower], [plot.top, plot.bottom]);
-  const points: Point[] = [];
+  const { left, right, top, bottom, fromHz, toHz, upper, lower } = plot;
+  const perHz = (right - left) / (toHz - fromHz);
+  const perLevel = (bottom - top) / (lower - upper);
+  const xs = new Float64Array(hz.length);
+  const ys = new Float64Array(hz.length);
+  let count = 0;
   for (let n = 0; n < hz.length; n += 1) {
-    const [px, py] = [x(hz[n] as number), y(levels[n] as number)];
-    if (px < plot.left - BEYOND || px > plot.right + BEYOND) continue;
-    points.push([px, Math.min(Math.max(py, plot.top - BEYOND), plot.bottom + BEYOND)]);
+    const x = left + ((hz[n] as number) - fromHz) * perHz;
+    if (x < left - BEYOND || x > right + BEYOND) continue;
+    const y = top + ((levels[n] as number) - upper) * perLevel;
+    xs[count] = x;
+    ys[count] = Math.min(Math.max(y, top - BEYOND), bottom + BEYOND);
+    count += 1;
   }
-  return thinned(points);
+  return thinned(xs.subarray(0, count), ys.subarray(0, count));
 }
 
 /** A curve as a path. */

@@ -39,19 +39,23 @@ function farthest({ xs, ys }: Track, from: number, to: number): { readonly at: n
  * Source: D. H. Douglas, T. K. Peucker, Algorithms for the reduction of the number of points required to represent a
  * digitized line, Cartographica 10(2), 1973 (from memory).
  */
-export function thinned(points: readonly Point[]): readonly Point[] {
-  if (points.length < 3) return points;
-  const track = { xs: Float64Array.from(points, ([x]) => x), ys: Float64Array.from(points, ([, y]) => y) };
-  const keep = new Uint8Array(points.length);
-  keep[0] = 1;
-  keep[points.length - 1] = 1;
-  const open: (readonly [number, number])[] = [[0, points.length - 1]];
-  for (let next = open.pop(); next !== undefined; next = open.pop()) {
-    const [from, to] = next;
-    const { at, size } = farthest(track, from, to);
+export function thinned(xs: Float64Array, ys: Float64Array): readonly Point[] {
+  const keep = new Uint8Array(xs.length);
+  const last = xs.length - 1;
+  const open = last > 1 ? [0, last] : [];
+  keep.fill(1, 0, Math.min(1, xs.length));
+  if (last > 0) keep[last] = 1;
+  while (open.length > 0) {
+    const to = open.pop() as number;
+    const from = open.pop() as number;
+    const { at, size } = farthest({ xs, ys }, from, to);
     if (size <= TOLERANCE * TOLERANCE) continue;
     keep[at] = 1;
-    open.push([from, at], [at, to]);
+    open.push(from, at, at, to);
   }
-  return points.filter((_, n) => keep[n] === 1);
+  const points: Point[] = [];
+  keep.forEach((isKept, n) => {
+    if (isKept === 1) points.push([xs[n] as number, ys[n] as number]);
+  });
+  return points;
 }
