@@ -6,10 +6,10 @@ import { type Requirement, requirementOf } from '../../words/requirement.js';
 import { closePlot } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
 import { spanWords } from './flags.js';
-import { lossPanel, lossRange } from './loss-panel.js';
-import { matchPanel, matchRange } from './match-panel.js';
-import { clipFrame, plotFrame } from './plot.js';
-import { limitFinding } from './response-words.js';
+import { lossLevels, lossPanel, lossRange } from './loss-panel.js';
+import { matchLevels, matchPanel, matchRange } from './match-panel.js';
+import { axisRoom, clipFrame, plotFrame } from './plot.js';
+import { decapitalized, limitFinding } from './response-words.js';
 import { RULER_HEIGHT, ruler } from './ruler.js';
 
 const TOP = 26;
@@ -23,7 +23,8 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
   const [lossHeight, gap, matchHeight] = HEIGHTS[format];
   const [upper, lower] = lossRange(design, data);
   const [least, most] = matchRange(design);
-  const loss = closePlot(design, data, format, { name: 'band', top: TOP, height: lossHeight, upper, lower });
+  const room = Math.max(axisRoom(lossLevels(upper, lower)), axisRoom(matchLevels(least, most)));
+  const loss = closePlot(design, data, format, { name: 'band', top: TOP, height: lossHeight, upper, lower, room });
   const matchTop = TOP + lossHeight + gap;
   const match = closePlot(design, data, format, {
     name: 'band',
@@ -31,6 +32,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     height: matchHeight,
     upper: least,
     lower: most,
+    room,
   });
   const body = plotFrame(
     loss,
@@ -67,7 +69,7 @@ function words(
   const finding =
     requirements.length === 0
       ? 'Loss and match of the passband'
-      : `Loss and match: ${limitFinding(requirements, unit).replace(/^[CS]/, (letter) => letter.toLowerCase())}`;
+      : `Loss and match: ${decapitalized(limitFinding(requirements, unit))}`;
   return {
     finding,
     caption:

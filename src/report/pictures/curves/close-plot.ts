@@ -12,6 +12,8 @@ export interface CloseFrame {
   readonly height: number;
   readonly upper: number;
   readonly lower: number;
+  /** Room for the numbers of the level axis. */
+  readonly room: number;
 }
 
 /** A plot of the passband and a little beside it. */
@@ -22,7 +24,7 @@ export function closePlot(design: DesignReport, data: CurveData, format: Format,
     prefix: `${frame.name}-${format}`,
     band,
     unit: unitOf(band),
-    left: format === 'wide' ? 46 : 38,
+    left: Math.max(format === 'wide' ? 46 : 38, frame.room),
     right: FORMAT_WIDTH[format] - (format === 'wide' ? 14 : 8),
     top: frame.top,
     bottom: frame.top + frame.height,

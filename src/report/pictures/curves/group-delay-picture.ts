@@ -12,6 +12,7 @@ import { drawNames } from './draw-names.js';
 import { spanWords } from './flags.js';
 import { labelMap, takeBox, takeLine } from './label-map.js';
 import {
+  axisRoom,
   clipFrame,
   clipped,
   curvePath,
@@ -23,7 +24,7 @@ import {
   xOf,
   yOf,
 } from './plot.js';
-import { limitFinding } from './response-words.js';
+import { decapitalized, limitFinding } from './response-words.js';
 import { RULER_HEIGHT, ruler } from './ruler.js';
 import {
   drawVariationBox,
@@ -74,7 +75,16 @@ function worstMarks(plot: Plot, boxes: readonly VariationBox[]): readonly Markup
 function drawing(design: DesignReport, data: CurveData, format: Format): Drawing {
   const boxes = boxesOf(design, data);
   const [upper, lower] = rangeOf(design, data, boxes);
-  const plot = closePlot(design, data, format, { name: 'group-delay', top: TOP, height: HEIGHT[format], upper, lower });
+  const levels = levelsBetween(upper, lower, 6);
+  const room = axisRoom(levels);
+  const plot = closePlot(design, data, format, {
+    name: 'group-delay',
+    top: TOP,
+    height: HEIGHT[format],
+    upper,
+    lower,
+    room,
+  });
   const points = (seconds: Float64Array) =>
     curvePoints(
       plot,
@@ -107,7 +117,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     hatchPatterns(plot.prefix, ['transmission']),
     clipFrame(plot, 'clip'),
     litWindow(plot),
-    levelLines(plot, levelsBetween(upper, lower, 6), 'ns', 1),
+    levelLines(plot, levels, 'ns'),
     ...boxes.map((box) => drawVariationBox(plot, box)),
     clipped(plot, 'clip', ...lossless, curvePath(lossy, 'thick s-transmission')),
     ...marks,
@@ -124,7 +134,7 @@ function words(design: DesignReport, unit: FrequencyUnit): Pick<Picture, 'findin
   const finding =
     rows.length === 0
       ? 'Group delay of the passband'
-      : `Delay variation: ${limitFinding(requirements, unit).replace(/^[CS]/, (letter) => letter.toLowerCase())}`;
+      : `Delay variation: ${decapitalized(limitFinding(requirements, unit))}`;
   const used = requirements.map(
     ({ predicted, limit, span }) =>
       `${predicted.toFixed(1)} of ${trimmed(limit, 4)} ns over ${spanWords(span)} ${unit.name}`,

@@ -56,6 +56,11 @@ export function lossRange(design: DesignReport, data: CurveData): readonly [numb
   return roundRange(0, 1.35 * reach, 5);
 }
 
+/** Levels with a hairline. */
+export function lossLevels(upper: number, lower: number): readonly number[] {
+  return levelsBetween(upper, lower, 5);
+}
+
 /** Worst points on the loss curve. */
 function marks(
   plot: Plot,
@@ -95,7 +100,7 @@ export function lossPanel(design: DesignReport, data: CurveData, plot: Plot): Ma
   const choices = [['insertion loss'], ['insertion', 'loss'], ['S21']];
   return fragment(
     litWindow(plot),
-    levelLines(plot, levelsBetween(plot.upper, plot.lower, 5), 'dB', 1),
+    levelLines(plot, lossLevels(plot.upper, plot.lower), 'dB'),
     ...boxes.map((box) => drawVariationBox(plot, box)),
     ...lids.map(({ lid }) => drawLid(plot, lid)),
     clipped(

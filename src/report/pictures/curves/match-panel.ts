@@ -19,6 +19,11 @@ export function matchRange({ specification, mask }: DesignReport): readonly [num
   return [Math.max(0, 10 * Math.floor((least - 9) / 10)), 10 * Math.ceil((most + 15) / 10)];
 }
 
+/** Levels with a hairline. */
+export function matchLevels(upper: number, lower: number): readonly number[] {
+  return levelsBetween(upper, lower, 4);
+}
+
 /** Lower half of the band picture: return loss, better match further down. */
 export function matchPanel(design: DesignReport, data: CurveData, plot: Plot): Markup {
   const lids = design.mask
@@ -41,7 +46,7 @@ export function matchPanel(design: DesignReport, data: CurveData, plot: Plot): M
   const choices = [['return loss'], ['return', 'loss'], ['S11']];
   return fragment(
     litWindow(plot),
-    levelLines(plot, levelsBetween(plot.upper, plot.lower, 4), 'dB', 1),
+    levelLines(plot, matchLevels(plot.upper, plot.lower), 'dB'),
     ...lids.map(({ lid }) => drawLid(plot, lid)),
     clipped(
       plot,

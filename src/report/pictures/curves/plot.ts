@@ -3,7 +3,7 @@ import { line } from 'd3-shape';
 import { type Band, edgesOfBand } from '../../../forms/index.js';
 import type { Format } from '../../svg/drawing.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
-import { label, minus } from '../../svg/words.js';
+import { label, minus, textWidth } from '../../svg/words.js';
 import type { FrequencyUnit } from '../../words/numbers.js';
 import { type Point, thinned } from './thin.js';
 
@@ -100,13 +100,22 @@ export function decimalsOf(step: number): number {
   return Math.max(0, Math.min(9, Math.ceil(-Math.log10(step) - 1e-9)));
 }
 
-/** Horizontal hairlines with their numbers at the left, and the unit alone above the topmost. */
-export function levelLines(plot: Plot, ticks: readonly number[], unit: string, sign: 1 | -1): Markup {
+/** Numbers of a level axis, with as many decimals as tell them apart. */
+function levelTexts(ticks: readonly number[]): readonly string[] {
   const step = ticks.length > 1 ? Math.abs((ticks[1] as number) - (ticks[0] as number)) : 1;
   const digits = decimalsOf(step);
-  const lines = ticks.map((level) => {
-    const y = yOf(plot, level);
-    const text = minus((sign * level + 0).toFixed(digits)).replace(/^−0(\.0*)?$/, (zero) => zero.slice(1));
+  return ticks.map((level) => minus((level + 0).toFixed(digits)).replace(/^−0(\.0*)?$/, (zero) => zero.slice(1)));
+}
+
+/** Room that the numbers of a level axis need at its left, pixels. */
+export function axisRoom(ticks: readonly number[]): number {
+  return Math.max(...levelTexts(ticks).map((text) => textWidth(text, 12.5))) + 8;
+}
+
+/** Horizontal hairlines with their numbers at the left, and the unit alone above the topmost. */
+export function levelLines(plot: Plot, ticks: readonly number[], unit: string): Markup {
+  const lines = levelTexts(ticks).map((text, n) => {
+    const y = yOf(plot, ticks[n] as number);
     return fragment(
       element('line', { x1: plot.left, x2: plot.right, y1: y, y2: y, class: 's-hairline hair' }),
       label(plot.left - 6, y + 4.4, text, 'tick', 'end'),

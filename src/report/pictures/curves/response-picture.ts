@@ -78,7 +78,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     clipFrame(plot, 'clip'),
     litWindow(plot, foot),
     clipped(plot, 'clip', drawWalls(plot, walls)),
-    levelLines(plot, levelTicks(plot), 'dB', 1),
+    levelLines(plot, levelTicks(plot), 'dB'),
     ...lids.map(({ lid }) => drawLid(plot, lid)),
     drawCurves(plot, curves),
     ...lidMarks(plot, lids),
@@ -113,7 +113,7 @@ export function responsePictureOf(design: DesignReport, data: CurveData): Pictur
  *   passband: { lowerHz: '3822 MHz', upperHz: '3858 MHz' }, order: 6, returnLossDb: 22,
  *   transmissionZeros: [1.45, -1.45], mask: [{ fromHz: '3868 MHz', rejectionDb: 34 }],
  * }));
- * picture.finding; // 'Clear of the limit; least room: 2.2 dB, at 3870.5 MHz'
+ * picture.finding; // 'Rejection: clear of the limit; least room: 2.2 dB, at 3870.5 MHz'
  */
 export function responsePicture(design: DesignReport): Picture {
   return responsePictureOf(design, curveData(design));

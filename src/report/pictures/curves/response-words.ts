@@ -25,6 +25,15 @@ export function limitFinding(requirements: readonly Requirement[], unit: Frequen
   return `Short of ${short === 1 ? 'one limit' : `${short} limits`}; farthest off: ${place}`;
 }
 
+/** With a small first letter, to stand after a colon. */
+export function decapitalized(text: string): string {
+  return text.charAt(0).toLowerCase() + text.slice(1);
+}
+
+function capitalized(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
+}
+
 /** Finding, caption and alternative of the response picture. */
 export function responseWords(
   design: DesignReport,
@@ -34,7 +43,10 @@ export function responseWords(
   const unit = unitOf(band);
   const shown = design.mask.filter(({ line }) => !isInBand(line) || 'returnLossDb' in line);
   const requirements = shown.map((row) => requirementOf(row, unit));
-  const finding = requirements.length === 0 ? 'Transmission and reflection' : limitFinding(requirements, unit);
+  // Limits on other quantities have pictures of their own: the finding says which ones it is about.
+  const kinds = [...new Set(requirements.map(({ name }) => name.replace(RELATIVE, '')))].join(' and ');
+  const found = decapitalized(limitFinding(requirements, unit));
+  const finding = requirements.length === 0 ? 'Transmission and reflection' : `${capitalized(kinds)}: ${found}`;
   const lines = hasLoss ? 'Thick: transmission with loss; thin: lossless.' : 'Lossless: no unloaded Q is stated.';
   const verdict = verdictOf(shown, unit);
   const list = requirements
