@@ -29,18 +29,36 @@ export function sizeText(value: number): string {
   return Math.abs(value) >= 0.01 && Math.abs(value) < 1000 ? value.toPrecision(2) : value.toExponential(1);
 }
 
+/** The unit in which all delays of one band are written, and the decimals that show them to a thousandth of it. */
+export interface DelayUnit {
+  readonly name: string;
+  readonly seconds: number;
+  readonly digits: number;
+}
+
+/**
+ * Delays go with the reciprocal of the bandwidth, whatever the center: ns from 1 MHz of width up, µs from 1 kHz up, ms below.
+ */
+export function delayUnitOf({ bandwidthHz }: Band): DelayUnit {
+  const [name, seconds] = bandwidthHz >= 1e6 ? ['ns', 1e-9] : bandwidthHz >= 1e3 ? ['µs', 1e-6] : ['ms', 1e-3];
+  return { name, seconds, digits: 3 };
+}
+
 /** The unit in which the frequencies of one band are written, and the decimals that resolve a ten thousandth of its width. */
 export interface FrequencyUnit {
   readonly name: string;
   readonly hertz: number;
   readonly digits: number;
+  /** Delays of the same band: one unit for a whole document. */
+  readonly delay: DelayUnit;
 }
 
 /** MHz, but kHz and Hz for bands far below 1 MHz. */
-export function unitOf({ centerHz, bandwidthHz }: Band): FrequencyUnit {
+export function unitOf(band: Band): FrequencyUnit {
+  const { centerHz, bandwidthHz } = band;
   const [name, hertz] = centerHz >= 1e6 ? ['MHz', 1e6] : centerHz >= 1e3 ? ['kHz', 1e3] : ['Hz', 1];
   const digits = Math.ceil(4 - Math.log10(bandwidthHz / hertz));
-  return { name, hertz, digits: Math.min(Math.max(digits, 3), 9) };
+  return { name, hertz, digits: Math.min(Math.max(digits, 3), 9), delay: delayUnitOf(band) };
 }
 
 /** A frequency in the unit, trailing zeros left out. */
