@@ -5,12 +5,11 @@ import { trimmed, unitOf } from '../../words/numbers.js';
 import { type Requirement, requirementOf } from '../../words/requirement.js';
 import { closePlot } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
-import { spanWords } from './flags.js';
+import { limitFinding, spanWords } from './limit-words.js';
 import { lossLevels, lossPanel, lossRange } from './loss-panel.js';
 import { matchLevels, matchPanel, matchRange } from './match-panel.js';
 import { axisRoom, clipFrame, plotFrame } from './plot.js';
-import { decapitalized, limitFinding } from './response-words.js';
-import { RULER_HEIGHT, ruler } from './ruler.js';
+import { ruler } from './ruler.js';
 
 const TOP = 26;
 /** Heights of the two panels and of the gap between them. */
@@ -34,6 +33,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     lower: most,
     room,
   });
+  const scale = ruler(match, match.bottom, []);
   const body = plotFrame(
     loss,
     loss.top,
@@ -43,9 +43,9 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     clipFrame(match, 'match'),
     lossPanel(design, data, loss),
     matchPanel(design, data, match),
-    ruler(match, match.bottom, []),
+    scale.markup,
   );
-  return { width: FORMAT_WIDTH[format], height: match.bottom + RULER_HEIGHT - 12, body };
+  return { width: FORMAT_WIDTH[format], height: match.bottom + scale.height, body };
 }
 
 function requirementsOf(design: DesignReport): readonly Requirement[] {
@@ -66,14 +66,11 @@ function words(
       `${name} ${predicted.toFixed(2)} dB of ${trimmed(limit, 4)} dB at ${spanWords(span)} ${unit.name}`,
   );
   const loss = hasLoss ? `Insertion loss ${centerLossDb.toFixed(2)} dB at the center` : 'Lossless';
-  const finding =
-    requirements.length === 0
-      ? 'Loss and match of the passband'
-      : `Loss and match: ${decapitalized(limitFinding(requirements, unit))}`;
+  const hasBox = design.mask.some(({ line }) => 'insertionLossVariationDb' in line);
+  const finding = requirements.length === 0 ? 'Loss and match of the passband' : limitFinding(requirements);
   return {
     finding,
-    caption:
-      'Above: insertion loss, down is more loss; a box holds the variation allowed. Below: return loss, down is a better match; one ruler for both.',
+    caption: `Above: insertion loss, down is more loss${hasBox ? '; a box holds the variation allowed' : ''}. Below: return loss, down is a better match; one ruler for both.`,
     alternative: `${loss}; ${limits.length === 0 ? 'no limits are asked for in the passband' : limits.join(', ')}.`,
   };
 }
@@ -99,7 +96,7 @@ export function bandPictureOf(design: DesignReport, data: CurveData): Picture {
  *   passband: { lowerHz: '3822 MHz', upperHz: '3858 MHz' }, order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.45],
  *   unloadedQ: 9000, mask: [{ fromHz: '3823 MHz', toHz: '3857 MHz', returnLossDb: 20 }],
  * }));
- * picture.finding; // 'Loss and match: clear of the limit; least room: 2.3 dB, at 3840.0 MHz'
+ * picture.finding; // 'Return loss clear by 2.3 dB'
  */
 export function bandPicture(design: DesignReport): Picture {
   return bandPictureOf(design, curveData(design));

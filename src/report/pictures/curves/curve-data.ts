@@ -24,12 +24,16 @@ export interface CurveData {
   readonly centerLossDb: number;
 }
 
-/** Extra points in the passband, where the curves are looked at closely. */
-const CLOSE_POINTS = 601;
+/** Extra points over each of the two spans: the response file may reach less far, and is coarse in the passband. */
+const EVEN_POINTS = 601;
 /** Room in bandwidths that the wide picture leaves beside the band, beside the end of a mask line, and where one runs on. */
 const BESIDE = { band: 0.75, end: 0.15, open: 0.8 } as const;
 /** Farthest place that the wide picture reaches to, in omega. */
 const FAR = 20;
+/** Transmission zeros up to this |omega| are kept in the wide picture. */
+const ZEROS_SHOWN = 6;
+/** Lowest frequency of the wide picture as a share of the lower band edge: 0 Hz and less have no place in a band-pass. */
+const LEAST_SHARE = 0.05;
 /** Ends of the close pictures in omega: a quarter of the band on each side, up to twice that for a mask that reaches out. */
 const CLOSE = 1.25;
 const CLOSE_AT_MOST = 2;
@@ -67,18 +71,28 @@ function wideSpan({ specification, mask }: DesignReport): readonly [number, numb
     const shut = [fromHz, toHz, worstHz].filter((hz) => typeof hz === 'number');
     return [...open, ...shut.flatMap((hz) => [hz - room(BESIDE.end), hz + room(BESIDE.end)])];
   });
-  const within = ends.filter((hz) => hz > lowest && hz < highest);
-  return [Math.min(lowerHz - room(BESIDE.band), ...within), Math.max(upperHz + room(BESIDE.band), ...within)];
+  const zeros = specification.transmissionZeros
+    .filter(({ re, im }) => re === 0 && Math.abs(im) < ZEROS_SHOWN)
+    .flatMap(({ im }) => [hzFromOmega(band, im) - room(BESIDE.end), hzFromOmega(band, im) + room(BESIDE.end)]);
+  const within = [...ends, ...zeros].filter((hz) => hz > lowest && hz < highest);
+  const from = Math.min(lowerHz - room(BESIDE.band), ...within);
+  return [Math.max(from, LEAST_SHARE * lowerHz), Math.max(upperHz + room(BESIDE.band), ...within)];
 }
 
 /** The points of the response file, more of them in the passband, and every notch and edge exactly. */
-function gridOf(design: DesignReport, [from, to]: readonly [number, number]): Float64Array {
+function gridOf(
+  design: DesignReport,
+  wideHz: readonly [number, number],
+  closeHz: readonly [number, number],
+): Float64Array {
   const { band } = design.specification;
   const { reflectionZeros, transmissionZeros } = design.polynomials;
   const { lowerHz, upperHz } = edgesOfBand(band);
-  const close = Array.from({ length: CLOSE_POINTS }, (_, n) => from + ((to - from) * n) / (CLOSE_POINTS - 1));
   const notches = [...reflectionZeros, ...transmissionZeros].map(({ im }) => hzFromOmega(band, im));
-  const all = [...responseGrid(design.specification), ...close, ...notches, lowerHz, upperHz, band.centerHz];
+  const even = [wideHz, closeHz].flatMap(([from, to]) =>
+    Array.from({ length: EVEN_POINTS }, (_, n) => from + ((to - from) * n) / (EVEN_POINTS - 1)),
+  );
+  const all = [...responseGrid(design.specification), ...even, ...notches, lowerHz, upperHz, band.centerHz];
   return Float64Array.from(new Set(all)).sort();
 }
 
@@ -95,14 +109,15 @@ export function curveData(design: DesignReport): CurveData {
   const { specification, polynomials, matrix } = design;
   const { band, unloadedQ, mask } = specification;
   const closeHz = closeSpan(band, mask);
-  const hz = gridOf(design, closeHz);
+  const spanHz = wideSpan(design);
+  const hz = gridOf(design, spanHz, closeHz);
   const lossless = curveOf(sweepHz(polynomials, band, hz));
   // The transfer function keeps its digits in the deep stop band; only a list of Q needs the matrix.
   const model = typeof unloadedQ === 'object' ? matrix : polynomials;
   const lossy = unloadedQ === undefined ? lossless : curveOf(sweepHz(model, { ...band, unloadedQ }, hz));
   return {
     hz,
-    spanHz: wideSpan(design),
+    spanHz,
     closeHz,
     lossy,
     lossless,

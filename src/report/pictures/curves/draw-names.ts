@@ -23,7 +23,7 @@ function drawn({ leader, box, lines, role }: NonNullable<ReturnType<typeof place
     from === undefined || to === undefined
       ? []
       : [element('line', { x1: from[0], y1: from[1], x2: to[0], y2: to[1], class: `hair s-${role}` })];
-  return fragment(...line, placedText({ box, lines }, `bold f-${role}`));
+  return fragment(...line, placedText({ box, lines, isMet: true }, `bold f-${role}`));
 }
 
 function placeOf(map: LabelMap, { choices, curve, role, wish }: CurveName) {

@@ -9,8 +9,8 @@ import { requirementOf } from '../../words/requirement.js';
 import { closePlot, levelsBetween, roundRange } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
 import { drawNames } from './draw-names.js';
-import { spanWords } from './flags.js';
 import { labelMap, takeBox, takeLine } from './label-map.js';
+import { limitFinding, spanWords } from './limit-words.js';
 import {
   axisRoom,
   clipFrame,
@@ -24,8 +24,7 @@ import {
   xOf,
   yOf,
 } from './plot.js';
-import { decapitalized, limitFinding } from './response-words.js';
-import { RULER_HEIGHT, ruler } from './ruler.js';
+import { ruler } from './ruler.js';
 import {
   drawVariationBox,
   takeVariationBox,
@@ -36,14 +35,19 @@ import {
 } from './variation-box.js';
 import { placedText } from './walls.js';
 
-const NANO = 1e9;
 const TOP = 26;
 const HEIGHT: Readonly<Record<Format, number>> = { wide: 290, narrow: 240 };
 
+/** Delays in the unit of the document, for each second. */
+function perSecond(design: DesignReport): number {
+  return 1 / unitOf(design.specification.band).delay.seconds;
+}
+
 function boxesOf(design: DesignReport, { hz, lossy }: CurveData): readonly VariationBox[] {
+  const scale = perSecond(design);
   return design.mask
     .filter(({ line, worstHz }) => 'groupDelayVariationSeconds' in line && worstHz !== null)
-    .map((row) => variationBox(row, NANO * valueAt(hz, lossy.delaySeconds, row.worstHz as number), NANO));
+    .map((row) => variationBox(row, scale * valueAt(hz, lossy.delaySeconds, row.worstHz as number), scale));
 }
 
 /** Delay at the upper and lower side: room above the boxes and above the peaks at the edges, unless these are far higher. */
@@ -55,7 +59,8 @@ function rangeOf(
   const { band } = design.specification;
   const [from, to] = [hzFromOmega(band, -1.1), hzFromOmega(band, 1.1)];
   const near = lossy.delaySeconds.filter((_, n) => (hz[n] as number) >= from && (hz[n] as number) <= to);
-  const [peak, least] = [NANO * Math.max(...near), NANO * Math.min(...near)];
+  const scale = perSecond(design);
+  const [peak, least] = [scale * Math.max(...near), scale * Math.min(...near)];
   const reach = Math.max(...boxes.map(({ end }) => end), 0);
   const highest = reach === 0 ? 1.1 * peak : Math.max(1.25 * reach, Math.min(1.08 * peak, 2.2 * reach));
   const lowest = Math.min(least, ...boxes.map(({ best }) => best));
@@ -67,7 +72,7 @@ function rangeOf(
 
 function worstMarks(plot: Plot, boxes: readonly VariationBox[]): readonly Markup[] {
   return boxes.map(({ row, best }) => {
-    const [x, y] = [xOf(plot, row.worstHz as number), yOf(plot, best + row.predicted * NANO)];
+    const [x, y] = [xOf(plot, row.worstHz as number), yOf(plot, best + row.predicted / plot.unit.delay.seconds)];
     return requirementOf(row, plot.unit).isMet ? dot(x, y) : octagon(x, y);
   });
 }
@@ -89,14 +94,14 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     curvePoints(
       plot,
       data.hz,
-      seconds.map((delay) => NANO * delay),
+      seconds.map((delay) => perSecond(design) * delay),
     );
   const lossy = points(data.lossy.delaySeconds);
   const map = labelMap(plot);
   takeLine(map, lossy);
   const marks = worstMarks(plot, boxes);
   for (const { row, best } of boxes) {
-    const [x, y] = [xOf(plot, row.worstHz as number), yOf(plot, best + row.predicted * NANO)];
+    const [x, y] = [xOf(plot, row.worstHz as number), yOf(plot, best + row.predicted / plot.unit.delay.seconds)];
     takeBox(map, { left: x - 6, right: x + 6, top: y - 6, bottom: y + 6 });
   }
   for (const box of boxes) takeVariationBox(map, plot, box);
@@ -110,6 +115,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
   const lossless = data.hasLoss
     ? [element('g', { class: 'lossless' }, curvePath(points(data.lossless.delaySeconds), 'thin s-transmission'))]
     : [];
+  const scale = ruler(plot, plot.bottom, []);
   const body = plotFrame(
     plot,
     plot.top,
@@ -117,33 +123,30 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     hatchPatterns(plot.prefix, ['transmission']),
     clipFrame(plot, 'clip'),
     litWindow(plot),
-    levelLines(plot, levels, 'ns'),
+    levelLines(plot, levels, plot.unit.delay.name),
     ...boxes.map((box) => drawVariationBox(plot, box)),
     clipped(plot, 'clip', ...lossless, curvePath(lossy, 'thick s-transmission')),
     ...marks,
     ...texts.map((text) => placedText(text, 'bold halo')),
     ...drawNames(map, plot, [{ ...name, wish }]),
-    ruler(plot, plot.bottom, []),
+    scale.markup,
   );
-  return { width: FORMAT_WIDTH[format], height: plot.bottom + RULER_HEIGHT - 12, body };
+  return { width: FORMAT_WIDTH[format], height: plot.bottom + scale.height, body };
 }
 
 function words(design: DesignReport, unit: FrequencyUnit): Pick<Picture, 'finding' | 'caption' | 'alternative'> {
   const rows = design.mask.filter(({ line }) => 'groupDelayVariationSeconds' in line);
   const requirements = rows.map((row) => requirementOf(row, unit));
-  const finding =
-    rows.length === 0
-      ? 'Group delay of the passband'
-      : `Delay variation: ${decapitalized(limitFinding(requirements, unit))}`;
+  const finding = rows.length === 0 ? 'Group delay of the passband' : limitFinding(requirements);
   const used = requirements.map(
     ({ predicted, limit, span }) =>
-      `${predicted.toFixed(1)} of ${trimmed(limit, 4)} ns over ${spanWords(span)} ${unit.name}`,
+      `${predicted.toFixed(1)} of ${trimmed(limit, 4)} ${unit.delay.name} over ${spanWords(span)} ${unit.name}`,
   );
   const boxes =
     'Each box is as wide as its band and as tall as the variation allowed; it stands on the lowest delay, and the curve must stay below the hatched lid.';
   return {
     finding,
-    caption: rows.length === 0 ? 'Of S21, in nanoseconds; the light area is the passband.' : boxes,
+    caption: rows.length === 0 ? 'Of S21; the light area is the passband.' : boxes,
     alternative: `Group delay of S21 over the passband${rows.length === 0 ? '' : `; variation ${used.join(', ')}`}.`,
   };
 }

@@ -1,8 +1,9 @@
 import { trimmed } from '../../words/numbers.js';
-import { requirementOf, roomText } from '../../words/requirement.js';
+import { requirementOf } from '../../words/requirement.js';
 import { textSize } from './curve-name.js';
 import { type Box, claim, type LabelMap } from './label-map.js';
 import { type AskedLid, type Lid, lidBox } from './lids.js';
+import { roomText } from './limit-words.js';
 import type { Plot } from './plot.js';
 import type { PlacedText } from './walls.js';
 
@@ -32,9 +33,10 @@ function placesBeside(
 /** What each lid asks and how much room is left, beside it where nothing is in the way: the most words that fit. */
 export function lidTexts(map: LabelMap, plot: Plot, lids: readonly AskedLid[], asks: string): readonly PlacedText[] {
   return lids.flatMap(({ lid, row }) => {
-    const { limit, margin, isMet } = requirementOf(row, plot.unit);
+    const requirement = requirementOf(row, plot.unit);
+    const { limit, isMet } = requirement;
     const level = trimmed(limit, 3);
-    const [asked, room] = [`${asks} ${level} dB`, roomText(margin, isMet, 'dB')];
+    const [asked, room] = [`${asks} ${level} dB`, roomText(requirement)];
     const sign = asks.slice(-1);
     const box = lidBox(plot, lid);
     const wordings = [
@@ -43,11 +45,11 @@ export function lidTexts(map: LabelMap, plot: Plot, lids: readonly AskedLid[], a
       [asked],
       [`${sign} ${level} dB`, room],
       [`${sign} ${level} dB, ${room}`],
-      [`${sign} ${level} dB`],
+      [`${sign} ${level} dB${isMet ? '' : `, ${roomText(requirement).split(' ').at(-1)}`}`],
     ];
     for (const lines of wordings)
       for (const place of placesBeside(lid, box, textSize(lines))) {
-        if (claim(map, place)) return [{ box: place, lines }];
+        if (claim(map, place)) return [{ box: place, lines, isMet }];
       }
     return [];
   });

@@ -51,8 +51,13 @@ export function lossRange(design: DesignReport, data: CurveData): readonly [numb
         reference,
     ];
   });
-  const ends = boxesOf(design, data).map(({ end }) => end);
-  const reach = Math.max(...limits, ...ends, ...inBand, 1e-3);
+  const boxes = boxesOf(design, data);
+  const ends = boxes.flatMap(({ row, best, end }) => [end, best + row.predicted]);
+  const worst = design.mask.flatMap((row) => {
+    if (!('insertionLossDb' in row.line)) return [];
+    return [row.predicted + (row.line.relativeTo === 'center' ? data.centerLossDb : 0)];
+  });
+  const reach = Math.max(...limits, ...ends, ...worst, ...inBand, 1e-3);
   return roundRange(0, 1.35 * reach, 5);
 }
 

@@ -7,7 +7,7 @@ import type { Markup } from '../../svg/markup.js';
 import { requirementOf } from '../../words/requirement.js';
 import { type CurveData, curveData } from './curve-data.js';
 import { type CurveName, drawNames } from './draw-names.js';
-import { drawFlags, FLAG_STRIP, takeFlags, worstPoints } from './flags.js';
+import { drawFlags, flagStrip, placedFlags, takeFlags } from './flags.js';
 import { type LabelMap, labelMap, takeBox, takeLine } from './label-map.js';
 import { lidTexts } from './lid-texts.js';
 import { type AskedLid, drawLid, lidBox } from './lids.js';
@@ -15,11 +15,10 @@ import { clipFrame, clipped, isShown, levelLines, litWindow, type Plot, plotFram
 import { type Curves, curvesOf, drawCurves, returnLossLids } from './response-parts.js';
 import { responsePlot } from './response-plot.js';
 import { responseWords } from './response-words.js';
-import { RULER_HEIGHT, ruler } from './ruler.js';
+import { ruler } from './ruler.js';
 import { drawWalls, placedText, takeWalls, wallLabels, wallsOf } from './walls.js';
+import { worstPoints } from './worst-points.js';
 
-/** Flags of the narrow drawing: only the tightest. */
-const FLAGS: Readonly<Record<Format, number>> = { wide: 6, narrow: 1 };
 /** Worst points of the return-loss lines. */
 function lidMarks(plot: Plot, lids: readonly AskedLid[]): readonly Markup[] {
   return lids.flatMap(({ row }) => {
@@ -60,9 +59,11 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
   const plot = responsePlot(design, data, format);
   const walls = wallsOf(plot, design.mask, data.centerLossDb);
   const lids = returnLossLids(design, plot);
-  const points = worstPoints(plot, design.mask, data.centerLossDb);
+  const points = worstPoints(plot, design.mask, data);
+  const flags = placedFlags(plot, points);
   const curves = curvesOf(plot, data);
-  const foot = plot.bottom + (points.length === 0 ? 0 : FLAG_STRIP);
+  const foot = plot.bottom + flagStrip(flags);
+  const scale = ruler(plot, foot, design.specification.transmissionZeros);
   const map = labelMap(plot);
   takeWalls(map, plot, walls);
   for (const curve of [curves.s21, curves.s11, ...curves.lossless]) takeLine(map, curve);
@@ -82,13 +83,13 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     ...lids.map(({ lid }) => drawLid(plot, lid)),
     drawCurves(plot, curves),
     ...lidMarks(plot, lids),
-    drawFlags(plot, points, FLAGS[format]),
+    drawFlags(plot, points, flags),
     ...wallTexts.map((text) => placedText(text, 'halo-ground')),
     ...asked.map((text) => placedText(text, 'halo f-reflection')),
     ...curveNames(map, plot, curves),
-    ruler(plot, foot, design.specification.transmissionZeros),
+    scale.markup,
   );
-  return { width: FORMAT_WIDTH[format], height: foot + RULER_HEIGHT, body };
+  return { width: FORMAT_WIDTH[format], height: foot + scale.height, body };
 }
 
 /** The picture from curves that are there already. */
@@ -113,7 +114,7 @@ export function responsePictureOf(design: DesignReport, data: CurveData): Pictur
  *   passband: { lowerHz: '3822 MHz', upperHz: '3858 MHz' }, order: 6, returnLossDb: 22,
  *   transmissionZeros: [1.45, -1.45], mask: [{ fromHz: '3868 MHz', rejectionDb: 34 }],
  * }));
- * picture.finding; // 'Rejection: clear of the limit; least room: 2.2 dB, at 3870.5 MHz'
+ * picture.finding; // 'Rejection clear by 2.2 dB'
  */
 export function responsePicture(design: DesignReport): Picture {
   return responsePictureOf(design, curveData(design));

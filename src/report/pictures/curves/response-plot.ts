@@ -9,8 +9,10 @@ const TOP = 26;
 /** Floors the picture may have, dB below 0. */
 const LEAST_FLOOR = 50;
 const MOST_FLOOR = 240;
+/** How much deeper than the deepest wall a worst point may lie and still be shown. */
+const MORE = 45;
 
-/** Lowest level of the picture: below the deepest wall by 15 dB. */
+/** Lowest level of the picture: below the deepest wall by 15 dB, and farther to show worst points that are not much deeper. */
 function floorOf(design: DesignReport, centerLossDb: number): number {
   const limits = design.mask.map(({ line }) => {
     const reference = line.relativeTo === 'center' ? centerLossDb : 0;
@@ -18,7 +20,9 @@ function floorOf(design: DesignReport, centerLossDb: number): number {
     return Math.max(...(typeof level === 'number' ? [level] : level)) + reference;
   });
   const deepest = Math.max(0, ...limits);
-  const floor = 10 * Math.ceil(Math.max(LEAST_FLOOR, deepest + 15) / 10);
+  const points = design.mask.flatMap(({ line, predicted }) => ('rejectionDb' in line ? [predicted + 6] : []));
+  const near = points.filter((level) => level < deepest + MORE);
+  const floor = 10 * Math.ceil(Math.max(LEAST_FLOOR, deepest + 15, ...near) / 10);
   return Math.min(floor, MOST_FLOOR);
 }
 

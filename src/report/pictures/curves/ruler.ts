@@ -11,9 +11,15 @@ const MINOR = 4;
 /** Heights below the plot, pixels: numbers, the passband bar, first and second row of its labels, end. */
 const NUMBERS = 22;
 const BAR = 36;
-const ROWS = [58, 73] as const;
-/** Height of the whole ruler. */
-export const RULER_HEIGHT = 80;
+const ROWS = [58, 73, 88] as const;
+/** Room below the last row. */
+const BELOW = 7;
+
+/** A ruler and its height, which depends on how many rows its labels need. */
+export interface Ruler {
+  readonly markup: Markup;
+  readonly height: number;
+}
 
 function tickStep(ticks: readonly number[]): number {
   return ticks.length > 1 ? (ticks[1] as number) - (ticks[0] as number) : 1;
@@ -49,28 +55,35 @@ interface BelowLabel {
   readonly middles: readonly number[];
 }
 
-/** Puts each label into the first row where it touches no other; one that fits in none is left to the table. */
-function stacked(plot: Plot, bottom: number, labels: readonly BelowLabel[]): readonly Markup[] {
-  const taken: { row: number; from: number; to: number }[] = [];
-  return labels.flatMap(({ text, middles, classes }) => {
-    const half = textWidth(text, 12.5) / 2;
-    for (const wish of middles)
-      for (const row of ROWS) {
-        const middle = Math.min(Math.max(wish, half), plot.right + 6 - half);
-        const [from, to] = [middle - half - 4, middle + half + 4];
-        if (taken.some((end) => end.row === row && end.to > from && end.from < to)) continue;
-        taken.push({ row, from, to });
-        return [label(middle, bottom + row, text, classes, 'mid')];
-      }
-    return [];
-  });
+interface PlacedLabel {
+  readonly text: string;
+  readonly classes: string;
+  readonly middle: number;
+  readonly row: number;
 }
 
-/** Under the bar, or to either side of what stands there. */
+/** Puts each label into the first row where it touches no other; one that fits in none is left to the table. */
+function stacked(plot: Plot, labels: readonly BelowLabel[]): readonly PlacedLabel[] {
+  const placed: (PlacedLabel & { readonly from: number; readonly to: number })[] = [];
+  for (const { text, middles, classes } of labels) {
+    const half = textWidth(text, 12.5) / 2;
+    const places = middles.flatMap((wish) =>
+      ROWS.map((row) => {
+        const middle = Math.min(Math.max(wish, half), plot.right + 6 - half);
+        return { text, classes, middle, row, from: middle - half - 4, to: middle + half + 4 };
+      }),
+    );
+    const isFree = ({ row, from, to }: (typeof places)[number]): boolean =>
+      placed.every((other) => other.row !== row || other.to <= from || other.from >= to);
+    const place = places.find(isFree);
+    if (place !== undefined) placed.push(place);
+  }
+  return placed;
+}
+
+/** Under the bar; a little to a side only where it would leave the drawing. */
 function passbandLabel([from, to]: readonly [number, number], text: string): BelowLabel {
-  const half = textWidth(text, 12.5) / 2;
-  const middle = (from + to) / 2;
-  return { text, classes: '', middles: [middle, from + half, to - half, from - half - 8, to + half + 8] };
+  return { text, classes: '', middles: [(from + to) / 2] };
 }
 
 /**
@@ -81,7 +94,7 @@ export function ruler(
   plot: Plot,
   bottom: number,
   transmissionZeros: readonly { readonly re: number; readonly im: number }[],
-): Markup {
+): Ruler {
   const { unit, left, right } = plot;
   const { lowerHz, upperHz } = edgesOfBand(plot.band);
   const [from, to] = [Math.max(left, xOf(plot, lowerHz)), Math.min(right, xOf(plot, upperHz))];
@@ -98,10 +111,12 @@ export function ruler(
     classes: 'tick',
     middles: [xOf(plot, hz)],
   }));
-  return fragment(
+  const labels = stacked(plot, [band, ...marks]);
+  const markup = fragment(
     lane(plot, bottom),
     element('rect', { x: from, y: bottom + BAR - 4, width: Math.max(2, to - from), height: 8, class: 'f-ink' }),
     ...distinct.map((hz) => triangle(xOf(plot, hz), bottom + BAR)),
-    ...stacked(plot, bottom, [...marks, band]),
+    ...labels.map(({ middle, row, text, classes }) => label(middle, bottom + row, text, classes, 'mid')),
   );
+  return { markup, height: Math.max(BAR, ...labels.map(({ row }) => row)) + BELOW };
 }

@@ -3,8 +3,9 @@ import { element, fragment, type Markup } from '../../svg/markup.js';
 import { trimmed } from '../../words/numbers.js';
 import { requirementOf } from '../../words/requirement.js';
 import { textSize } from './curve-name.js';
-import { claim, type LabelMap, takeBox } from './label-map.js';
+import { type Box, claim, isFree, type LabelMap, takeBox } from './label-map.js';
 import { drawLid, type Lid, lidBox } from './lids.js';
+import { roomText } from './limit-words.js';
 import { type Plot, xOf, yOf } from './plot.js';
 import type { PlacedText } from './walls.js';
 
@@ -72,22 +73,57 @@ export function takeVariationBox(map: LabelMap, plot: Plot, box: VariationBox): 
     takeBox(map, { left: x, right: x, top: from, bottom: to });
 }
 
-/** How much of the allowed variation is used, beside the lid where nothing is in the way. */
+interface Wording {
+  readonly lines: readonly string[];
+  readonly isMet: boolean;
+}
+
+function wordingOf(plot: Plot, { row }: VariationBox): Wording {
+  const requirement = requirementOf(row, plot.unit);
+  const { predicted, limit, unit, isMet } = requirement;
+  const used = `${predicted.toFixed(unit === 'dB' ? 2 : 1)} of ${trimmed(limit, 4)} ${unit} used`;
+  return { lines: [isMet ? used : `${used}, ${roomText(requirement)}`], isMet };
+}
+
+/** Tops of a label on the free side of its lid, and on the side inside the box. */
+function placesOf(
+  plot: Plot,
+  box: VariationBox,
+  [width, height]: readonly [number, number],
+): Record<'outside' | 'inside', readonly Box[]> {
+  const { left, right, top, bottom } = lidBox(plot, lidOfBox(plot, box));
+  const [away, into] =
+    plot.upper > plot.lower
+      ? [[top - height - 2, top - height - 14], [bottom + 2]]
+      : [[bottom + 2, bottom + 14, bottom + 30], [top - height - 2]];
+  const middles = [(left + right) / 2, left + width / 2 + 4, right - width / 2 - 4];
+  const at = (tops: readonly number[]): readonly Box[] =>
+    middles.flatMap((x) =>
+      tops.map((y) => ({ left: x - width / 2, right: x + width / 2, top: y, bottom: y + height })),
+    );
+  return { outside: at(away), inside: at(into) };
+}
+
+/**
+ * How much of the allowed variation is used, beside the lid where nothing is in the way: all outside their boxes or all
+ * inside where that can be, so that no two face each other; a miss that finds no place stands above the plot.
+ */
 export function variationLabels(map: LabelMap, plot: Plot, boxes: readonly VariationBox[]): readonly PlacedText[] {
-  return boxes.flatMap((box) => {
-    const { predicted, limit, unit, isMet } = requirementOf(box.row, plot.unit);
-    const digits = unit === 'ns' ? 1 : 2;
-    const used = `${predicted.toFixed(digits)} of ${trimmed(limit, 4)} ${unit} used`;
-    const lines = [isMet ? used : `${used}: short`];
+  const wordings = boxes.map((box) => ({ box, ...wordingOf(plot, box) }));
+  const tried = (sides: readonly ('outside' | 'inside')[]) =>
+    wordings.map(({ box, lines, isMet }) => {
+      const places = placesOf(plot, box, textSize(lines, 13, true));
+      const found = sides.flatMap((side) => places[side]).find((place) => isFree(map, place));
+      return { found, lines, isMet };
+    });
+  const whole = ([['outside'], ['inside']] as const)
+    .map(tried)
+    .find((all) => all.every(({ found }) => found !== undefined));
+  return (whole ?? tried(['outside', 'inside'])).flatMap(({ found, lines, isMet }) => {
+    if (found !== undefined && claim(map, found)) return [{ box: found, lines, isMet }];
+    if (isMet) return [];
     const [width, height] = textSize(lines, 13, true);
-    const { left, right, top, bottom } = lidBox(plot, lidOfBox(plot, box));
-    const middle = (left + right) / 2;
-    const tops = [top - height - 2, bottom + 2, top - height - 14, bottom + 14, bottom + 30];
-    for (const x of [middle, left + width / 2 + 4, right - width / 2 - 4])
-      for (const y of tops) {
-        const place = { left: x - width / 2, right: x + width / 2, top: y, bottom: y + height };
-        if (claim(map, place)) return [{ box: place, lines }];
-      }
-    return [];
+    const box = { left: plot.right - width, right: plot.right, top: plot.top - 22, bottom: plot.top - 22 + height };
+    return [{ box, lines, isMet }];
   });
 }

@@ -104,6 +104,8 @@ function wallText({ row: { line }, depths }: Wall): string {
 export interface PlacedText {
   readonly box: Box;
   readonly lines: readonly string[];
+  /** A text about a missed limit has the color of a miss. */
+  readonly isMet: boolean;
 }
 
 /** From the top of a line of text to its base, and from line to line. */
@@ -111,9 +113,10 @@ const ASCENT = 12.5;
 const LINE_HEIGHT = 16;
 
 /** A text of one or more lines in its box, centered. */
-export function placedText({ box, lines }: PlacedText, classes: string): Markup {
+export function placedText({ box, lines, isMet }: PlacedText, classes: string): Markup {
+  const all = isMet ? classes : `${classes.replace(/ ?f-\w+/, '')} bold f-short`;
   const middle = (box.left + box.right) / 2;
-  return fragment(...lines.map((text, n) => label(middle, box.top + ASCENT + LINE_HEIGHT * n, text, classes, 'mid')));
+  return fragment(...lines.map((text, n) => label(middle, box.top + ASCENT + LINE_HEIGHT * n, text, all, 'mid')));
 }
 
 /** Labels inside the walls that have the room. */
@@ -121,7 +124,7 @@ export function wallLabels(map: LabelMap, plot: Plot, walls: readonly Wall[]): r
   const placed = walls.flatMap((wall) => {
     const text = wallText(wall);
     const box = labelBox(plot, wall, walls, text);
-    return box === undefined || box.top < plot.top + 4 ? [] : [{ box, lines: [text] }];
+    return box === undefined || box.top < plot.top + 4 ? [] : [{ box, lines: [text], isMet: true }];
   });
   for (const { box } of placed) takeBox(map, box);
   return placed;
