@@ -1,11 +1,11 @@
 import type { DesignReport } from '../../design-report.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg/drawing.js';
 import { hatchPatterns } from '../../svg/hatch.js';
-import { trimmed, unitOf } from '../../words/numbers.js';
+import { unitOf } from '../../words/numbers.js';
 import { type Requirement, requirementOf } from '../../words/requirement.js';
 import { closePlot } from './close-plot.js';
 import { type CurveData, curveData } from './curve-data.js';
-import { limitFinding, spanWords } from './limit-words.js';
+import { limitFinding, limitWords, spanWords } from './limit-words.js';
 import { lossLevels, lossPanel, lossRange } from './loss-panel.js';
 import { matchLevels, matchPanel, matchRange } from './match-panel.js';
 import { axisRoom, clipFrame, plotFrame } from './plot.js';
@@ -63,7 +63,7 @@ function words(
   const requirements = requirementsOf(design);
   const limits = requirements.map(
     ({ name, span, predicted, limit }) =>
-      `${name} ${predicted.toFixed(2)} dB of ${trimmed(limit, 4)} dB at ${spanWords(span)} ${unit.name}`,
+      `${name} ${predicted.toFixed(2)} dB of ${limitWords(limit)} dB at ${spanWords(span)} ${unit.name}`,
   );
   const loss = hasLoss ? `Insertion loss ${centerLossDb.toFixed(2)} dB at the center` : 'Lossless';
   const hasBox = design.mask.some(({ line }) => 'insertionLossVariationDb' in line);

@@ -26,6 +26,8 @@ export interface CurveData {
 
 /** Extra points over each of the two spans: the response file may reach less far, and is coarse in the passband. */
 const EVEN_POINTS = 601;
+/** Extra points beside each pole, in its distances from the axis. */
+const BENDS: readonly number[] = [-3, -1.5, -0.75, 0, 0.75, 1.5, 3];
 /** Room in bandwidths that the wide picture leaves beside the band, beside the end of a mask line, and where one runs on. */
 const BESIDE = { band: 0.75, end: 0.15, open: 0.8 } as const;
 /** Farthest place that the wide picture reaches to, in omega. */
@@ -86,14 +88,19 @@ function gridOf(
   closeHz: readonly [number, number],
 ): Float64Array {
   const { band } = design.specification;
-  const { reflectionZeros, transmissionZeros } = design.polynomials;
+  const { poles, reflectionZeros, transmissionZeros } = design.polynomials;
   const { lowerHz, upperHz } = edgesOfBand(band);
-  const notches = [...reflectionZeros, ...transmissionZeros].map(({ im }) => hzFromOmega(band, im));
+  const notches = [...reflectionZeros, ...transmissionZeros].map(({ im }) => im);
+  // Near a pole a curve bends within the pole's distance from the axis.
+  const bends = poles.flatMap(({ re, im }) => BENDS.map((share) => im + share * re));
+  const marks = [...notches, ...bends].map((omega) => hzFromOmega(band, omega));
+  const asked = design.mask.flatMap(({ line: { fromHz, toHz }, worstHz }) => [fromHz, toHz, worstHz]);
+  const limits = asked.filter((hz) => typeof hz === 'number' && hz > 0);
   const even = [wideHz, closeHz].flatMap(([from, to]) =>
     Array.from({ length: EVEN_POINTS }, (_, n) => from + ((to - from) * n) / (EVEN_POINTS - 1)),
   );
-  const all = [...responseGrid(design.specification), ...even, ...notches, lowerHz, upperHz, band.centerHz];
-  return Float64Array.from(new Set(all)).sort();
+  const all = [...responseGrid(design.specification), ...even, ...marks, ...limits, lowerHz, upperHz, band.centerHz];
+  return Float64Array.from(new Set(all as number[])).sort();
 }
 
 function curveOf({ s11, s21, groupDelaySeconds }: SweepHz): Curve {
@@ -124,4 +131,9 @@ export function curveData(design: DesignReport): CurveData {
     hasLoss: unloadedQ !== undefined,
     centerLossDb: lossy.attenuationDb[hz.indexOf(band.centerHz)] as number,
   };
+}
+
+/** Largest of many numbers: a spread of a hundred thousand arguments would exceed what engines allow. */
+export function greatest(values: Float64Array): number {
+  return values.reduce((most, value) => Math.max(most, value), Number.NEGATIVE_INFINITY);
 }

@@ -4,19 +4,20 @@ import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg
 import { hatchPatterns } from '../../svg/hatch.js';
 import { dot, octagon } from '../../svg/marks.js';
 import { element, type Markup } from '../../svg/markup.js';
-import { type FrequencyUnit, trimmed, unitOf } from '../../words/numbers.js';
+import { type FrequencyUnit, unitOf } from '../../words/numbers.js';
 import { requirementOf } from '../../words/requirement.js';
 import { closePlot, levelsBetween, roundRange } from './close-plot.js';
-import { type CurveData, curveData } from './curve-data.js';
+import { type CurveData, curveData, greatest } from './curve-data.js';
 import { drawNames } from './draw-names.js';
 import { labelMap, takeBox, takeLine } from './label-map.js';
-import { limitFinding, spanWords } from './limit-words.js';
+import { limitFinding, limitWords, spanWords } from './limit-words.js';
 import {
   axisRoom,
   clipFrame,
   clipped,
   curvePath,
   curvePoints,
+  isInPlot,
   levelLines,
   litWindow,
   type Plot,
@@ -60,25 +61,27 @@ function rangeOf(
   const [from, to] = [hzFromOmega(band, -1.1), hzFromOmega(band, 1.1)];
   const near = lossy.delaySeconds.filter((_, n) => (hz[n] as number) >= from && (hz[n] as number) <= to);
   const scale = perSecond(design);
-  const [peak, least] = [scale * Math.max(...near), scale * Math.min(...near)];
+  const [peak, least] = [scale * greatest(near), -scale * greatest(near.map((delay) => -delay))];
   const reach = Math.max(...boxes.map(({ end }) => end), 0);
   const highest = reach === 0 ? 1.1 * peak : Math.max(1.25 * reach, Math.min(1.08 * peak, 2.2 * reach));
   const lowest = Math.min(least, ...boxes.map(({ best }) => best));
   // A small variation on a long delay would be lost on an axis from zero.
-  const foot = lowest > 0.6 * highest ? lowest - 0.4 * (highest - lowest) : 0;
+  const foot = lowest > 0.6 * highest ? lowest - 0.4 * (highest - lowest) : Math.min(0, lowest);
   const [lower, upper] = roundRange(foot, highest, 6);
   return [upper, lower];
 }
 
 function worstMarks(plot: Plot, boxes: readonly VariationBox[]): readonly Markup[] {
-  return boxes.map(({ row, best }) => {
+  return boxes.flatMap(({ row, best }) => {
     const [x, y] = [xOf(plot, row.worstHz as number), yOf(plot, best + row.predicted / plot.unit.delay.seconds)];
-    return requirementOf(row, plot.unit).isMet ? dot(x, y) : octagon(x, y);
+    if (!isInPlot(plot, x, y)) return [];
+    return [requirementOf(row, plot.unit).isMet ? dot(x, y) : octagon(x, y)];
   });
 }
 
 function drawing(design: DesignReport, data: CurveData, format: Format): Drawing {
-  const boxes = boxesOf(design, data);
+  const [fromHz, toHz] = data.closeHz;
+  const boxes = boxesOf(design, data).filter((box) => box.fromHz < toHz && box.toHz > fromHz);
   const [upper, lower] = rangeOf(design, data, boxes);
   const levels = levelsBetween(upper, lower, 6);
   const room = axisRoom(levels);
@@ -124,7 +127,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     clipFrame(plot, 'clip'),
     litWindow(plot),
     levelLines(plot, levels, plot.unit.delay.name),
-    ...boxes.map((box) => drawVariationBox(plot, box)),
+    ...boxes.map((box) => drawVariationBox(plot, box, 'clip')),
     clipped(plot, 'clip', ...lossless, curvePath(lossy, 'thick s-transmission')),
     ...marks,
     ...texts.map((text) => placedText(text, 'bold halo')),
@@ -140,7 +143,7 @@ function words(design: DesignReport, unit: FrequencyUnit): Pick<Picture, 'findin
   const finding = rows.length === 0 ? 'Group delay of the passband' : limitFinding(requirements);
   const used = requirements.map(
     ({ predicted, limit, span }) =>
-      `${predicted.toFixed(1)} of ${trimmed(limit, 4)} ${unit.delay.name} over ${spanWords(span)} ${unit.name}`,
+      `${predicted.toFixed(1)} of ${limitWords(limit)} ${unit.delay.name} over ${spanWords(span)} ${unit.name}`,
   );
   const boxes =
     'Each box is as wide as its band and as tall as the variation allowed; it stands on the lowest delay, and the curve must stay below the hatched lid.';

@@ -1,9 +1,8 @@
-import { trimmed } from '../../words/numbers.js';
 import { requirementOf } from '../../words/requirement.js';
 import { textSize } from './curve-name.js';
 import { type Box, claim, type LabelMap } from './label-map.js';
 import { type AskedLid, type Lid, lidBox } from './lids.js';
-import { roomText } from './limit-words.js';
+import { limitWords, roomText } from './limit-words.js';
 import type { Plot } from './plot.js';
 import type { PlacedText } from './walls.js';
 
@@ -35,7 +34,7 @@ export function lidTexts(map: LabelMap, plot: Plot, lids: readonly AskedLid[], a
   return lids.flatMap(({ lid, row }) => {
     const requirement = requirementOf(row, plot.unit);
     const { limit, isMet } = requirement;
-    const level = trimmed(limit, 3);
+    const level = limitWords(limit);
     const [asked, room] = [`${asks} ${level} dB`, roomText(requirement)];
     const sign = asks.slice(-1);
     const box = lidBox(plot, lid);

@@ -29,9 +29,9 @@ export function spanWords(span: string): string {
   return span.replace('<= ', '≤ ').replace('>= ', '≥ ').replace('-', '–');
 }
 
-/** A limit, without needless zeros. */
+/** A limit: never rounded to a figure that it is not, without needless zeros. */
 export function limitWords(limit: number): string {
-  return trimmed(limit, 4);
+  return trimmed(limit, 6);
 }
 
 function kindFinding(requirements: readonly Requirement[]): string {

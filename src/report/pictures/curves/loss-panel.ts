@@ -1,15 +1,27 @@
-import { hzFromOmega } from '../../../forms/index.js';
+import { hzFromOmega, type MaskRow } from '../../../forms/index.js';
 import type { DesignReport } from '../../design-report.js';
 import { dot, octagon } from '../../svg/marks.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
 import { requirementOf } from '../../words/requirement.js';
 import { levelsBetween, roundRange } from './close-plot.js';
 import type { CurveData } from './curve-data.js';
+import { greatest } from './curve-data.js';
 import { drawNames } from './draw-names.js';
 import { labelMap, takeBox, takeLine } from './label-map.js';
 import { lidTexts } from './lid-texts.js';
 import { type AskedLid, drawLid, lidBox, lidOf } from './lids.js';
-import { clipped, curvePath, curvePoints, levelLines, litWindow, type Plot, xOf, yOf } from './plot.js';
+import {
+  clipped,
+  curvePath,
+  curvePoints,
+  isInPlot,
+  levelLines,
+  litWindow,
+  type Plot,
+  touches,
+  xOf,
+  yOf,
+} from './plot.js';
 import {
   drawVariationBox,
   takeVariationBox,
@@ -23,7 +35,7 @@ import { placedText } from './walls.js';
 /** Limits on insertion loss as lids, in the decibels of the panel. */
 function lidsOf(design: DesignReport, { centerLossDb }: CurveData, plot: Plot): readonly AskedLid[] {
   return design.mask
-    .filter(({ line }) => 'insertionLossDb' in line)
+    .filter(({ line }) => 'insertionLossDb' in line && touches(plot, line))
     .flatMap((row) => {
       const reference = row.line.relativeTo === 'center' ? centerLossDb : 0;
       return lidOf(plot, row, { side: 'below', forbids: 'transmission' }, (level) => level + reference);
@@ -35,6 +47,9 @@ function boxesOf(design: DesignReport, { hz, lossy }: CurveData): readonly Varia
     .filter(({ line, worstHz }) => 'insertionLossVariationDb' in line && worstHz !== null)
     .map((row) => variationBox(row, valueAt(hz, lossy.attenuationDb, row.worstHz as number), 1));
 }
+
+/** How much deeper than everything asked for a worst point may lie and still be shown. */
+const MOST_REACH = 3;
 
 /** Loss from 0 down to where limits, boxes and the loss within the band end. */
 export function lossRange(design: DesignReport, data: CurveData): readonly [number, number] {
@@ -51,13 +66,25 @@ export function lossRange(design: DesignReport, data: CurveData): readonly [numb
         reference,
     ];
   });
-  const boxes = boxesOf(design, data);
-  const ends = boxes.flatMap(({ row, best, end }) => [end, best + row.predicted]);
-  const worst = design.mask.flatMap((row) => {
-    if (!('insertionLossDb' in row.line)) return [];
-    return [row.predicted + (row.line.relativeTo === 'center' ? data.centerLossDb : 0)];
-  });
-  const reach = Math.max(...limits, ...ends, ...worst, ...inBand, 1e-3);
+  const close = { fromHz: data.closeHz[0], toHz: data.closeHz[1] };
+  const isShown = (row: MaskRow): boolean =>
+    row.worstHz !== null && row.worstHz >= close.fromHz && row.worstHz <= close.toHz;
+  const boxes = boxesOf(design, data).filter(({ fromHz, toHz }) => fromHz < close.toHz && toHz > close.fromHz);
+  const worst = [
+    ...boxes.filter(({ row }) => isShown(row)).map(({ row, best }) => best + row.predicted),
+    ...design.mask.flatMap((row) => {
+      if (!('insertionLossDb' in row.line) || !isShown(row)) return [];
+      return [row.predicted + (row.line.relativeTo === 'center' ? data.centerLossDb : 0)];
+    }),
+  ];
+  const asked = Math.max(
+    ...limits,
+    ...boxes.filter(({ row }) => isShown(row)).map(({ end }) => end),
+    greatest(inBand),
+    1e-3,
+  );
+  // A worst point far down the skirt would press the passband flat: it is told in words.
+  const reach = Math.max(asked, ...worst.filter((level) => level < MOST_REACH * asked));
   return roundRange(0, 1.35 * reach, 5);
 }
 
@@ -83,13 +110,14 @@ function marks(
     .map(
       ([row, level]) =>
         [xOf(plot, row.worstHz as number), yOf(plot, level), requirementOf(row, plot.unit).isMet] as const,
-    );
+    )
+    .filter(([x, y]) => isInPlot(plot, x, y));
 }
 
 /** Upper half of the band picture: insertion loss, more of it further down. */
 export function lossPanel(design: DesignReport, data: CurveData, plot: Plot): Markup {
   const lids = lidsOf(design, data, plot);
-  const boxes = boxesOf(design, data);
+  const boxes = boxesOf(design, data).filter((box) => touches(plot, box));
   const points = (db: Float64Array) => curvePoints(plot, data.hz, db);
   const lossy = points(data.lossy.attenuationDb);
   const lossless = data.hasLoss ? [points(data.lossless.attenuationDb)] : [];
@@ -106,8 +134,8 @@ export function lossPanel(design: DesignReport, data: CurveData, plot: Plot): Ma
   return fragment(
     litWindow(plot),
     levelLines(plot, lossLevels(plot.upper, plot.lower), 'dB'),
-    ...boxes.map((box) => drawVariationBox(plot, box)),
-    ...lids.map(({ lid }) => drawLid(plot, lid)),
+    ...boxes.map((box) => drawVariationBox(plot, box, 'loss')),
+    clipped(plot, 'loss', ...lids.map(({ lid }) => drawLid(plot, lid))),
     clipped(
       plot,
       'loss',

@@ -8,7 +8,18 @@ import { drawNames } from './draw-names.js';
 import { labelMap, takeBox, takeLine } from './label-map.js';
 import { lidTexts } from './lid-texts.js';
 import { drawLid, lidBox, lidOf } from './lids.js';
-import { clipped, curvePath, curvePoints, levelLines, litWindow, type Plot, xOf, yOf } from './plot.js';
+import {
+  clipped,
+  curvePath,
+  curvePoints,
+  isInPlot,
+  levelLines,
+  litWindow,
+  type Plot,
+  touches,
+  xOf,
+  yOf,
+} from './plot.js';
 import { placedText } from './walls.js';
 
 /** Return loss from 10 dB above what is asked or designed for to 20 dB below it. */
@@ -27,16 +38,18 @@ export function matchLevels(upper: number, lower: number): readonly number[] {
 /** Lower half of the band picture: return loss, better match further down. */
 export function matchPanel(design: DesignReport, data: CurveData, plot: Plot): Markup {
   const lids = design.mask
-    .filter(({ line }) => 'returnLossDb' in line)
+    .filter(({ line }) => 'returnLossDb' in line && touches(plot, line))
     .flatMap((row) => lidOf(plot, row, { side: 'above', forbids: 'reflection' }, (level) => level));
   const points = (db: Float64Array) => curvePoints(plot, data.hz, db);
   const lossy = points(data.lossy.returnLossDb);
   const lossless = data.hasLoss ? [points(data.lossless.returnLossDb)] : [];
-  const worst = lids.flatMap(({ row }) =>
-    row.worstHz === null
-      ? []
-      : [[xOf(plot, row.worstHz), yOf(plot, row.predicted), requirementOf(row, plot.unit).isMet] as const],
-  );
+  const worst = lids
+    .flatMap(({ row }) =>
+      row.worstHz === null
+        ? []
+        : [[xOf(plot, row.worstHz), yOf(plot, row.predicted), requirementOf(row, plot.unit).isMet] as const],
+    )
+    .filter(([x, y]) => isInPlot(plot, x, y));
   const map = labelMap(plot);
   for (const curve of [lossy, ...lossless]) takeLine(map, curve);
   for (const [x, y] of worst) takeBox(map, { left: x - 6, right: x + 6, top: y - 6, bottom: y + 6 });
@@ -47,7 +60,7 @@ export function matchPanel(design: DesignReport, data: CurveData, plot: Plot): M
   return fragment(
     litWindow(plot),
     levelLines(plot, matchLevels(plot.upper, plot.lower), 'dB'),
-    ...lids.map(({ lid }) => drawLid(plot, lid)),
+    clipped(plot, 'match', ...lids.map(({ lid }) => drawLid(plot, lid))),
     clipped(
       plot,
       'match',

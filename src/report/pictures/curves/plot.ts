@@ -40,6 +40,16 @@ export function isShown({ fromHz, toHz }: Plot, hz: number): boolean {
   return hz >= fromHz && hz <= toHz;
 }
 
+/** Whether a span touches the frequencies of a picture; an absent end is open. */
+export function touches({ fromHz, toHz }: Plot, span: { readonly fromHz?: number; readonly toHz?: number }): boolean {
+  return (span.fromHz ?? 0) < toHz && (span.toHz ?? Number.POSITIVE_INFINITY) > fromHz;
+}
+
+/** Whether a point lies in the plot itself. */
+export function isInPlot(plot: Plot, x: number, y: number): boolean {
+  return x >= plot.left && x <= plot.right && y >= plot.top - 1 && y <= plot.bottom + 1;
+}
+
 /** Curves run on beyond the frame, where they are cut; so far beyond, pixels. */
 const BEYOND = 40;
 

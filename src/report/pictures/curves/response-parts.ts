@@ -2,13 +2,13 @@ import type { DesignReport } from '../../design-report.js';
 import { element, type Markup } from '../../svg/markup.js';
 import type { CurveData } from './curve-data.js';
 import { type AskedLid, lidOf } from './lids.js';
-import { clipped, curvePath, curvePoints, type Plot } from './plot.js';
+import { clipped, curvePath, curvePoints, type Plot, touches } from './plot.js';
 import type { Point } from './thin.js';
 
 /** Return-loss lines of the mask as lids. */
 export function returnLossLids(design: DesignReport, plot: Plot): readonly AskedLid[] {
   return design.mask
-    .filter(({ line }) => 'returnLossDb' in line)
+    .filter(({ line }) => 'returnLossDb' in line && touches(plot, line))
     .flatMap((row) => lidOf(plot, row, { side: 'above', forbids: 'reflection' }, (level) => -level));
 }
 

@@ -11,7 +11,18 @@ import { drawFlags, flagStrip, placedFlags, takeFlags } from './flags.js';
 import { type LabelMap, labelMap, takeBox, takeLine } from './label-map.js';
 import { lidTexts } from './lid-texts.js';
 import { type AskedLid, drawLid, lidBox } from './lids.js';
-import { clipFrame, clipped, isShown, levelLines, litWindow, type Plot, plotFrame, xOf, yOf } from './plot.js';
+import {
+  clipFrame,
+  clipped,
+  isInPlot,
+  isShown,
+  levelLines,
+  litWindow,
+  type Plot,
+  plotFrame,
+  xOf,
+  yOf,
+} from './plot.js';
 import { type Curves, curvesOf, drawCurves, returnLossLids } from './response-parts.js';
 import { responsePlot } from './response-plot.js';
 import { responseWords } from './response-words.js';
@@ -25,6 +36,7 @@ function lidMarks(plot: Plot, lids: readonly AskedLid[]): readonly Markup[] {
     const { worstHz, predicted } = row;
     if (worstHz === null || !isShown(plot, worstHz)) return [];
     const [x, y] = [xOf(plot, worstHz), yOf(plot, -predicted)];
+    if (!isInPlot(plot, x, y)) return [];
     return [requirementOf(row, plot.unit).isMet ? dot(x, y, 'f-reflection') : octagon(x, y)];
   });
 }
@@ -80,7 +92,7 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
     litWindow(plot, foot),
     clipped(plot, 'clip', drawWalls(plot, walls)),
     levelLines(plot, levelTicks(plot), 'dB'),
-    ...lids.map(({ lid }) => drawLid(plot, lid)),
+    clipped(plot, 'clip', ...lids.map(({ lid }) => drawLid(plot, lid))),
     drawCurves(plot, curves),
     ...lidMarks(plot, lids),
     drawFlags(plot, points, flags),

@@ -105,7 +105,10 @@ export function ruler(
     .filter((hz) => isShown(plot, hz))
     .sort((a, b) => a - b);
   const distinct = zeros.filter((hz, n) => n === 0 || hz - (zeros[n - 1] as number) > 1e-9 * hz);
-  const band = passbandLabel([from, to], `passband ${name}`);
+  const isSeen = to > from;
+  // A picture beside the band says on which side the band lies.
+  const text = isSeen ? `passband ${name}` : from > right ? `passband ${name} →` : `← passband ${name}`;
+  const band = passbandLabel(isSeen ? [from, to] : from > right ? [right, right] : [left, left], text);
   const marks = distinct.map((hz) => ({
     text: frequencyText(hz, { ...unit, digits: 2 }),
     classes: 'tick',
@@ -114,7 +117,9 @@ export function ruler(
   const labels = stacked(plot, [band, ...marks]);
   const markup = fragment(
     lane(plot, bottom),
-    element('rect', { x: from, y: bottom + BAR - 4, width: Math.max(2, to - from), height: 8, class: 'f-ink' }),
+    ...(isSeen
+      ? [element('rect', { x: from, y: bottom + BAR - 4, width: Math.max(2, to - from), height: 8, class: 'f-ink' })]
+      : []),
     ...distinct.map((hz) => triangle(xOf(plot, hz), bottom + BAR)),
     ...labels.map(({ middle, row, text, classes }) => label(middle, bottom + row, text, classes, 'mid')),
   );

@@ -1,12 +1,11 @@
 import type { MaskRow } from '../../../forms/index.js';
-import { element, fragment, type Markup } from '../../svg/markup.js';
-import { trimmed } from '../../words/numbers.js';
+import { element, type Markup } from '../../svg/markup.js';
 import { requirementOf } from '../../words/requirement.js';
 import { textSize } from './curve-name.js';
 import { type Box, claim, isFree, type LabelMap, takeBox } from './label-map.js';
 import { drawLid, type Lid, lidBox } from './lids.js';
-import { roomText } from './limit-words.js';
-import { type Plot, xOf, yOf } from './plot.js';
+import { limitWords, roomText } from './limit-words.js';
+import { clipped, isShown, type Plot, xOf, yOf } from './plot.js';
 import type { PlacedText } from './walls.js';
 
 /** A limit on variation: a box as wide as its band and as tall as what is allowed, standing on the best value. */
@@ -51,14 +50,15 @@ function lidOfBox(plot: Plot, { fromHz, toHz, end }: VariationBox): Lid {
   };
 }
 
-/** Dotted sides and the hatched lid on the worse one. */
-export function drawVariationBox(plot: Plot, box: VariationBox): Markup {
+/** Dotted sides and the hatched lid on the worse one, cut by a frame; a side that lies beyond the picture is not drawn. */
+export function drawVariationBox(plot: Plot, box: VariationBox, clip: string): Markup {
   const lid = lidOfBox(plot, box);
   const [x0, x1] = [xOf(plot, lid.fromHz), xOf(plot, lid.toHz)];
   const [y0, y1] = [yOf(plot, box.best), yOf(plot, box.end)];
+  const sides = [box.fromHz, box.toHz].filter((hz) => isShown(plot, hz)).map((hz) => xOf(plot, hz));
   const side = (x: number): Markup => element('line', { x1: x, x2: x, y1: y0, y2: y1, class: 'line dots s-ink' });
   const base = element('line', { x1: x0, x2: x1, y1: y0, y2: y0, class: 'line dots s-ink' });
-  return fragment(base, side(x0), side(x1), drawLid(plot, lid));
+  return clipped(plot, clip, base, ...sides.map(side), drawLid(plot, lid));
 }
 
 /** Takes the place of a box's sides and lid, so that no text is written on them. */
@@ -81,7 +81,7 @@ interface Wording {
 function wordingOf(plot: Plot, { row }: VariationBox): Wording {
   const requirement = requirementOf(row, plot.unit);
   const { predicted, limit, unit, isMet } = requirement;
-  const used = `${predicted.toFixed(unit === 'dB' ? 2 : 1)} of ${trimmed(limit, 4)} ${unit} used`;
+  const used = `${predicted.toFixed(unit === 'dB' ? 2 : 1)} of ${limitWords(limit)} ${unit} used`;
   return { lines: [isMet ? used : `${used}, ${roomText(requirement)}`], isMet };
 }
 

@@ -2,9 +2,9 @@ import type { Level, MaskLine, MaskRow } from '../../../forms/index.js';
 import { hatchFill } from '../../svg/hatch.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
 import { label } from '../../svg/words.js';
-import { trimmed } from '../../words/numbers.js';
 import { textSize } from './curve-name.js';
 import { type Box, type LabelMap, takeBox } from './label-map.js';
+import { limitWords } from './limit-words.js';
 import { type Plot, xOf, yOf } from './plot.js';
 import type { Point } from './thin.js';
 
@@ -95,8 +95,8 @@ function wallText({ row: { line }, depths }: Wall): string {
   const level = typeof line.rejectionDb === 'number' ? [line.rejectionDb] : line.rejectionDb;
   const text =
     depths[0] === depths[1]
-      ? `≥ ${trimmed(level[0] as number, 2)}`
-      : `${level.map((each) => trimmed(each, 2)).join(' to ')}`;
+      ? `≥ ${limitWords(level[0] as number)}`
+      : `${level.map((each) => limitWords(each)).join(' to ')}`;
   return `reject ${text} dB${below}`;
 }
 
@@ -124,7 +124,9 @@ export function wallLabels(map: LabelMap, plot: Plot, walls: readonly Wall[]): r
   const placed = walls.flatMap((wall) => {
     const text = wallText(wall);
     const box = labelBox(plot, wall, walls, text);
-    return box === undefined || box.top < plot.top + 4 ? [] : [{ box, lines: [text], isMet: true }];
+    return box === undefined || box.top < plot.top + 4 || box.bottom > plot.bottom
+      ? []
+      : [{ box, lines: [text], isMet: true }];
   });
   for (const { box } of placed) takeBox(map, box);
   return placed;

@@ -3,7 +3,7 @@ import { trimmed } from '../../words/numbers.js';
 import { type Requirement, requirementOf } from '../../words/requirement.js';
 import type { CurveData } from './curve-data.js';
 import { limitWords, roomText, spanWords } from './limit-words.js';
-import { isShown, type Plot, xOf, yOf } from './plot.js';
+import { isShown, type Plot, touches, xOf, yOf } from './plot.js';
 import { levelAt } from './walls.js';
 
 /** A point to be marked, with its place in the plot and what its flag says. */
@@ -66,8 +66,7 @@ function shownMiss(plot: Plot, row: MaskRow, data: CurveData): readonly WorstPoi
 export function worstPoints(plot: Plot, mask: readonly MaskRow[], data: CurveData): readonly WorstPoint[] {
   const points = mask.flatMap((row) => {
     const { line, worstHz } = row;
-    const isOutside = (line.toHz ?? plot.fromHz) < plot.fromHz || (line.fromHz ?? plot.toHz) > plot.toHz;
-    if (!('rejectionDb' in line) || isOutside) return [];
+    if (!('rejectionDb' in line) || !touches(plot, line)) return [];
     const reference = line.relativeTo === 'center' ? data.centerLossDb : 0;
     if (worstHz !== null && isShown(plot, worstHz)) return [ownPoint(plot, row, reference)];
     return [edgePoint(plot, row), ...shownMiss(plot, row, data)];

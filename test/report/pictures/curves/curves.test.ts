@@ -246,3 +246,119 @@ describe('the lit window', () => {
     expect(hzFromOmega(design.specification.band, 1)).toBe(upperHz);
   });
 });
+
+/** Masks, sweeps and bands that once led a mark out of its panel, a curve off its frame, or an axis below 0 Hz. */
+const OFF: readonly (readonly [string, Partial<SpecificationInput>])[] = [
+  ['a wall that runs on', { mask: [{ fromHz: '1.06 GHz', rejectionDb: 30 }] }],
+  [
+    'a coarse sweep',
+    { sweep: { fromHz: '0.92 GHz', toHz: '1.09 GHz', points: 5 }, mask: [{ fromHz: '1.03 GHz', rejectionDb: 20 }] },
+  ],
+  ['one side far', { mask: [{ toHz: '0.9 GHz', rejectionDb: 30 }], transmissionZeros: [1.995, -6.87], order: 3 }],
+  ['a band of 100 %', { passband: { lowerHz: 1e9, upperHz: 3e9 } }],
+  ['loss on the skirt', { mask: [{ fromHz: '0.99 GHz', toHz: '1.0108 GHz', insertionLossDb: 1 }] }],
+  ['return loss on the skirt', { mask: [{ fromHz: '0.95 GHz', toHz: '1.005 GHz', returnLossDb: 20 }] }],
+  ['a reflection zero', { mask: [{ fromHz: 999999990, toHz: 1000000010, returnLossDb: 300 }], order: 3 }],
+  [
+    'limits far below the floor',
+    {
+      mask: [
+        { fromHz: '1.03 GHz', toHz: '1.05 GHz', rejectionDb: 300 },
+        { fromHz: '0.999 GHz', toHz: '1.001 GHz', returnLossDb: 300 },
+      ],
+    },
+  ],
+  [
+    'variation beside the picture',
+    {
+      mask: [
+        { fromHz: '1.04 GHz', toHz: '1.05 GHz', insertionLossVariationDb: 1 },
+        { fromHz: '1.04 GHz', toHz: '1.05 GHz', groupDelayVariationSeconds: 1e-9 },
+      ],
+    },
+  ],
+  [
+    'variation half in the picture',
+    {
+      mask: [
+        { fromHz: '0.9 GHz', toHz: '1.005 GHz', insertionLossVariationDb: 1 },
+        { fromHz: '0.97 GHz', toHz: '1.005 GHz', groupDelayVariationSeconds: 1e-7 },
+      ],
+    },
+  ],
+  [
+    'delay below zero',
+    {
+      unloadedQ: 120,
+      transmissionZeros: [1.5, -1.5],
+      mask: [{ fromHz: '0.984 GHz', toHz: '1.016 GHz', groupDelayVariationSeconds: 1e-6 }],
+    },
+  ],
+  ['a sweep beside the band', { sweep: { fromHz: '1.2 GHz', toHz: '1.3 GHz', points: 101 } }],
+  ['long sweep', { sweep: { fromHz: '0.99 GHz', toHz: '1.01 GHz', points: 100_001 } }],
+];
+
+describe.each(OFF)('%s', (_, more) => {
+  const design = sampleDesign({ unloadedQ: 2000, ...more });
+
+  it.each(DRAW.map((draw) => [draw.name, draw] as const))(
+    '%s: marks stay in their frame, curves reach its sides',
+    (__, draw) => {
+      const { wide, narrow } = draw(design);
+      for (const { body, height } of [wide, narrow]) {
+        const frame = frameOf(body.markup);
+        expect(frame.hz(frame.left)).toBeGreaterThan(0);
+        const value = (name: string): number => Number(new RegExp(`data-${name}="([^"]+)"`).exec(body.markup)![1]);
+        const [top, bottom] = [value('top'), value('bottom')];
+        for (const [, x, y] of body.markup.matchAll(/<circle cx="(-?[\d.]+)" cy="(-?[\d.]+)" r="3.6"/g)) {
+          expect(Number(x)).toBeGreaterThanOrEqual(frame.left - 0.1);
+          expect(Number(x)).toBeLessThanOrEqual(frame.right + 0.1);
+          expect(Number(y)).toBeGreaterThanOrEqual(top - 1.1);
+          expect(Number(y)).toBeLessThanOrEqual(bottom + 1.1);
+        }
+        for (const [, points] of body.markup.matchAll(/<polygon points="([^"]+)" class="f-short/g))
+          for (const pair of points!.split(' ')) {
+            const [x, y] = pair.split(',').map(Number) as [number, number];
+            expect(x).toBeGreaterThan(frame.left - 8);
+            expect(x).toBeLessThan(frame.right + 8);
+            expect(y).toBeGreaterThan(top - 8);
+            expect(y).toBeLessThan(bottom + 8);
+          }
+        for (const [, y] of body.markup.matchAll(/<text [^>]*y="(-?[\d.]+)"/g)) {
+          expect(Number(y)).toBeGreaterThan(0);
+          expect(Number(y)).toBeLessThan(height);
+        }
+        for (const classes of ['thick s-transmission', 'medium s-reflection'])
+          for (const points of pathsOf(body.markup, classes)) {
+            expect(points[0]![0]).toBeLessThanOrEqual(frame.left + 0.1);
+            expect(points.at(-1)![0]).toBeGreaterThanOrEqual(frame.right - 0.1);
+          }
+      }
+    },
+  );
+
+  it('the curves of the response are those of the roots, whatever the sweep', () => {
+    const { markup } = responsePicture(design).wide.body;
+    const [frame, axis] = [frameOf(markup), levelAxis(markup, 0)];
+    const [points = []] = pathsOf(markup, 'thick s-transmission');
+    // Between two corner points of the path as well: the line itself must be the curve.
+    const middles = points
+      .slice(1)
+      .map(([x, y], n) => [(x + points[n]![0]) / 2, (y + points[n]![1]) / 2] as [number, number]);
+    const shown = [...points, ...middles].filter(
+      ([x, y]) => x > frame.left && x < frame.right && axis(y) > -45 && axis(y) < -0.5,
+    );
+    for (const point of shown)
+      expect(
+        passes((hz) => decibelsAt(design, hz).s21, frame, axis, point),
+        `${point}`,
+      ).toBe(true);
+  });
+});
+
+it('a limit is never shown rounded', () => {
+  const { wide } = responsePicture(
+    sampleDesign({ mask: [{ fromHz: '1.03 GHz', toHz: '1.06 GHz', rejectionDb: 33.9996 }] }),
+  );
+  expect(wide.body.markup).toContain('of 33.9996 at');
+});
