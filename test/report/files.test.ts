@@ -87,6 +87,18 @@ describe('handOverCsv(design)', () => {
     const transversal = rowsOf(handOverCsv(sampleDesign({ topology: 'transversal' })));
     expect(transversal.filter(([kind]) => kind === 'port')).toHaveLength(8);
   });
+
+  it('gives couplings of a port their external Q, f0/(B*M^2) each alone, and no coupling bandwidth', () => {
+    for (const topology of ['folded', 'arrow', 'transversal'] as const) {
+      const report = sampleDesign({ topology, transmissionZeros: [1.4, -1.6] });
+      const ports = rowsOf(handOverCsv(report)).filter(([kind]) => kind === 'port');
+      expect(ports.length).toBeGreaterThan(1);
+      for (const [, , , m, k, bandwidth, , , quality] of ports) {
+        expect([k, bandwidth]).toEqual(['', '']);
+        expect(Number(quality) * 20e6 * Number(m) ** 2).toBeCloseTo(1e9, 0);
+      }
+    }
+  });
 });
 
 describe('resultJson(design, source)', () => {

@@ -60,6 +60,24 @@ describe('summaryText(design)', () => {
     expect(lines.filter((line) => line.endsWith(' '))).toEqual([]);
   });
 
+  it('lists the external Q of each coupling where a port touches several resonators', () => {
+    const report = sampleDesign({ order: 5, topology: 'arrow', transmissionZeros: [1.4, -1.6, 2] });
+    const text = summaryText(report);
+    const own = report.matrix.values[6]!.slice(1, -1).flatMap((m, n) => (m === 0 ? [] : [{ m, n }]));
+    expect(own.length).toBeGreaterThan(2);
+    for (const { m, n } of own) {
+      // f0/B is 50.
+      const quality = (50 / (m * m)).toPrecision(4).replace(/\.$/, '');
+      const sign = m < 0 ? '-' : '+';
+      const line = new RegExp(`^load +${n + 1} +${quality} +\\${sign}${Math.abs(m).toFixed(4)}$`, 'm');
+      if (Number(quality) < 1e4) expect(text).toMatch(line);
+    }
+    expect(text).toContain('taken alone');
+    expect(text).not.toMatch(/several$/m);
+    expect(text).not.toMatch(/^ *\d+-L /m);
+    expect(summaryText(sampleDesign({}))).not.toContain('taken alone');
+  });
+
   it('puts a missed requirement first and in words, with the sign of alarm', () => {
     const mask = [
       { fromHz: '1011 MHz', rejectionDb: 60 },
@@ -67,7 +85,7 @@ describe('summaryText(design)', () => {
     ];
     const text = summaryText(sampleDesign({ mask }), tagged);
     expect(text.replaceAll('</a>\n<a>', ' ')).toMatch(
-      /<a>Short of 1 of 2 requirements\. Farthest off for its limit: rejection at and above 1011 MHz, short by \d/,
+      /<a>Misses 1 of 2 requirements\. Farthest off for its limit: rejection at and above 1011 MHz, short by \d/,
     );
     expect(text.match(/<a>rejection, dB +>= 1011 .*short by +\d+\.\d\d +1011\.000<\/a>/)).not.toBeNull();
   });
@@ -102,7 +120,7 @@ describe('summaryText(design)', () => {
     expect(wide).toContain('Caution: the band is 20.1 % wide');
     const narrow = summaryText(sampleDesign({}));
     expect(narrow).not.toContain('Caution');
-    expect(narrow.replace(/\s+/g, ' ')).toContain('No number here is a safety clearance.');
+    expect(narrow.replace(/\s+/g, ' ')).toContain('not a safety clearance.');
   });
 
   it('repeats what the reader of the design file remarked', () => {

@@ -41,15 +41,15 @@ function portRows({ specification, matrix, handOver }: DesignReport): readonly (
       if (m === 0) return [];
       const externalQ = centerHz / (width * m * m);
       const delaySeconds = handOver.reflectedDelaySeconds[port];
-      const values = { bandwidthHz: m * width, externalQ, delaySeconds };
-      return [row('port', port === 'source' ? 'S' : 'L', String(n + 1), m, values)];
+      return [row('port', port === 'source' ? 'S' : 'L', String(n + 1), m, { externalQ, delaySeconds })];
     });
   });
 }
 
 /**
  * The hand-over numbers as one table: a row for each resonator, each coupling between resonators, each coupling of a port,
- * and the direct coupling of source and load. Units stand in the head row; a cell that has no meaning in its row is empty.
+ * and the direct coupling of source and load. Units stand in the head row; a cell that has no meaning in its row is empty: a
+ * coupling of a port has an external Q, that of the coupling taken alone, and no coupling bandwidth.
  *
  * @example
  * const table = handOverCsv(design({ passband: { centerHz: '1 GHz', bandwidthHz: '20 MHz' }, order: 4, returnLossDb: 20 }));

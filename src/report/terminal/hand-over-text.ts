@@ -7,6 +7,10 @@ import type { Paint } from './paint.js';
 
 const K_DIGITS = 6;
 const M_DIGITS = 4;
+const Q_FIGURES = 4;
+
+/** Stands below several couplings of one port. */
+const SEVERAL = 'Of several couplings at one port, each external Q is that of one taken alone.';
 
 /** What a hand-over table is made from. */
 export interface HandOverParts {
@@ -30,37 +34,44 @@ function resonatorLines({ band, handOver, unit }: HandOverParts): readonly strin
 }
 
 function couplingLines(parts: HandOverParts): readonly string[] {
-  const { handOver, matrix, unit } = parts;
+  const { handOver, unit } = parts;
   const width = (hertz: number): string => signed(hertz / unit.hertz, unit.digits);
-  const inner = handOver.couplings.map(({ between: [i, j], k, bandwidthHz }) => [
+  const rows = handOver.couplings.map(({ between: [i, j], k, bandwidthHz }) => [
     `${i}-${j}`,
     signed(k, K_DIGITS),
     width(bandwidthHz),
     entry(parts, i, j),
   ]);
-  const ports = handOver.portCouplings.map(({ port, resonator, bandwidthHz }) => {
-    const node = port === 'source' ? 0 : matrix.order + 1;
-    const pair = port === 'source' ? `S-${resonator}` : `${resonator}-L`;
-    return [pair, '', width(bandwidthHz), entry(parts, node, resonator)];
-  });
-  const rows = [...inner, ...ports];
   return rows.length === 0 ? [] : table([['coupling', 'k', unit.name, 'M'], ...rows], 'lrrr');
 }
 
-function portLines(parts: HandOverParts): readonly string[] {
+/** A row for each coupling of a port; the delay is told where a port has one coupling only. */
+function portRows(port: 'source' | 'load', parts: HandOverParts): readonly (readonly string[])[] {
   const { handOver, matrix } = parts;
-  const rows = (['source', 'load'] as const).map((port) => {
-    const node = port === 'source' ? 0 : matrix.order + 1;
-    const quality = handOver.externalQ[port];
-    const delay = handOver.reflectedDelaySeconds[port];
-    const touched = (matrix.values[node] ?? []).slice(1, -1).flatMap((value, n) => (value === 0 ? [] : [n + 1]));
-    const at = touched.length === 1 ? String(touched[0]) : touched.length === 0 ? 'none' : 'several';
-    const values = quality === null || delay === null ? ['', ''] : [figures(quality, 4), fixed(delay * 1e9, 3)];
-    return [port, at, ...values, touched.length === 1 ? entry(parts, node, touched[0] ?? 0) : ''];
-  });
-  const direct = handOver.directCoupling;
+  const node = port === 'source' ? 0 : matrix.order + 1;
+  const [quality, delay] = [handOver.externalQ[port], handOver.reflectedDelaySeconds[port]];
+  if (quality !== null && delay !== null) {
+    const resonator = (matrix.values[node] ?? []).findIndex((m, n) => m !== 0 && n > 0 && n <= matrix.order);
+    const values = [figures(quality, Q_FIGURES), fixed(delay * 1e9, 3), entry(parts, node, resonator)];
+    return [[port, String(resonator), ...values]];
+  }
+  const own = handOver.portCouplings.filter((each) => each.port === port);
+  if (own.length === 0) return [[port, 'none', '', '', '']];
+  return own.map(({ resonator, externalQ }) => [
+    ...[port, String(resonator), figures(externalQ, Q_FIGURES), ''],
+    entry(parts, node, resonator),
+  ]);
+}
+
+function portLines(parts: HandOverParts): readonly string[] {
+  const { directCoupling: direct, portCouplings } = parts.handOver;
+  const rows = (['source', 'load'] as const).flatMap((port) => portRows(port, parts));
   const directRow = direct === 0 ? [] : [['direct', 'S-L', '', '', signed(direct, M_DIGITS)]];
-  return table([['port', 'resonator', 'external Q', 'reflected delay, ns', 'M'], ...rows, ...directRow], 'lrrrr');
+  const lines = table(
+    [['port', 'resonator', 'external Q', 'reflected delay, ns', 'M'], ...rows, ...directRow],
+    'lrrrr',
+  );
+  return portCouplings.length === 0 ? lines : [...lines, SEVERAL];
 }
 
 /** Resonators beside couplings, then ports; resonators that are all at the center take one line. */
