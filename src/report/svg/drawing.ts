@@ -1,4 +1,4 @@
-import { element, fragment, type Markup } from './markup.js';
+import { constantMarkup, element, fragment, type Markup } from './markup.js';
 import { FILE_STYLE } from './picture-style.js';
 
 /** One drawing at its natural size, in pixels. */
@@ -63,7 +63,7 @@ export function pictureSvg({ wide, finding, alternative }: Picture): string {
   const heads = fragment(
     element('title', {}, finding),
     element('desc', {}, alternative),
-    element('style', {}, { markup: FILE_STYLE.replaceAll('<', '') }),
+    element('style', {}, constantMarkup(FILE_STYLE)),
   );
   return `${element('svg', attributes, heads, ground, body).markup}\n`;
 }

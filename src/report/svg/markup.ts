@@ -1,6 +1,20 @@
-/** Text that is markup already; only this file makes it from plain text, and it escapes what it is given. */
+/** Text that is markup already; only this file makes it, and it escapes what it is given. */
 export interface Markup {
   readonly markup: string;
+}
+
+/** Every piece made here: an object of the same shape from elsewhere, such as a parsed file, is not taken for markup. */
+const MADE = new WeakSet<Markup>();
+
+function made(markup: string): Markup {
+  const piece = { markup };
+  MADE.add(piece);
+  return piece;
+}
+
+/** A constant of this package as markup: a style sheet, a script, data that has been made safe. Never anything of a user. */
+export function constantMarkup(markup: string): Markup {
+  return made(markup);
 }
 
 /** What an element holds: markup as it is, plain text escaped. */
@@ -34,18 +48,18 @@ function coordinate(value: number): string {
 
 function attributeText([name, value]: readonly [string, string | number | undefined]): string {
   if (value === undefined) return '';
-  return ` ${name}="${typeof value === 'number' ? coordinate(value) : escapeMarkup(value)}"`;
+  return ` ${name}="${typeof value === 'number' ? coordinate(value) : escapeMarkup(String(value))}"`;
 }
 
 function childText(child: Child): string {
-  return typeof child === 'string' ? escapeMarkup(child) : child.markup;
+  return typeof child === 'object' && MADE.has(child) ? child.markup : escapeMarkup(String(child));
 }
 
 /** One element with its attributes and children; numbers are rounded to a tenth of a pixel. */
 export function element(name: string, attributes: Attributes, ...children: readonly Child[]): Markup {
   const open = `<${name}${Object.entries(attributes).map(attributeText).join('')}`;
   const isSvgLeaf = children.length === 0 && LEAVES.has(name);
-  return { markup: isSvgLeaf ? `${open}/>` : `${open}>${children.map(childText).join('')}</${name}>` };
+  return made(isSvgLeaf ? `${open}/>` : `${open}>${children.map(childText).join('')}</${name}>`);
 }
 
 /** Elements that are written closed in themselves; HTML allows that of its own void elements and inside SVG only. */
@@ -55,5 +69,5 @@ const LEAVES: ReadonlySet<string> = new Set(
 
 /** Several pieces one after the other. */
 export function fragment(...children: readonly Child[]): Markup {
-  return { markup: children.map(childText).join('') };
+  return made(children.map(childText).join(''));
 }

@@ -12,6 +12,12 @@ describe('element(name, attributes, ...children)', () => {
     expect(fragment('<', inner).markup).toBe(`&lt;${inner.markup}`);
   });
 
+  it('takes nothing for markup that it has not made', () => {
+    const forged = { markup: '<img src=x>' } as never;
+    expect(element('p', { title: forged }, forged).markup).not.toContain('<img');
+    expect(fragment(forged).markup).toBe('[object Object]');
+  });
+
   it('rounds numbers to a tenth, leaves out what is absent, and writes no minus zero', () => {
     expect(element('rect', { x: 1.26, y: -0.04, class: undefined }).markup).toBe('<rect x="1.3" y="0"/>');
   });

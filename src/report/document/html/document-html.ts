@@ -1,7 +1,7 @@
 import type { DesignReport } from '../../design-report.js';
 import type { DesignSource } from '../../files/result-json.js';
 import type { Drawing, Picture } from '../../svg/drawing.js';
-import { element, fragment, type Markup } from '../../svg/markup.js';
+import { constantMarkup, element, fragment, type Markup } from '../../svg/markup.js';
 import { unitOf } from '../../words/numbers.js';
 import type { Sheet } from '../content/content.js';
 import { sheetsOf } from '../content/sheets.js';
@@ -33,7 +33,7 @@ function headMarkup({ specification }: DesignReport): Markup {
     element('meta', { name: 'referrer', content: 'no-referrer' }),
     element('meta', { name: 'viewport', content: 'width=device-width, initial-scale=1' }),
     element('title', {}, windowTitle(specification)),
-    element('style', {}, { markup: DOCUMENT_STYLE }),
+    element('style', {}, constantMarkup(DOCUMENT_STYLE)),
   );
 }
 
@@ -65,8 +65,8 @@ function scriptParts({ specification }: DesignReport, { sweep }: DocumentParts):
   if (sweep === undefined) return [];
   const data = jsonNumbers({ unit: unitOf(specification.band), ...sweep });
   return [
-    element('script', { type: 'application/json', id: 'sweep-data' }, { markup: data }),
-    element('script', {}, { markup: READOUT_SCRIPT }),
+    element('script', { type: 'application/json', id: 'sweep-data' }, constantMarkup(data)),
+    element('script', {}, constantMarkup(READOUT_SCRIPT)),
   ];
 }
 
