@@ -1,3 +1,4 @@
+import { checkDesign } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import { curveData } from '../pictures/curves/curve-data.js';
 import { sweepData } from '../pictures/curves/sweep-data.js';
@@ -7,6 +8,6 @@ import type { DocumentParts } from './html/document-html.js';
 
 /** What is drawn and swept for the document of a design: one sweep for all pictures and for the cursor. */
 export function documentParts(design: DesignReport): DocumentParts {
-  const data = curveData(design);
+  const data = curveData(checkDesign(design));
   return { pictures: designPicturesOf(design, data), emblem: emblem(design.matrix), sweep: { ...sweepData(data) } };
 }

@@ -1,3 +1,4 @@
+import { checkSource } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import type { DesignSource } from '../files/result-json.js';
 import { documentHtml } from './html/document-html.js';
@@ -10,7 +11,7 @@ import { documentParts } from './parts.js';
  * The same design gives the same bytes; texts of the specification stand in it as text, whatever they hold. `source` says
  * which design file it came from (its SHA-256 digest in hexadecimal). Cost: most of it is the sweeps of the pictures.
  *
- * @throws FilterFailure what the sweeps refuse; nothing for a result of `design`
+ * @throws FilterFailure E_TYPE for what is no result of `design`; nothing for one
  *
  * @example
  * const band = { centerHz: '1 GHz', bandwidthHz: '20 MHz' };
@@ -18,5 +19,5 @@ import { documentParts } from './parts.js';
  * page.startsWith('<!DOCTYPE html>'); // true
  */
 export function reportHtml(design: DesignReport, source?: DesignSource): string {
-  return documentHtml(design, source, documentParts(design));
+  return documentHtml(design, checkSource(source), documentParts(design));
 }

@@ -1,3 +1,4 @@
+import { checkDesign, checkSource } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import { CONVENTIONS } from '../words/conventions.js';
 import { jsonText } from './json-text.js';
@@ -18,6 +19,6 @@ export interface DesignSource {
  * JSON.parse(text).source.file; // '../filter.json'
  */
 export function resultJson(design: DesignReport, source: DesignSource): string {
-  const { version, ...rest } = design;
-  return `${jsonText({ version, source, conventions: CONVENTIONS, ...rest })}\n`;
+  const { version, ...rest } = checkDesign(design);
+  return `${jsonText({ version, source: checkSource(source), conventions: CONVENTIONS, ...rest })}\n`;
 }

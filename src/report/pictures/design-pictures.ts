@@ -1,3 +1,4 @@
+import { checkDesign } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import type { Picture } from '../svg/drawing.js';
 import { bandPictureOf } from './curves/band-picture.js';
@@ -36,5 +37,5 @@ export function designPicturesOf(design: DesignReport, data: CurveData): readonl
  * pictures[0]?.name; // 'response'
  */
 export function designPictures(design: DesignReport): readonly Picture[] {
-  return designPicturesOf(design, curveData(design));
+  return designPicturesOf(checkDesign(design), curveData(design));
 }

@@ -1,3 +1,4 @@
+import { checkDesign } from '../../check-design.js';
 import type { DesignReport } from '../../design-report.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg/drawing.js';
 import { hatchPatterns } from '../../svg/hatch.js';
@@ -99,5 +100,5 @@ export function bandPictureOf(design: DesignReport, data: CurveData): Picture {
  * picture.finding; // 'Return loss clear by 2.3 dB'
  */
 export function bandPicture(design: DesignReport): Picture {
-  return bandPictureOf(design, curveData(design));
+  return bandPictureOf(checkDesign(design), curveData(design));
 }

@@ -1,4 +1,5 @@
 import { hzFromOmega } from '../../../forms/index.js';
+import { checkDesign } from '../../check-design.js';
 import type { DesignReport } from '../../design-report.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg/drawing.js';
 import { hatchPatterns } from '../../svg/hatch.js';
@@ -178,5 +179,5 @@ export function groupDelayPictureOf(design: DesignReport, data: CurveData): Pict
  * picture.alternative.includes('of 40 ns'); // true
  */
 export function groupDelayPicture(design: DesignReport): Picture {
-  return groupDelayPictureOf(design, curveData(design));
+  return groupDelayPictureOf(checkDesign(design), curveData(design));
 }

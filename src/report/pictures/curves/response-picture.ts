@@ -1,4 +1,5 @@
 import { scaleLinear } from 'd3-scale';
+import { checkDesign } from '../../check-design.js';
 import type { DesignReport } from '../../design-report.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../svg/drawing.js';
 import { hatchPatterns } from '../../svg/hatch.js';
@@ -129,5 +130,5 @@ export function responsePictureOf(design: DesignReport, data: CurveData): Pictur
  * picture.finding; // 'Rejection clear by 2.2 dB'
  */
 export function responsePicture(design: DesignReport): Picture {
-  return responsePictureOf(design, curveData(design));
+  return responsePictureOf(checkDesign(design), curveData(design));
 }
