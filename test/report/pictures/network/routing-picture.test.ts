@@ -108,7 +108,7 @@ describe('routing picture', () => {
 
   it('states what it sees', () => {
     expect(routingPicture(fixtureDesign('larkmoor').matrix).finding).toBe(
-      'Folded in two rows: one cross coupling, 2–5, of −0.1561',
+      'Folded in two lines: one cross coupling, 2\u2060–\u20605, of −0.1561',
     );
     expect(routingPicture(chain([1, 0.8, 0.8, 1])).finding).toBe('A chain: no cross coupling');
     expect(
@@ -119,8 +119,76 @@ describe('routing picture', () => {
         ]).matrix,
       ).finding,
     ).toMatch(/^A chain with 1 triangle and 1 square: 2 cross/);
-    expect(routingPicture(arrowDesign(6, 3).matrix).finding).toMatch(/^A chain: 3 cross couplings/);
-    expect(routingPicture(fanDesign(4, 4).matrix).finding).toMatch(/^A fan .*: source and load also coupled directly$/);
+    expect(routingPicture(arrowDesign(6, 3).matrix).finding).toMatch(/^A chain in arrow form: 3 cross couplings/);
+    expect(routingPicture(fanDesign(4, 4).matrix).finding).toMatch(
+      /^Resonators in parallel between source and load: source and load also coupled directly$/,
+    );
+  });
+
+  it('says arrow form of exactly that: a whole chain, cross couplings at one port', () => {
+    const { matrix } = arrowDesign(6, 3);
+    const values = matrix.values.map((row) => [...row]);
+    values[2]![3] = values[3]![2] = 0;
+    expect(routingPicture({ order: 6, values }).finding).toMatch(/^A chain: /);
+    const { finding } = routingPicture(
+      wired(
+        '',
+        8,
+        [
+          [1, 7],
+          [2, 5],
+        ],
+        14,
+      ).matrix,
+    );
+    expect(finding).toMatch(/^A chain: /);
+  });
+
+  it('each coupling of a port has its own external Q, f0/(B*M^2), and source to load nothing but M', () => {
+    const factor = BAND.centerHz / BAND.bandwidthHz;
+    for (const { name, matrix } of [arrowDesign(6, 3), fanDesign(4, 4), foldedDesigns(6).at(-1)!, arrowDesign(8, 8)]) {
+      const { labels } = routingLayout(matrix, BAND, 'wide');
+      const { order, values } = matrix;
+      const text = (m: number): string => `${m < 0 ? '−' : '+'}${Math.abs(m).toFixed(4)}`;
+      for (const [i, row] of values.entries())
+        for (const [j, m] of row.entries()) {
+          if (j <= i || Math.abs(m) < 5e-5) continue;
+          const seconds = labels
+            .filter(({ lines }) => lines[0]!.text === text(m))
+            .map(({ lines }) => lines[1]?.text ?? '');
+          const isPort = (i === 0) !== (j === order + 1);
+          const mine = seconds.filter((each) => each.startsWith('Qe ')).map((each) => Number(each.slice(3)) * m * m);
+          if (isPort)
+            expect(
+              mine.some((each) => Math.abs(each / factor - 1) < 2e-3),
+              `${name} ${i} ${j}`,
+            ).toBe(true);
+          if (i === 0 && j === order + 1) expect(seconds, name).toContain('');
+        }
+      const qualities = labels.filter(({ lines }) => lines[1]?.text.startsWith('Qe ')).length;
+      const ports = [...values[0]!.slice(1, -1), ...values[order + 1]!.slice(1, -1)].filter((m) => Math.abs(m) >= 5e-5);
+      expect(qualities, name).toBe(ports.length);
+    }
+  });
+
+  it('captions name only what is drawn, in words that are true of both drawings', () => {
+    const designs = [...[1, 2, 5, 8, 9, 14, 16].flatMap(foldedDesigns), ...otherDesigns(), arrowDesign(16, 6)];
+    for (const { name, matrix } of designs) {
+      for (const band of [BAND, undefined]) {
+        const { caption, finding } = routingPicture(matrix, band);
+        const layouts = (['wide', 'narrow'] as const).map((format) => routingLayout(matrix, band, format));
+        const seconds = layouts.map(({ labels }) =>
+          labels.flatMap(({ lines }) => lines.slice(1).map(({ text }) => text)),
+        );
+        expect(caption.includes('second line'), name).toBe(seconds.some((each) => each.length > 0));
+        expect(caption.includes('Qe'), name).toBe(seconds.flat().some((text) => text.startsWith('Qe')));
+        expect(caption.includes('bandwidth'), name).toBe(seconds.flat().some((text) => !text.startsWith('Qe')));
+        if (seconds[0]!.length !== seconds[1]!.length && caption.includes('second line'))
+          expect(caption, name).toContain('where there is room');
+        expect(caption.includes('lozenge'), name).toBe(layouts[0]!.lozenges.length > 0);
+        expect(finding, name).not.toMatch(/[\dSL]–|–[\dSL]/);
+      }
+    }
   });
 
   it('leaves missing couplings of the main path out, and whole resonators unconnected', () => {

@@ -51,6 +51,10 @@ export interface PanelRequest {
   readonly step: number;
   /** Decimals wanted; fewer are written where neighbors would touch. */
   readonly digits: number;
+  /** Decimals, or figures, that numbers keep at least; 1 where nothing is said. */
+  readonly leastDigits?: number;
+  /** How numbers are written; signed where nothing is said. */
+  readonly write?: (value: number, digits: number) => string;
   /** Samples named in any case: the ones that stand out. */
   readonly extremes: readonly number[];
   /** Ends of the drawing, between which labels must stay. */
@@ -64,53 +68,75 @@ export const LETTERS = 11;
 /** Room for a number beyond the end of a stick, px. */
 const NUMBER_ROOM = 18;
 
-interface Writing {
-  readonly indices: readonly number[];
-  readonly digits: number;
-}
+/** A number keeps this distance from the sticks of its neighbors, px: it must not be read as theirs. */
+const FROM_STICKS = 8;
 
-const textOf = (value: number, digits: number): string => minus(signed(value, digits));
+interface Box {
+  readonly x: number;
+  readonly y: number;
+  readonly half: number;
+}
 
 const widthOf = (text: string, isBold: boolean): number => textWidth(text, LETTERS, isBold);
 
-/** All numbers with as many decimals as fit between neighbors, else those that stand out. */
-function writingOf({ samples, step, digits, extremes }: PanelRequest): Writing {
-  const all = samples.map((_, n) => n);
-  for (let tried = digits; tried >= Math.min(digits, 1); tried--) {
-    if (samples.every(({ value }) => widthOf(textOf(value, tried), false) + 3 <= step))
-      return { indices: all, digits: tried };
-  }
-  return { indices: extremes, digits };
+const written = ({ write = signed }: PanelRequest, value: number, digits: number): string =>
+  minus(write(value, digits));
+
+/** Numbers of digits tried, most first. */
+function triedDigits({ digits, leastDigits = 1 }: PanelRequest): number[] {
+  const least = Math.min(digits, leastDigits);
+  return Array.from({ length: digits - least + 1 }, (_, n) => digits - n);
 }
 
-function labelsOf(request: PanelRequest, toY: (value: number) => number, side: number): StickLabel[] {
+/** With how many digits all numbers fit between neighbors; undefined where they do not: then those that stand out are written. */
+function commonDigits(request: PanelRequest): number | undefined {
+  const { samples, step } = request;
+  return triedDigits(request).find((digits) =>
+    samples.every(({ value }) => widthOf(written(request, value, digits), false) + 3 <= step),
+  );
+}
+
+/** Does a number keep clear of the other sticks and their marks? */
+function isClear({ x, y, half }: Box, own: number, marks: readonly StickMark[], zero: number, side: number): boolean {
+  const reach = side * Math.SQRT1_2;
+  return marks.every((mark, n) => {
+    if (n === own) return true;
+    const [low, high] = [Math.min(mark.y - reach, zero), Math.max(mark.y + reach, zero)];
+    const passes = y + 6 > low && y - 6 < high;
+    const isNear = Math.abs(mark.x - x) < half + FROM_STICKS;
+    const isOver = Math.abs(mark.x - x) < half + reach && Math.abs(mark.y - y) <= 6 + reach;
+    return !(passes && isNear && mark.y !== zero) && !isOver;
+  });
+}
+
+/** Numbers over their own sticks; what would stand nearer to a neighbor's is left out. */
+function labelsOf(request: PanelRequest, marks: readonly StickMark[], zero: number, side: number): StickLabel[] {
   const { samples, extremes, left, right } = request;
-  const { indices, digits } = writingOf(request);
+  const common = commonDigits(request);
+  const indices = common === undefined ? extremes : samples.map((_, n) => n);
+  const tried = common === undefined ? triedDigits(request) : [common];
   const labels: (StickLabel & { readonly half: number })[] = [];
   for (const n of indices) {
-    const sample = samples[n];
-    if (sample === undefined) continue;
-    const text = textOf(sample.value, digits);
-    const half = widthOf(text, extremes.includes(n)) / 2;
-    const x = Math.min(Math.max(sample.x, left + half), right - half);
-    const y = toY(sample.height) + (sample.height < 0 ? 1 : -1) * (side * Math.SQRT1_2 + 9);
-    const isFree = labels.every((other) => Math.abs(other.x - x) > other.half + half + 2 || Math.abs(other.y - y) > 14);
-    if (!isFree) continue;
-    labels.push({ x, y, text, isExtreme: extremes.includes(n), isNegative: sample.value < 0, half });
+    const [sample, mark] = [samples[n], marks[n]];
+    if (sample === undefined || mark === undefined) continue;
+    const y = mark.y + (sample.height < 0 ? 1 : -1) * (side * Math.SQRT1_2 + 9);
+    const isExtreme = extremes.includes(n);
+    const found = tried
+      .map((digits) => {
+        const text = written(request, sample.value, digits);
+        const half = widthOf(text, isExtreme) / 2;
+        return { x: Math.min(Math.max(mark.x, left + half), right - half), y, text, half };
+      })
+      .find((each) => {
+        const isOwn = Math.abs(each.x - mark.x) <= each.half / 2;
+        const isFree = labels.every(
+          (other) => Math.abs(other.x - each.x) > other.half + each.half + 2 || Math.abs(other.y - y) > 14,
+        );
+        return isOwn && isFree && isClear(each, n, marks, zero, side);
+      });
+    if (found !== undefined) labels.push({ ...found, isExtreme, isNegative: sample.value < 0 });
   }
   return labels.map(({ half: _, ...label }) => label);
-}
-
-/** Numbers over marks of neighbors: such a label is left out rather than hide a mark. */
-function clearOfMarks(labels: readonly StickLabel[], marks: readonly StickMark[], side: number): StickLabel[] {
-  return labels.filter(({ x, y, text, isExtreme }) => {
-    const half = widthOf(text, isExtreme) / 2;
-    return marks.every((mark) => {
-      const isOther = Math.abs(mark.x - x) > 0.01;
-      const overlapsX = Math.abs(mark.x - x) < half + side * Math.SQRT1_2;
-      return !isOther || !overlapsX || Math.abs(mark.y - y) > 6 + side * Math.SQRT1_2;
-    });
-  });
 }
 
 /** Sticks with marks, their numbers and the ticks of the scale. */
@@ -124,7 +150,7 @@ export function panelOf(request: PanelRequest): Panel {
   const scale = scaleLinear([low, high === low ? low + 1 : high], [from, to]);
   const side = Math.min(9, Math.max(step * 0.6, 2));
   const marks = samples.map(({ x, height: end, value }) => ({ x, y: scale(end), isNegative: value < 0 }));
-  const labels = clearOfMarks(labelsOf(request, scale, side), marks, side);
+  const labels = labelsOf(request, marks, scale(0), side);
   return {
     top,
     bottom,

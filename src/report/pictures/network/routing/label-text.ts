@@ -41,18 +41,31 @@ export function bandwidthText(hertz: number, band: Band, withUnit: boolean): str
   return minus(`${hertz < 0 ? '-' : '+'}${figures(size, 1)}${withUnit ? ` ${unit.name}` : ''}`);
 }
 
-function portQuality({ from, to }: Link, { handOver, network }: Wording): number | null {
-  if (from === 0 && to <= network.order) return handOver.externalQ.source;
-  if (to === network.order + 1 && from > 0) return handOver.externalQ.load;
-  return null;
+/** Does a coupling tie a port to a resonator? */
+export function isAtPort({ from, to }: Pick<Link, 'from' | 'to'>, order: number): boolean {
+  return (from === 0) !== (to === order + 1);
 }
 
-/** The second line: external Q where a port has one coupling only, otherwise the coupling bandwidth. */
-function secondText(link: Link, wording: Wording): string | undefined {
-  if (wording.band === undefined) return undefined;
-  const quality = portQuality(link, wording);
-  if (quality !== null) return `Qe ${figures(quality, 4)}`;
-  return bandwidthText(link.value * wording.band.bandwidthHz, wording.band, !wording.isDense);
+/** Does a coupling lead from source to load? */
+export function isDirect({ from, to }: Pick<Link, 'from' | 'to'>, order: number): boolean {
+  return from === 0 && to === order + 1;
+}
+
+/** External Q of one coupling of a port taken alone: f0/(B*M^2). M times B means nothing at a port. */
+export function externalQ(value: number, { centerHz, bandwidthHz }: Band): number {
+  return centerHz / (bandwidthHz * value * value);
+}
+
+/** An external Q to four figures or as many as asked for; of very weak couplings its power of ten. */
+export function qualityText(quality: number, count = 4): string {
+  return quality < 1e6 ? figures(quality, count) : sizeText(quality);
+}
+
+/** The second line: coupling bandwidth between resonators, external Q at a port, nothing from source to load. */
+function secondText(link: Link, { band, network, isDense }: Wording): string | undefined {
+  if (band === undefined || isDirect(link, network.order)) return undefined;
+  if (isAtPort(link, network.order)) return `Qe ${qualityText(externalQ(link.value, band))}`;
+  return bandwidthText(link.value * band.bandwidthHz, band, !isDense);
 }
 
 /** The label of a coupling; empty where it has none. */

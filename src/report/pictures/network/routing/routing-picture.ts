@@ -16,7 +16,7 @@ export function routingLayout(matrix: CouplingMatrix, band: Band | undefined, fo
  *
  * The figure follows from the pattern of the matrix alone, so a matrix from elsewhere is drawn as well: two rows for a folded
  * one, a row with triangles, squares or arcs, a fan for the transversal form. Labels give M, and with a band the coupling
- * bandwidth, the external Q and the offsets of detuned resonators in its unit. Couplings that print as 0.0000 are not drawn.
+ * bandwidth, at a port the external Q of that coupling alone, and the offsets of detuned resonators in its unit. Couplings that print as 0.0000 are not drawn.
  * Cost: some 10 ms up to order 20, up to a second at order 100.
  *
  * @throws FilterFailure E_BAND, E_TYPE, E_MATRIX_SHAPE, E_NOT_FINITE, E_ENTRY_RANGE, E_NOT_SYMMETRIC
@@ -24,7 +24,7 @@ export function routingLayout(matrix: CouplingMatrix, band: Band | undefined, fo
  * @example
  * const { matrix } = folded(transversal(generalizedChebyshev({ order: 4, returnLossDb: 20, transmissionZeros: [2, -2] })));
  * const picture = routingPicture(matrix, { centerHz: 1e9, bandwidthHz: 20e6 });
- * picture.finding; // 'Folded in two rows: one cross coupling, 1–4, of −0.1705'
+ * picture.finding.startsWith('Folded in two lines: one cross coupling'); // true
  * picture.wide.width; // 560
  */
 export function routingPicture(matrix: CouplingMatrix, band?: Band): Picture {

@@ -2,13 +2,16 @@ import type { Band } from '../../../../forms/index.js';
 import { nodeName } from '../../../words/nodes.js';
 import { frequencyText, unitOf } from '../../../words/numbers.js';
 import type { Link, Network } from './couplings.js';
-import { couplingText, MOST_LABELLED, offsetText, type Wording } from './label-text.js';
+import { couplingText, isDirect, MOST_LABELLED, offsetText, type Wording } from './label-text.js';
 import type { Layout } from './layout.js';
-import { patternOf } from './pattern.js';
+import { isArrow, patternOf } from './pattern.js';
 
-/** Two nodes that are coupled. */
+/** Two nodes that are coupled; no line breaks on either side of the dash. */
 export const pairName = ({ from, to }: Pick<Link, 'from' | 'to'>, order: number): string =>
-  `${nodeName(from, order)}–${nodeName(to, order)}`;
+  `${nodeName(from, order)}${JOINED}–${JOINED}${nodeName(to, order)}`;
+
+/** Word joiner: a line may end after a dash, but not in the name of a pair. */
+const JOINED = '\u2060';
 
 function crossWords({ order, links }: Network): string {
   const cross = links.filter(({ isMain }) => !isMain);
@@ -23,8 +26,8 @@ function crossWords({ order, links }: Network): string {
 
 function shapeWords(network: Network): string {
   const pattern = patternOf(network);
-  if (pattern.kind === 'fan') return 'A fan of resonators between source and load';
-  if (pattern.kind === 'folded') return 'Folded in two rows';
+  if (pattern.kind === 'fan') return 'Resonators in parallel between source and load';
+  if (pattern.kind === 'folded') return 'Folded in two lines';
   if (pattern.kind === 'cascade') {
     const triangles = pattern.sections.filter(({ first, last }) => last - first === 2).length;
     const squares = pattern.sections.length - triangles;
@@ -35,7 +38,8 @@ function shapeWords(network: Network): string {
     ];
     return `A chain with ${parts.join(' and ')}`;
   }
-  return 'A chain';
+  const isWhole = network.links.filter(({ isMain }) => isMain).length === network.order + 1;
+  return isWhole && isArrow(network) ? 'A chain in arrow form' : 'A chain';
 }
 
 /** What is seen. */
@@ -48,9 +52,42 @@ export function findingOf(network: Network): string {
   return `${shapeWords(network)}: ${rest}`;
 }
 
-function tuningWords(wording: Wording, band: Band | undefined): string {
+/** Which kinds of label a drawing holds. */
+interface Drawn {
+  readonly bandwidth: boolean;
+  readonly quality: boolean;
+  readonly offset: boolean;
+  /** Second lines that found no room, or that this drawing does without. */
+  readonly isBare: boolean;
+}
+
+function drawnOf({ labels }: Layout, { links, order }: Network): Drawn {
+  const seconds = labels.flatMap(({ lines }) => (lines[1] === undefined ? [] : [lines[1].text]));
+  const couplings = labels.filter(({ lines }) => lines[0]?.classes.includes('bold'));
+  const quality = seconds.filter((text) => text.startsWith('Qe'));
+  return {
+    bandwidth: seconds.length > quality.length,
+    quality: quality.length > 0,
+    offset: labels.length > couplings.length,
+    // A coupling from source to load has no second line to lose.
+    isBare: seconds.length + links.filter((link) => isDirect(link, order)).length < couplings.length,
+  };
+}
+
+/** What stands below M in the labels; nothing where no drawing has a second line. */
+function secondWords({ band }: Wording, drawings: readonly Drawn[]): string[] {
+  const [bandwidth, quality] = [drawings.some((each) => each.bandwidth), drawings.some((each) => each.quality)];
+  if (band === undefined || (!bandwidth && !quality)) return [];
+  const place = drawings.some(({ isBare }) => isBare) ? 'second line where there is room' : 'second line';
+  const size = `coupling bandwidth in ${unitOf(band).name}`;
+  const external = 'external Q (Qe) of that coupling alone';
+  if (!quality) return [`${place}: ${size}`];
+  return [bandwidth ? `${place}: ${size}, at a port ${external}` : `${place}: ${external}`];
+}
+
+function tuningWords(wording: Wording, band: Band | undefined, drawings: readonly Drawn[]): string {
   const detuned = wording.network.detuning.filter((_, n) => offsetText(n + 1, wording) !== undefined).length;
-  if (detuned > 0 && wording.network.order > MOST_LABELLED)
+  if (detuned > 0 && !drawings.some(({ offset }) => offset))
     return detuned === 1 ? 'one resonator is detuned' : `${detuned} resonators are detuned`;
   if (detuned > 0)
     return band === undefined
@@ -64,7 +101,12 @@ function tuningWords(wording: Wording, band: Band | undefined): string {
 function omissions({ network }: Wording, layouts: readonly Layout[]): string[] {
   const dropped = Math.max(...layouts.map((layout) => layout.dropped));
   const words: string[] = [];
-  if (network.order > MOST_LABELLED) words.push('only cross couplings carry a number');
+  if (network.order > MOST_LABELLED)
+    words.push(
+      network.links.some(({ isMain }) => !isMain)
+        ? 'only cross couplings carry a number'
+        : 'the numbers stand in the table',
+    );
   if (dropped > 0) words.push('numbers without room stand in the table only');
   if (network.hidden > 0)
     words.push(
@@ -73,17 +115,23 @@ function omissions({ network }: Wording, layouts: readonly Layout[]): string[] {
   return words;
 }
 
-/** How to read the marks, in two sentences. */
-export function captionOf(wording: Wording, layouts: readonly Layout[]): string {
-  const { band, network } = wording;
-  const parts = [
-    'Solid: main path',
-    ...(network.links.some(({ isMain }) => !isMain) ? ['dashed: cross coupling'] : []),
+/** What the lines mean: those that are drawn. */
+function lineWords({ links, isFan, order }: Network): string[] {
+  const dashed = links.filter(({ isMain }) => !isMain);
+  const onlyDirect = dashed.every((link) => isDirect(link, order));
+  return [
+    ...(links.length > dashed.length ? [isFan ? 'solid: coupling of a port' : 'solid: main path'] : []),
+    ...(dashed.length > 0 ? [onlyDirect ? 'dashed: source to load' : 'dashed: cross coupling'] : []),
+    ...(links.some(({ value }) => value < 0) ? ['lozenge with bar: negative'] : []),
   ];
-  if (network.links.some(({ value }) => value < 0)) parts.push('lozenge with bar: negative');
-  if (band !== undefined && network.order <= MOST_LABELLED)
-    parts.push(`second line: coupling bandwidth in ${unitOf(band).name}, or external Q`);
-  const tuning = tuningWords(wording, band);
-  const second = [tuning, ...omissions(wording, layouts)].join('; ');
-  return `${parts.join(', ')}. ${second.charAt(0).toUpperCase()}${second.slice(1)}.`;
+}
+
+const sentence = (text: string): string => `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
+
+/** How to read the marks, in two sentences; true of every drawing of the picture. */
+export function captionOf(wording: Wording, layouts: readonly Layout[]): string {
+  const drawings = layouts.map((layout) => drawnOf(layout, wording.network));
+  const first = [...lineWords(wording.network), ...secondWords(wording, drawings)];
+  const second = [tuningWords(wording, wording.band, drawings), ...omissions(wording, layouts)];
+  return `${sentence(first.length > 0 ? first.join(', ') : 'no coupling')} ${sentence(second.join('; '))}`;
 }
