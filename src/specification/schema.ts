@@ -1,29 +1,35 @@
-import * as z from 'zod';
+import * as z from 'zod/mini';
 import type { SpecificationInput } from './specification.js';
 import { VOCABULARY } from './vocabulary.js';
 
 /** Attaches the meaning of a key, and what JSON Schema can say of its range, to a schema. */
-function described<Schema extends z.ZodType>(schema: Schema, key: string, more: Record<string, unknown> = {}): Schema {
-  return schema.meta({ description: VOCABULARY[key]?.meaning ?? key, ...more });
+function described<Schema extends z.ZodMiniType>(
+  schema: Schema,
+  key: string,
+  more: Record<string, unknown> = {},
+): Schema {
+  return schema.check(z.meta({ description: VOCABULARY[key]?.meaning ?? key, ...more }));
 }
 
-function frequency(key: string): z.ZodUnion<readonly [z.ZodNumber, z.ZodString]> {
+function frequency(key: string): z.ZodMiniUnion<readonly [z.ZodMiniNumber, z.ZodMiniString]> {
   return described(z.union([z.number(), z.string()]), key);
 }
 
-function level(key: string): z.ZodUnion<readonly [z.ZodNumber, z.ZodTuple<[z.ZodNumber, z.ZodNumber], null>]> {
+function level(
+  key: string,
+): z.ZodMiniUnion<readonly [z.ZodMiniNumber, z.ZodMiniTuple<[z.ZodMiniNumber, z.ZodMiniNumber], null>]> {
   return described(z.union([z.number(), z.tuple([z.number(), z.number()])]), key);
 }
 
 const nonNegative = { minimum: 0 };
-const quality = z.number().meta({ exclusiveMinimum: 0 });
+const quality = z.number().check(z.meta({ exclusiveMinimum: 0 }));
 
 const passband = described(
   z.strictObject({
-    lowerHz: frequency('lowerHz').optional(),
-    upperHz: frequency('upperHz').optional(),
-    centerHz: frequency('centerHz').optional(),
-    bandwidthHz: frequency('bandwidthHz').optional(),
+    lowerHz: z.optional(frequency('lowerHz')),
+    upperHz: z.optional(frequency('upperHz')),
+    centerHz: z.optional(frequency('centerHz')),
+    bandwidthHz: z.optional(frequency('bandwidthHz')),
   }),
   'passband',
   { oneOf: [{ required: ['lowerHz', 'upperHz'] }, { required: ['centerHz', 'bandwidthHz'] }] },
@@ -36,14 +42,14 @@ const zero = z.union([
 ]);
 
 const maskLine = z.strictObject({
-  fromHz: frequency('fromHz').optional(),
-  toHz: frequency('toHz').optional(),
-  relativeTo: described(z.literal('center'), 'relativeTo').optional(),
-  rejectionDb: level('rejectionDb').optional(),
-  returnLossDb: level('returnLossDb').optional(),
-  insertionLossDb: level('insertionLossDb').optional(),
-  insertionLossVariationDb: described(z.number(), 'insertionLossVariationDb', nonNegative).optional(),
-  groupDelayVariationSeconds: described(z.number(), 'groupDelayVariationSeconds', nonNegative).optional(),
+  fromHz: z.optional(frequency('fromHz')),
+  toHz: z.optional(frequency('toHz')),
+  relativeTo: z.optional(described(z.literal('center'), 'relativeTo')),
+  rejectionDb: z.optional(level('rejectionDb')),
+  returnLossDb: z.optional(level('returnLossDb')),
+  insertionLossDb: z.optional(level('insertionLossDb')),
+  insertionLossVariationDb: z.optional(described(z.number(), 'insertionLossVariationDb', nonNegative)),
+  groupDelayVariationSeconds: z.optional(described(z.number(), 'groupDelayVariationSeconds', nonNegative)),
 });
 
 const sweep = z.strictObject({
@@ -56,26 +62,28 @@ const sweep = z.strictObject({
  * Structure of a design file: types, shapes and keys. Ranges stand here for the JSON Schema only; the rules that need
  * more than one value, or wording of their own, are checked after it.
  */
-export const specificationSchema: z.ZodType<SpecificationInput> = z.strictObject({
-  $schema: described(z.string(), '$schema').optional(),
-  name: described(z.string(), 'name', { maxLength: 120 }).optional(),
-  notes: described(z.string(), 'notes', { maxLength: 1000 }).optional(),
-  revision: described(z.string(), 'revision', { maxLength: 20 }).optional(),
-  date: described(z.string(), 'date', { format: 'date' }).optional(),
+export const specificationSchema: z.ZodMiniType<SpecificationInput> = z.strictObject({
+  $schema: z.optional(described(z.string(), '$schema')),
+  name: z.optional(described(z.string(), 'name', { maxLength: 120 })),
+  notes: z.optional(described(z.string(), 'notes', { maxLength: 1000 })),
+  revision: z.optional(described(z.string(), 'revision', { maxLength: 20 })),
+  date: z.optional(described(z.string(), 'date', { format: 'date' })),
   passband,
-  family: described(z.enum(['generalizedChebyshev', 'chebyshev', 'butterworth']), 'family', {
-    default: 'generalizedChebyshev',
-  }).optional(),
+  family: z.optional(
+    described(z.enum(['generalizedChebyshev', 'chebyshev', 'butterworth']), 'family', {
+      default: 'generalizedChebyshev',
+    }),
+  ),
   order: described(z.number(), 'order', { type: 'integer', minimum: 1, maximum: 100 }),
-  returnLossDb: described(z.number(), 'returnLossDb', { minimum: 0.01, maximum: 100 }).optional(),
-  transmissionZeros: described(z.array(zero), 'transmissionZeros', { default: [], maxItems: 100 }).optional(),
-  topology: described(z.enum(['folded', 'arrow', 'inline', 'transversal']), 'topology', {
-    default: 'folded',
-  }).optional(),
-  portCouplings: described(z.enum(['any', 'noDirect', 'single']), 'portCouplings', { default: 'any' }).optional(),
-  unloadedQ: described(z.union([quality, z.array(quality)]), 'unloadedQ').optional(),
-  mask: described(z.array(maskLine), 'mask', { default: [] }).optional(),
-  sweep: described(sweep, 'sweep').optional(),
+  returnLossDb: z.optional(described(z.number(), 'returnLossDb', { minimum: 0.01, maximum: 100 })),
+  transmissionZeros: z.optional(described(z.array(zero), 'transmissionZeros', { default: [], maxItems: 100 })),
+  topology: z.optional(
+    described(z.enum(['folded', 'arrow', 'inline', 'transversal']), 'topology', { default: 'folded' }),
+  ),
+  portCouplings: z.optional(described(z.enum(['any', 'noDirect', 'single']), 'portCouplings', { default: 'any' })),
+  unloadedQ: z.optional(described(z.union([quality, z.array(quality)]), 'unloadedQ')),
+  mask: z.optional(described(z.array(maskLine), 'mask', { default: [] })),
+  sweep: z.optional(described(sweep, 'sweep')),
 });
 
 /**

@@ -1,4 +1,4 @@
-import type * as z from 'zod';
+import type * as z from 'zod/mini';
 import { echo } from './echo.js';
 import type { Fault, Path } from './faults.js';
 import { isUnder, kindFault } from './faults.js';

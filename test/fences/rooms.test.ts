@@ -24,7 +24,7 @@ const ORDER = [
 /** Which packages a room may import. */
 const PACKAGES: Record<string, readonly string[]> = {
   numerics: ['ml-matrix', 'complex.js'],
-  specification: ['zod'],
+  specification: ['zod/mini'],
   report: ['d3-scale', 'd3-shape'],
   'command-line': ['picocolors'],
 };
