@@ -110,6 +110,6 @@ export function readBand(passband: PassbandInput, faults: Fault[]): BandRead | u
   if (band === undefined) return undefined;
   const fraction = band.bandwidthHz / band.centerHz;
   const wide = `passband: fractional bandwidth ${fraction.toPrecision(3)}, and couplings are a narrow-band model`;
-  const low = `passband: center ${hertzText(band.centerHz)}, low for a microwave filter; a bare number is hertz, text may carry a unit`;
+  const low = `passband: center ${hertzText(band.centerHz)} Hz, low for a microwave filter; a bare number is hertz, text may carry a unit`;
   return { band, remarks: [...(fraction > WIDE_FRACTION ? [wide] : []), ...(band.centerHz < LOW_HZ ? [low] : [])] };
 }

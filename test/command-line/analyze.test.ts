@@ -74,7 +74,7 @@ describe('irisloom analyze', () => {
     });
     expect(status).toBe(0);
     expect(stdout).toMatch(/^mine\n/);
-    expect(stdout).toContain('Short of the only requirement.');
+    expect(stdout).toContain('Misses the only requirement.');
     expect(stdout).toMatch(/source +1 +42\.68/);
     expect(stdout).toContain('unloaded Q 2000');
   });

@@ -52,6 +52,7 @@ function commentsOf({ version, specification }: DesignReport): readonly string[]
     ...(name === undefined ? [] : [name]),
     `order ${order}, passband ${frequencyText(lowerHz, unit)} to ${frequencyText(upperHz, unit)} ${unit.name}`,
     quality === undefined ? 'lossless' : `unloaded Q ${quality}`,
+    'model only, no safety clearance',
     ...CONVENTIONS,
   ];
 }

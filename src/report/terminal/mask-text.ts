@@ -1,8 +1,9 @@
 import type { MaskRow } from '../../forms/index.js';
+import { LUMPED } from '../words/conventions.js';
 import type { FrequencyUnit } from '../words/numbers.js';
 import {
+  askedText,
   clearanceText,
-  limitText,
   predictedText,
   RELATIVE,
   type Requirement,
@@ -23,9 +24,11 @@ export function verdictLines(rows: readonly MaskRow[], unit: FrequencyUnit, pain
   return wrapped(`${verdict.answer} ${verdict.nearest}`).map(mark);
 }
 
-function rowCells({ name, unit, span, limit, predicted, margin, isMet, at }: Requirement): readonly string[] {
-  const room = isMet ? 'clear by' : 'short by';
-  return [`${name}, ${unit}`, span, limitText(limit), predictedText(predicted, unit), room, clearanceText(margin), at];
+function rowCells(requirement: Requirement): readonly string[] {
+  const { name, unit, span, predicted, margin, isMet, lack, at } = requirement;
+  const room = `${isMet ? 'clear' : lack} by`;
+  const [limit, found] = [askedText(requirement), predictedText(predicted, unit)];
+  return [`${name}, ${unit}`, span, limit, found, room, clearanceText(margin), at];
 }
 
 /** Each requirement with its limit, what is predicted, the room left or lacking, and the worst point. */
@@ -35,7 +38,7 @@ export function maskTable(rows: readonly MaskRow[], unit: FrequencyUnit, paint: 
   const worst = tightest(requirements);
   const bar = [...requirements].sort((a, b) => a.share - b.share)[ROWS - 1]?.share ?? Number.POSITIVE_INFINITY;
   const shown = requirements.filter(({ share }) => share <= bar).slice(0, ROWS);
-  const head = ['requirement', `over ${unit.name}`, 'limit', 'predicted', '', '', `at ${unit.name}`];
+  const head = ['requirement', `over ${unit.name}`, 'limit', 'predicted', '', 'room', `at ${unit.name}`];
   const [headLine = '', ...lines] = table([head, ...shown.map(rowCells)], 'llrrrrr');
   const marked = lines.map((line, n) => {
     if (shown[n]?.isMet === false) return paint.alarm(line);
@@ -45,5 +48,6 @@ export function maskTable(rows: readonly MaskRow[], unit: FrequencyUnit, paint: 
   const more = hidden === 0 ? [] : [`(${counted(hidden)} with more room not shown; all are in result.json)`];
   const isRelative = shown.some(({ name }) => name.endsWith(RELATIVE));
   const note = isRelative ? [paint.dim(`${RELATIVE} relative to the loss at the center`)] : [];
-  return [paint.dim(headLine), ...marked, ...more, ...note];
+  const far = requirements.some(({ isOpen }) => isOpen) ? [paint.dim(LUMPED)] : [];
+  return [paint.dim(headLine), ...marked, ...more, ...note, ...far];
 }

@@ -11,6 +11,7 @@ import { titleLines } from './title-text.js';
 
 /** Beyond this order the list of couplings stands for the matrix. */
 const LARGEST_MATRIX = 10;
+
 /**
  * A design as a person reads it in ten seconds: what it is, whether it meets its mask and where it is tightest, then the
  * mask line by line, the hand-over numbers, the matrix, what was certified, and the conventions. 80 columns at most, but

@@ -1,17 +1,18 @@
 import type { Specification } from '../../specification/index.js';
 import type { FrequencyUnit } from '../words/numbers.js';
-import { bandText, levelText, qualityText, UNNAMED, zerosText } from '../words/title.js';
+import { bandText, familyText, levelText, qualityText, UNNAMED, zerosText } from '../words/title.js';
 import { wrapped } from './layout.js';
 import type { Paint } from './paint.js';
 
 /** What the design is, in four lines. */
 export function titleLines(specification: Specification, unit: FrequencyUnit, paint: Paint): readonly string[] {
-  const { name, band, order, returnLossDb, topology, unloadedQ } = specification;
+  const { name, band, order, family, returnLossDb, topology, unloadedQ } = specification;
   const zeros = zerosText(specification, unit);
+  const edges = returnLossDb === undefined ? `${familyText(family)}, ` : '';
   return [
     ...wrapped(name ?? UNNAMED).map(paint.strong),
     ...wrapped(bandText(band, unit)),
-    ...wrapped(`Order ${order}, ${topology}, ${levelText(returnLossDb)}, ${qualityText(unloadedQ)}`),
+    ...wrapped(`Order ${order}, ${topology}, ${edges}${levelText(returnLossDb)}, ${qualityText(unloadedQ)}`),
     ...wrapped(zeros),
   ];
 }

@@ -1,5 +1,5 @@
 import { type Band, type Complex, edgesOfBand, hzFromOmega } from '../../forms/index.js';
-import type { Specification } from '../../specification/index.js';
+import type { Specification, SpecificationFamily } from '../../specification/index.js';
 import { type FrequencyUnit, frequencyText, trimmed } from './numbers.js';
 
 /** What a design without a name is called. */
@@ -17,29 +17,48 @@ export function bandText(band: Band, unit: FrequencyUnit): string {
   return `${lower} to ${upper} ${unit.name}, center ${center}, width ${width} ${unit.name} (${percent} %)`;
 }
 
-function zeroText({ re, im }: Complex, band: Band, unit: FrequencyUnit): string {
-  if (re === 0) return frequencyText(hzFromOmega(band, im), unit);
-  return `s = ${trimmed(re, 4)}${im < 0 ? '-' : '+'}j${trimmed(Math.abs(im), 4)}`;
+function pointText({ re, im }: Complex): string {
+  return `${trimmed(re, 4)}${im < 0 ? '-' : '+'}j${trimmed(Math.abs(im), 4)}`;
 }
 
-/** The finite transmission zeros in words, one by one where they are few. */
+/** The finite transmission zeros in words, one by one where they are few: frequencies with their unit, then points of the s-plane. */
 export function zerosText({ transmissionZeros, band }: Specification, unit: FrequencyUnit): string {
   const count = transmissionZeros.length;
   if (count === 0) return 'No finite transmission zeros';
   if (count > ZEROS_LISTED) return `${count} finite transmission zeros`;
   const ordered = [...transmissionZeros].sort((a, b) => a.im - b.im || a.re - b.re);
-  const anyHertz = ordered.some(({ re }) => re === 0) ? ` ${unit.name}` : '';
-  return `Transmission ${count === 1 ? 'zero' : 'zeros'} at ${ordered.map((zero) => zeroText(zero, band, unit)).join(', ')}${anyHertz}`;
+  const inHertz = ordered
+    .filter(({ re }) => re === 0)
+    .map(({ im }) => frequencyText(hzFromOmega(band, im), unit))
+    .join(', ');
+  const points = ordered
+    .filter(({ re }) => re !== 0)
+    .map(pointText)
+    .join(', ');
+  const parts = [inHertz === '' ? '' : `${inHertz} ${unit.name}`, points === '' ? '' : `normalized s = ${points}`];
+  return `Transmission ${count === 1 ? 'zero' : 'zeros'} at ${parts.filter((part) => part !== '').join('; ')}`;
 }
 
 /** Unloaded Q in words. */
 export function qualityText(unloadedQ: Specification['unloadedQ']): string {
   if (unloadedQ === undefined) return 'lossless';
   if (typeof unloadedQ === 'number') return `unloaded Q ${trimmed(unloadedQ, 3)}`;
-  return `unloaded Q ${trimmed(Math.min(...unloadedQ), 3)} to ${trimmed(Math.max(...unloadedQ), 3)}`;
+  const [least, most] = [trimmed(Math.min(...unloadedQ), 3), trimmed(Math.max(...unloadedQ), 3)];
+  return least === most ? `unloaded Q ${least}` : `unloaded Q ${least} to ${most}`;
 }
 
 /** The level that the band edges stand for. */
 export function levelText(returnLossDb: number | undefined): string {
   return returnLossDb === undefined ? 'half-power edges' : `return loss ${trimmed(returnLossDb, 4)} dB`;
+}
+
+const FAMILIES: Readonly<Record<SpecificationFamily, string>> = {
+  generalizedChebyshev: 'generalized Chebyshev',
+  chebyshev: 'Chebyshev',
+  butterworth: 'Butterworth (maximally flat)',
+};
+
+/** The family of the response in words. */
+export function familyText(family: SpecificationFamily): string {
+  return FAMILIES[family];
 }

@@ -27,16 +27,23 @@ export function counted(count: number): string {
   return count === 1 ? '1 requirement' : `${count} requirements`;
 }
 
+/** The room as a share of the limit; a limit of 0 has none. */
+export function shareText({ share, limit }: Requirement): string {
+  const percent = Math.round(Math.abs(100 * share));
+  if (percent === 0 || limit === 0) return '';
+  return `${percent > 1000 ? 'over 1000' : percent} % of the limit`;
+}
+
 function nearestText(worst: Requirement, unit: FrequencyUnit, decimals: number): string {
-  const percent = Math.round(Math.abs(100 * worst.share));
-  const share = percent > 100 || percent === 0 ? '' : ` (${percent} % of the limit)`;
-  const room = `${worst.isMet ? 'clear' : 'short'} by ${clearanceText(worst.margin, decimals)} ${worst.unit}${share}`;
+  const percent = shareText(worst);
+  const share = percent === '' ? '' : ` (${percent})`;
+  const room = `${worst.isMet ? 'clear' : worst.lack} by ${clearanceText(worst.margin, decimals)} ${worst.unit}${share}`;
   const relative = worst.name.endsWith(RELATIVE) ? ' relative to the center' : '';
   const place = `${worst.name.replace(RELATIVE, '')}${relative} ${placeText(worst, unit)}, ${room}`;
   const at =
     worst.at === 'far above' ? 'far above the band' : `at ${trimmed(Number(worst.at), unit.digits)} ${unit.name}`;
   const where = at.split(' ')[1] === worst.span ? '' : ` ${at}`;
-  return `${place}${where}`;
+  return `${place}${where}${worst.isOpen ? ', in the lumped model' : ''}`;
 }
 
 /** How many requirements are met, and which has the least room, to so many decimals; undefined without a mask. */
@@ -55,7 +62,7 @@ export function verdictOf(
   const label = missed === 0 ? 'Least room for its limit' : 'Farthest off for its limit';
   return {
     isMet: missed === 0,
-    answer: missed === 0 ? `Meets ${all}.` : `Short of ${some}.`,
+    answer: missed === 0 ? `Meets ${all}.` : `Misses ${some}.`,
     nearest: `${label}: ${nearestText(worst, unit, decimals(worst))}.`,
   };
 }

@@ -99,7 +99,7 @@ describe.each(DESIGNS)('tables of the report of %s', (_, make) => {
       for (const rows of pieces) expect(rows[n + 1]![0]).toBe(name);
       expectRow(
         whole[n + 1]!,
-        design.matrix.values[n]!.map((value) => (value === 0 ? '0' : value)),
+        design.matrix.values[n]!.map((value) => (value === 0 ? '·' : value)),
         `row ${name}`,
       );
     }

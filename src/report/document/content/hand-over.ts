@@ -1,13 +1,11 @@
 import type { DesignReport } from '../../design-report.js';
 import { nodeName } from '../../words/nodes.js';
-import { type FrequencyUnit, figures, fixed, signed, trimmed } from '../../words/numbers.js';
+import { type FrequencyUnit, figures, fixed, signed, trimmed, unitOf } from '../../words/numbers.js';
 import { type Column, numberColumn, type Row, type Table, textColumn } from './content.js';
 
 const K_DECIMALS = 6;
 const M_DECIMALS = 4;
 const QUALITY_FIGURES = 4;
-const NS_DECIMALS = 3;
-const NANO = 1e9;
 
 /** How the signs and numbers of the tables are to be taken. */
 export const SIGN_SENTENCE =
@@ -81,16 +79,18 @@ function portRow(
   externalQ: number,
 ): readonly string[] {
   const { matrix, specification } = report;
+  const { delay } = unitOf(specification.band);
   const m = matrix.values[port === 'source' ? 0 : matrix.order + 1]?.[resonator] ?? 0;
   const delaySeconds = (2 * externalQ) / (Math.PI * specification.band.centerHz);
   const pair = port === 'source' ? `S - ${resonator}` : `${resonator} - L`;
-  const values = [figures(externalQ, QUALITY_FIGURES), fixed(delaySeconds * NANO, NS_DECIMALS)];
+  const values = [figures(externalQ, QUALITY_FIGURES), fixed(delaySeconds / delay.seconds, delay.digits)];
   return [`${port}, ${pair}`, signed(m, M_DECIMALS), ...values];
 }
 
 /** Ports: a row for each resonator that a port touches. Several at one port are each taken alone. */
 export function portTable(report: DesignReport): Table {
-  const { handOver, matrix } = report;
+  const { handOver, matrix, specification } = report;
+  const { delay } = unitOf(specification.band);
   const single = (['source', 'load'] as const).flatMap((port) => {
     const quality = handOver.externalQ[port];
     const line = matrix.values[port === 'source' ? 0 : matrix.order + 1] ?? [];
@@ -106,12 +106,17 @@ export function portTable(report: DesignReport): Table {
       tones: cells[1]?.startsWith('-') === true ? ['negative'] : [],
     }),
   );
-  const note = `${nodeName(0, matrix.order)} is the source, ${nodeName(matrix.order + 1, matrix.order)} the load. Peak delay is that of the reflected signal with all other resonators shorted.`;
+  const note = `${nodeName(0, matrix.order)} is the source, ${nodeName(matrix.order + 1, matrix.order)} the load. Reflected delay is that of the reflected signal at the center with all other resonators shorted.`;
   const alone = ' Where a port touches several resonators, each value is that of one coupling alone.';
   return {
     id: 'ports',
     caption: 'Ports',
-    columns: [textColumn('Port'), numberColumn('M'), numberColumn('External Q'), numberColumn('Peak delay', 'ns')],
+    columns: [
+      textColumn('Port'),
+      numberColumn('M'),
+      numberColumn('External Q'),
+      numberColumn('Reflected delay', delay.name),
+    ],
     rows,
     note: several.length === 0 ? note : note + alone,
   };

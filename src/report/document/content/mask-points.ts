@@ -1,25 +1,19 @@
 import type { MaskRow } from '../../../forms/index.js';
+import { LUMPED } from '../../words/conventions.js';
 import { type FrequencyUnit, fixed, frequencyText } from '../../words/numbers.js';
-import { clearanceText, limitText, predictedText, RELATIVE, requirementOf } from '../../words/requirement.js';
+import {
+  askedText,
+  clearanceText,
+  limitText,
+  predictedText,
+  RELATIVE,
+  requirementOf,
+} from '../../words/requirement.js';
 import { tightest } from '../../words/verdict.js';
 import { type Column, numberColumn, type Row, type Table, textColumn } from './content.js';
-import { RELATIVE_NOTE, requirementName } from './requirements.js';
+import { numberedName, RELATIVE_NOTE } from './requirements.js';
 
 const DB_DECIMALS = 2;
-const NS_DECIMALS = 3;
-
-/** Both levels of a line whose limit slopes; undefined for a level line. */
-function slopeOf({ line }: MaskRow): readonly [number, number] | undefined {
-  const level =
-    'rejectionDb' in line
-      ? line.rejectionDb
-      : 'returnLossDb' in line
-        ? line.returnLossDb
-        : 'insertionLossDb' in line
-          ? line.insertionLossDb
-          : 0;
-  return typeof level === 'number' ? undefined : level;
-}
 
 function columnsOf(unit: FrequencyUnit, anySlope: boolean): readonly Column[] {
   return [
@@ -29,7 +23,7 @@ function columnsOf(unit: FrequencyUnit, anySlope: boolean): readonly Column[] {
     ...(anySlope ? [numberColumn('Sloping limit', 'at both ends')] : []),
     numberColumn('Limit', 'at the worst point'),
     numberColumn('Predicted'),
-    numberColumn('Room', 'negative: short'),
+    numberColumn('Room', 'negative: missed'),
     numberColumn('Room', '% of limit'),
     numberColumn('Worst at', unit.name),
   ];
@@ -46,19 +40,18 @@ export function maskPointTable(rows: readonly MaskRow[], unit: FrequencyUnit): T
   const requirements = rows.map((row) => requirementOf(row, unit));
   const worst = tightest(requirements);
   const places = endDecimals(rows, unit);
-  const anySlope = rows.some((row) => slopeOf(row) !== undefined);
+  const anySlope = requirements.some(({ slope }) => slope !== undefined);
   const lines = rows.map((row, n): Row => {
     const requirement = requirementOf(row, unit);
     const { limit, predicted, unit: level, margin, share, at, isMet } = requirement;
-    const decimals = Math.max(requirement.decimals, level === 'ns' ? NS_DECIMALS : DB_DECIMALS);
-    const slope = slopeOf(row);
+    const decimals = Math.max(requirement.decimals, level === 'dB' ? DB_DECIMALS : unit.delay.digits);
     const end = (hertz: number | undefined): string =>
       hertz === undefined ? 'open' : fixed(hertz / unit.hertz, places);
     const cells = [
-      `${requirementName(requirement)}, ${level}`,
+      numberedName(requirement, n + 1),
       end(row.line.fromHz),
       end(row.line.toHz),
-      ...(anySlope ? [slope === undefined ? '' : slope.map((value) => limitText(value, decimals)).join(' to ')] : []),
+      ...(anySlope ? [requirement.slope === undefined ? '' : askedText(requirement)] : []),
       limitText(limit, decimals),
       predictedText(predicted, level, decimals),
       `${isMet ? '+' : '-'}${clearanceText(margin, decimals)}`,
@@ -68,12 +61,15 @@ export function maskPointTable(rows: readonly MaskRow[], unit: FrequencyUnit): T
     const isWorst = worst !== undefined && requirements.indexOf(worst) === n;
     return { cells, tones: [...(isWorst ? (['tightest'] as const) : []), ...(isMet ? [] : (['short'] as const))] };
   });
-  const isRelative = requirements.some(({ name }) => name.endsWith(RELATIVE));
+  const notes = [
+    ...(requirements.some(({ name }) => name.endsWith(RELATIVE)) ? [`${RELATIVE_NOTE}.`] : []),
+    ...(requirements.some(({ isOpen }) => isOpen) ? [LUMPED] : []),
+  ];
   return {
     id: 'mask-points',
     caption: 'All requirements with their worst points',
     columns: columnsOf(unit, anySlope),
     rows: lines,
-    ...(isRelative ? { note: `${RELATIVE_NOTE}.` } : {}),
+    ...(notes.length === 0 ? {} : { note: notes.join(' ') }),
   };
 }

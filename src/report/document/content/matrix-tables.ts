@@ -7,9 +7,9 @@ const M_DECIMALS = 4;
 /** Columns that fit a printed page. */
 const COLUMNS = 14;
 
-/** An entry; one that is exactly 0 couples nothing. */
+/** An entry; a dot where there is no coupling at all. */
 function entryText(value: number): string {
-  return value === 0 ? '0' : signed(value, M_DECIMALS);
+  return value === 0 ? '·' : signed(value, M_DECIMALS);
 }
 
 /** The whole matrix: one table where its columns fit a page, else several of nearly equal width. */
@@ -24,12 +24,14 @@ export function matrixTables({ order, values }: CouplingMatrix): readonly Table[
         cells: [names[node] ?? '', ...row.slice(from, to).map(entryText)],
       }),
     );
+    const note = 'A dot stands for an entry that is exactly 0.';
     const part = pieces === 1 ? '' : `, columns ${names[from]} to ${names[to - 1]}`;
     return {
       id: piece === 0 ? 'matrix' : `matrix-${piece + 1}`,
       caption: `Coupling matrix M, all entries${part}`,
       columns: [textColumn('Node'), ...names.slice(from, to).map((name) => numberColumn(name))],
       rows,
+      ...(piece === pieces - 1 ? { note } : {}),
     };
   });
 }

@@ -1,27 +1,43 @@
 import type { MaskRow } from '../../../forms/index.js';
+import { LUMPED } from '../../words/conventions.js';
 import type { FrequencyUnit } from '../../words/numbers.js';
 import {
+  askedText,
   clearanceText,
-  limitText,
   predictedText,
   RELATIVE,
   type Requirement,
   requirementOf,
 } from '../../words/requirement.js';
-import { counted, tightest, type Verdict, verdictOf } from '../../words/verdict.js';
+import { tightest, type Verdict, verdictOf } from '../../words/verdict.js';
 import { numberColumn, type Row, type Table, type Tone, textColumn } from './content.js';
 
-/** Requirements that fit the first page. */
-const LISTED = 10;
+/** Requirements that fit the first printed page, and those that a screen lists. */
+const ON_PAPER = 10;
+const ON_SCREEN = 20;
 
 /** Explains the mark after the name of a requirement. */
 export const RELATIVE_NOTE: string = `${RELATIVE} relative to the loss at the center`;
 
-/** The requirements of the first page: those listed, the tightest of all, and what to say of the others. */
+/** A requirement with its number in the mask, from 1. */
+export interface ListedRequirement {
+  readonly requirement: Requirement;
+  readonly number: number;
+  /** Whether paper leaves it to the table of all requirements. */
+  readonly isExtra: boolean;
+}
+
+/** A note under the requirements; some hold on a screen or on paper only. */
+export interface Note {
+  readonly text: string;
+  readonly medium?: 'screen' | 'paper';
+}
+
+/** The requirements of the first page: those listed, the tightest of all, and what to say below. */
 export interface Listed {
-  readonly requirements: readonly Requirement[];
+  readonly requirements: readonly ListedRequirement[];
   readonly worst: Requirement | undefined;
-  readonly more: string | undefined;
+  readonly notes: readonly Note[];
 }
 
 /** Verdict in the decimals of a page. */
@@ -30,26 +46,50 @@ export function pageVerdict(rows: readonly MaskRow[], unit: FrequencyUnit): Verd
 }
 
 function moreText(hidden: readonly Requirement[]): string {
-  const short = hidden.filter(({ isMet }) => !isMet).length;
-  const count = hidden.length === 1 ? '1 more requirement is' : `${hidden.length} more requirements are`;
+  const missed = hidden.filter(({ isMet }) => !isMet).length;
+  const isOne = hidden.length === 1;
+  const count = isOne ? '1 more requirement' : `${hidden.length} more requirements`;
   const where = 'all stand in Band in detail.';
-  if (short === 0) return `${count} clear by a larger share of the limit; ${where}`;
-  if (short === hidden.length) return `${count} short of the limit by a smaller share; ${where}`;
-  return `${counted(hidden.length)} more are not listed here, ${short} of them short of the limit; ${where}`;
+  if (missed === 0) return `${count} ${isOne ? 'is' : 'are'} clear by a larger share of the limit; ${where}`;
+  if (missed === hidden.length)
+    return `${count} ${isOne ? 'misses its' : 'miss their'} limit by a smaller share; ${where}`;
+  return `${count} are not listed here, ${missed} of them missed; ${where}`;
 }
 
-/** All requirements, or the ten with the least room, in the order of the mask. */
+/** What a mark means, where a limit is the model's alone, and how many requirements a medium does not list. */
+function notesOf(
+  all: readonly Requirement[],
+  onScreen: ReadonlySet<Requirement>,
+  onPaper: ReadonlySet<Requirement>,
+): readonly Note[] {
+  const shown = all.filter((each) => onScreen.has(each));
+  const more = (listed: ReadonlySet<Requirement>, medium?: Note['medium']): readonly Note[] => {
+    const hidden = all.filter((each) => !listed.has(each));
+    return hidden.length === 0 ? [] : [{ text: moreText(hidden), ...(medium === undefined ? {} : { medium }) }];
+  };
+  return [
+    ...(shown.some(({ name }) => name.endsWith(RELATIVE)) ? [{ text: `${RELATIVE_NOTE}.` }] : []),
+    ...(shown.some(({ isOpen }) => isOpen) ? [{ text: LUMPED }] : []),
+    ...(onScreen.size === onPaper.size ? more(onPaper) : [...more(onScreen, 'screen'), ...more(onPaper, 'paper')]),
+  ];
+}
+
+/** All requirements, or those with the least room, in the order of the mask. */
 export function listedRequirements(rows: readonly MaskRow[], unit: FrequencyUnit): Listed {
   const all = rows.map((row) => requirementOf(row, unit));
   const worst = tightest(all);
   const byRoom = all
     .map((requirement, n) => ({ requirement, n }))
-    .sort((a, b) => a.requirement.share - b.requirement.share || a.n - b.n);
-  const chosen = new Set(byRoom.slice(0, LISTED).map(({ requirement }) => requirement));
-  if (worst !== undefined && !chosen.has(worst)) chosen.add(worst);
-  const requirements = all.filter((requirement) => chosen.has(requirement));
-  const hidden = all.filter((requirement) => !chosen.has(requirement));
-  return { requirements, worst, more: hidden.length === 0 ? undefined : moreText(hidden) };
+    .sort((a, b) => a.requirement.share - b.requirement.share || a.n - b.n)
+    .map(({ requirement }) => requirement);
+  // The tightest is the first of equals, which rounding may put behind many of them.
+  const chosen = (count: number): ReadonlySet<Requirement> =>
+    new Set([...byRoom.slice(0, count), ...(worst === undefined ? [] : [worst])]);
+  const [onScreen, onPaper] = [chosen(ON_SCREEN), chosen(ON_PAPER)];
+  const requirements = all
+    .map((requirement, n) => ({ requirement, number: n + 1, isExtra: !onPaper.has(requirement) }))
+    .filter(({ requirement }) => onScreen.has(requirement));
+  return { requirements, worst, notes: notesOf(all, onScreen, onPaper) };
 }
 
 /** Name with a capital. */
@@ -57,14 +97,20 @@ export function requirementName({ name }: Requirement): string {
   return name.slice(0, 1).toUpperCase() + name.slice(1);
 }
 
-/** The limit with the side on which it lies. */
-export function boundText({ bound, limit, decimals }: Requirement): string {
-  return `${bound === 'atLeast' ? '>=' : '<='} ${limitText(limit, decimals)}`;
+/** Number in the mask, name and unit, for the first cell of a row. */
+export function numberedName(requirement: Requirement, number: number): string {
+  return `${number} ${requirementName(requirement)}, ${requirement.unit}`;
 }
 
-/** The room left, or lacking with the word. */
-export function roomText({ isMet, margin, decimals }: Requirement): string {
-  return `${isMet ? '' : 'short '}${clearanceText(margin, decimals)}`;
+/** The limit with the side on which it lies. */
+export function boundText(requirement: Requirement): string {
+  const side = requirement.bound === 'atLeast' ? '>=' : '<=';
+  return `${side} ${askedText(requirement, requirement.decimals)}`;
+}
+
+/** The room left, or what is lacking with its word. */
+export function roomText({ isMet, lack, margin, decimals }: Requirement): string {
+  return `${isMet ? '' : `${lack} by `}${clearanceText(margin, decimals)}`;
 }
 
 function tonesOf(requirement: Requirement, worst: Requirement | undefined): readonly Tone[] {
@@ -74,12 +120,12 @@ function tonesOf(requirement: Requirement, worst: Requirement | undefined): read
   ];
 }
 
-/** The requirement table without its strips. */
-export function requirementTable({ requirements, worst, more }: Listed, unit: FrequencyUnit): Table {
-  const rows = requirements.map((requirement): Row => {
+/** The requirement table without its strips, as on a screen. */
+export function requirementTable({ requirements, worst, notes }: Listed, unit: FrequencyUnit): Table {
+  const rows = requirements.map(({ requirement, number }): Row => {
     const { span, predicted, unit: level, decimals } = requirement;
     const cells = [
-      `${requirementName(requirement)}, ${level}`,
+      numberedName(requirement, number),
       span,
       boundText(requirement),
       predictedText(predicted, level, decimals),
@@ -87,8 +133,7 @@ export function requirementTable({ requirements, worst, more }: Listed, unit: Fr
     ];
     return { cells, tones: tonesOf(requirement, worst) };
   });
-  const isRelative = requirements.some(({ name }) => name.endsWith(RELATIVE));
-  const notes = [...(isRelative ? [`${RELATIVE_NOTE}.`] : []), ...(more === undefined ? [] : [more])];
+  const told = notes.filter(({ medium }) => medium !== 'paper').map(({ text }) => text);
   return {
     id: 'requirements',
     caption: 'Requirements, what is predicted, and the room left',
@@ -97,9 +142,9 @@ export function requirementTable({ requirements, worst, more }: Listed, unit: Fr
       { head: 'Over', unit: unit.name, kind: 'span' },
       numberColumn('Limit'),
       numberColumn('Predicted'),
-      numberColumn('Clear by'),
+      numberColumn('Room'),
     ],
     rows,
-    ...(notes.length === 0 ? {} : { note: notes.join(' ') }),
+    ...(told.length === 0 ? {} : { note: told.join(' ') }),
   };
 }

@@ -2,15 +2,9 @@ import type { DesignReport } from '../../design-report.js';
 import type { DesignSource } from '../../files/result-json.js';
 import { unitOf } from '../../words/numbers.js';
 import { type Block, type Sheet, type Stack, tableBlock } from './content.js';
-import {
-  assumptionBlock,
-  certificateTable,
-  conventionBlock,
-  inputTable,
-  powerBlock,
-  remarkBlocks,
-} from './evidence.js';
+import { assumptionBlock, certificateTable, conventionBlock, powerBlock, remarkBlocks } from './evidence.js';
 import { couplingTable, portTable, resonatorTable, SIGN_SENTENCE } from './hand-over.js';
+import { inputTables } from './inputs.js';
 import { maskPointTable } from './mask-points.js';
 import { matrixTables } from './matrix-tables.js';
 import { coefficientTable, rootTable } from './polynomials.js';
@@ -76,7 +70,7 @@ function evidenceSheet(design: DesignReport, source?: DesignSource): Sheet {
       stack('half', conventionBlock(), assumptionBlock(design), powerBlock()),
       stack('half', tableBlock(rootTable(design))),
       stack('half', tableBlock(coefficientTable(design))),
-      stack('wide', tableBlock(inputTable(design, source)), ...remarkBlocks(design)),
+      stack('wide', ...inputTables(design, source).map(tableBlock), ...remarkBlocks(design)),
     ],
   };
 }

@@ -2,8 +2,9 @@ import { edgesOfBand } from '../../../forms/index.js';
 import type { Specification } from '../../../specification/index.js';
 import type { DesignReport } from '../../design-report.js';
 import type { DesignSource } from '../../files/result-json.js';
+import { MODEL_ONLY, wideCautions } from '../../words/conventions.js';
 import { frequencyText, unitOf } from '../../words/numbers.js';
-import { qualityText, UNNAMED } from '../../words/title.js';
+import { familyText, levelText, qualityText, UNNAMED } from '../../words/title.js';
 import type { Cell } from './content.js';
 import { userText } from './user-text.js';
 
@@ -13,7 +14,9 @@ const DIGEST = 12;
 /** What stands above the name. */
 export const KICKER = 'Band-pass filter design sheet';
 
-/** The people who sign. */
+const NOT_STATED = 'not stated';
+
+/** The people who sign, each with the date. */
 export const SIGNATURES: readonly string[] = ['Designed', 'Checked', 'Released'];
 
 /** A labelled value of the title strip. */
@@ -37,36 +40,46 @@ export function windowTitle(specification: Specification): string {
   return `${typeof name === 'string' ? name : name.user}: band-pass filter design`;
 }
 
-/** Band, order, zeros and topology; a hyphen between two numbers is a span. */
-export function titleFacts({ band, order, transmissionZeros, topology }: Specification): readonly string[] {
+/** Where half-power edges lie, for a reader who knows the edges of an equal ripple. */
+const HALF_POWER = ', half-power edges (about 3 dB down, plus loss)';
+
+/** Band and what its edges are, order, zeros, family and topology; a hyphen between two numbers is a span. */
+export function titleFacts(specification: Specification): readonly string[] {
+  const { band, order, family, returnLossDb, transmissionZeros, topology } = specification;
   const unit = unitOf(band);
   const { lowerHz, upperHz } = edgesOfBand(band);
   const zeros = transmissionZeros.length;
+  const edges = returnLossDb === undefined ? HALF_POWER : `, ${levelText(returnLossDb)}`;
   return [
-    `${frequencyText(lowerHz, unit)}-${frequencyText(upperHz, unit)} ${unit.name}`,
+    `${frequencyText(lowerHz, unit)}-${frequencyText(upperHz, unit)} ${unit.name}${edges}`,
     many(order, 'resonator'),
     zeros === 0 ? 'no finite transmission zeros' : many(zeros, 'transmission zero'),
+    familyText(family),
     topology,
   ];
 }
 
-/** Revision, date, digest of the input and version; what is not known has no cell. */
+/** Revision, date, digest of the input and version; a sheet to sign says where the first two are missing. */
 export function titleCells({ specification, version }: DesignReport, source?: DesignSource): readonly TitleCell[] {
   const { revision, date } = specification;
   return [
-    ...(revision === undefined || revision === '' ? [] : [{ head: 'Revision', value: userText(revision) }]),
-    ...(date === undefined ? [] : [{ head: 'Date', value: date }]),
+    { head: 'Revision', value: revision === undefined || revision === '' ? NOT_STATED : userText(revision) },
+    { head: 'Date', value: date ?? NOT_STATED },
     ...(source === undefined ? [] : [{ head: 'Input digest', value: source.sha256.slice(0, DIGEST) }]),
     { head: 'Made with', value: `irisloom ${version}` },
   ];
 }
 
-/** Under what conditions the verdict holds. */
-export function conditionsText({ unloadedQ }: Specification): string {
-  const isOne = typeof unloadedQ === 'number';
+function lossText({ unloadedQ }: Specification): string {
+  const isOne = typeof unloadedQ === 'number' || new Set(unloadedQ).size === 1;
   const loss =
     unloadedQ === undefined
       ? 'Computed without loss, since no unloaded Q was given'
-      : `Computed with loss, ${qualityText(unloadedQ)}${isOne ? ' in every resonator' : ', one for each resonator'}`;
-  return `${loss}; temperature not modeled; nominal parts.`;
+      : `Computed with loss, ${qualityText(unloadedQ)}${isOne ? ' in every resonator' : ', given for each resonator'}`;
+  return `${loss}.`;
+}
+
+/** Under what conditions the verdict holds, a sentence or two each. */
+export function conditions(specification: Specification): readonly string[] {
+  return [lossText(specification), ...wideCautions(specification.band), MODEL_ONLY];
 }

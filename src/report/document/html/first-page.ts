@@ -4,10 +4,11 @@ import { type Drawing, inlineSvg } from '../../svg/drawing.js';
 import { element, type Markup } from '../../svg/markup.js';
 import { unitOf } from '../../words/numbers.js';
 import { NO_MASK } from '../../words/verdict.js';
+import { bandFacts } from '../content/band-facts.js';
 import { listedRequirements, pageVerdict } from '../content/requirements.js';
-import { conditionsText, KICKER, nameOf, SIGNATURES, titleCells, titleFacts } from '../content/title.js';
+import { conditions, KICKER, nameOf, SIGNATURES, titleCells, titleFacts } from '../content/title.js';
 import { requirementsMarkup } from './requirements-html.js';
-import { cellMarkup } from './table-html.js';
+import { cellMarkup, tableMarkup } from './table-html.js';
 import { sentenceSigns, spanSigns } from './typography.js';
 
 const DOT = ' \u00b7 ';
@@ -60,27 +61,32 @@ function verdictMarkup({ specification, mask }: DesignReport): Markup {
     { class: isShort ? 'verdict short' : 'verdict' },
     element('h2', { id: 'verdict' }, verdict === undefined ? NO_MASK : verdict.answer),
     ...nearest,
-    element('p', { class: 'conditions' }, conditionsText(specification)),
+    ...conditions(specification).map((text) => element('p', { class: 'conditions' }, sentenceSigns(text))),
   );
 }
 
 function signatureLines(): Markup {
-  return element('div', { class: 'signatures' }, ...SIGNATURES.map((who) => element('p', {}, who)));
+  return element(
+    'div',
+    { class: 'signatures' },
+    ...SIGNATURES.map((who) => element('p', {}, element('span', {}, who), element('span', {}, 'Date'))),
+  );
 }
 
 /** The first page below its title: it answers before it explains. */
 export function firstPage(design: DesignReport, response: Markup | undefined): Markup {
   const { specification, mask } = design;
   const unit = unitOf(specification.band);
-  const table = mask.length === 0 ? [] : [requirementsMarkup(listedRequirements(mask, unit), unit)];
+  const table =
+    mask.length === 0 ? tableMarkup(bandFacts(design, unit)) : requirementsMarkup(listedRequirements(mask, unit), unit);
   return element(
     'section',
     { class: 'first', 'aria-labelledby': 'verdict' },
     verdictMarkup(design),
     element(
       'div',
-      { class: mask.length === 0 ? 'answer alone' : 'answer' },
-      ...(table.length === 0 ? [] : [element('div', { class: 'limits' }, ...table)]),
+      { class: 'answer' },
+      element('div', { class: 'limits' }, table),
       ...(response === undefined ? [] : [response]),
       signatureLines(),
     ),

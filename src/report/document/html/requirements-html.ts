@@ -1,9 +1,12 @@
 import { type Child, element, fragment, type Markup } from '../../svg/markup.js';
 import type { FrequencyUnit } from '../../words/numbers.js';
-import { predictedText, RELATIVE, type Requirement } from '../../words/requirement.js';
-import { boundText, type Listed, RELATIVE_NOTE, requirementName, roomText } from '../content/requirements.js';
+import { predictedText } from '../../words/requirement.js';
+import { shareText } from '../../words/verdict.js';
+import { boundText, type Listed, type ListedRequirement, requirementName, roomText } from '../content/requirements.js';
 import { clearanceStrip, stripHead } from './strip.js';
 import { numberSigns, sentenceSigns, spanSigns } from './typography.js';
+
+const NO_BREAK = '\u00a0';
 
 /** Roles are written out: a row that the style lays out in two lines would lose them. */
 function cell(cssClass: string, ...children: readonly Child[]): Markup {
@@ -20,27 +23,42 @@ function narrowWord(text: string): Markup {
   return element('span', { class: 'word' }, text);
 }
 
-function rowMarkup(requirement: Requirement, isRepeated: boolean, isWorst: boolean, unit: FrequencyUnit): Markup {
+function rowMarkup(
+  { requirement, number, isExtra }: ListedRequirement,
+  isRepeated: boolean,
+  isWorst: boolean,
+  unit: FrequencyUnit,
+): Markup {
   const { unit: level, span, predicted, decimals, isMet } = requirement;
   const name = element('span', { class: isRepeated ? 'again' : undefined }, requirementName(requirement));
-  const classes = [isWorst ? 'tightest' : '', isMet ? '' : 'short'].filter((word) => word !== '').join(' ');
+  const classes = [isWorst ? 'tightest' : '', isMet ? '' : 'short', isExtra ? 'on-screen' : ''];
+  const all = classes.filter((word) => word !== '').join(' ');
+  const share = shareText(requirement);
   return element(
     'tr',
-    { role: 'row', class: classes === '' ? undefined : classes },
-    element('th', { scope: 'row', role: 'rowheader' }, name, ' ', element('span', { class: 'unit' }, level)),
+    { role: 'row', class: all === '' ? undefined : all },
+    element(
+      'th',
+      { scope: 'row', role: 'rowheader' },
+      element('span', { class: 'count' }, String(number)),
+      ' ',
+      name,
+      NO_BREAK,
+      element('span', { class: 'unit' }, level),
+    ),
     cell('over', spanSigns(span), narrowWord(` ${unit.name}`)),
     cell('limit', numberSigns(boundText(requirement))),
     cell('predicted', narrowWord('predicted '), numberSigns(predictedText(predicted, level, decimals))),
     cell('room', narrowWord(isMet ? 'clear by ' : ''), roomText(requirement)),
-    cell('share', clearanceStrip(requirement)),
+    cell('share', clearanceStrip(requirement), ...(share === '' ? [] : [narrowWord(share)])),
   );
 }
 
 /** The requirement table of the first page, with a clearance strip in each row. */
-export function requirementsMarkup({ requirements, worst, more }: Listed, unit: FrequencyUnit): Markup {
-  const rows = requirements.map((requirement, n) => {
-    const isRepeated = requirements[n - 1]?.name === requirement.name;
-    return rowMarkup(requirement, isRepeated, requirement === worst, unit);
+export function requirementsMarkup({ requirements, worst, notes }: Listed, unit: FrequencyUnit): Markup {
+  const rows = requirements.map((listed, n) => {
+    const isRepeated = requirements[n - 1]?.requirement.name === listed.requirement.name;
+    return rowMarkup(listed, isRepeated, listed.requirement === worst, unit);
   });
   const head = element(
     'tr',
@@ -49,16 +67,14 @@ export function requirementsMarkup({ requirements, worst, more }: Listed, unit: 
     headCell('n', 'Over', unit.name),
     headCell('n', 'Limit', ''),
     headCell('n', 'Predicted', ''),
-    headCell('n', 'Clear by', ''),
+    headCell('n', 'Room', ''),
     element(
       'th',
       { scope: 'col', role: 'columnheader', class: 'share' },
-      element('span', { class: 'unit' }, 'clear by, % of limit'),
+      element('span', { class: 'unit' }, 'room, % of limit'),
       stripHead(),
     ),
   );
-  const isRelative = requirements.some(({ name }) => name.endsWith(RELATIVE));
-  const notes = [...(isRelative ? [`${RELATIVE_NOTE}.`] : []), ...(more === undefined ? [] : [more])];
   return fragment(
     element(
       'table',
@@ -67,6 +83,8 @@ export function requirementsMarkup({ requirements, worst, more }: Listed, unit: 
       element('thead', { role: 'rowgroup' }, head),
       element('tbody', { role: 'rowgroup' }, ...rows),
     ),
-    ...notes.map((note) => element('p', { class: 'note' }, sentenceSigns(note))),
+    ...notes.map(({ text, medium }) =>
+      element('p', { class: medium === undefined ? 'note' : `note on-${medium}` }, sentenceSigns(text)),
+    ),
   );
 }

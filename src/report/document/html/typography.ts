@@ -28,9 +28,9 @@ export function sentenceSigns(text: string): string {
   return ordered(text)
     .replace(/(^|[\s(=^])-(?=[\d.j])/g, '$1−')
     .replaceAll(' - ', ' – ')
-    .replace(/(\d) (?=(?:dB|[kM]?Hz|ns|%)(?![A-Za-z]))/g, `$1${NO_BREAK}`)
+    .replace(/(\d) (?=(?:dB|[kMG]?Hz|[nµm]s|%)(?![A-Za-z]))/g, `$1${NO_BREAK}`)
     .replace(/\bepsilon(R?)\b/g, 'ε$1')
-    .replace(/([\w)])\*(?=[\wε(])/g, '$1·')
+    .replace(/([\wε)])\*(?=[\wε(])/g, '$1·')
     .replace(/\bs\^(\d+)/g, (_, digits: string) => `s${superscript(digits)}`);
 }
 

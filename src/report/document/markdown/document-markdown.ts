@@ -3,9 +3,10 @@ import type { DesignSource } from '../../files/result-json.js';
 import type { Picture } from '../../svg/drawing.js';
 import { unitOf } from '../../words/numbers.js';
 import { NO_MASK } from '../../words/verdict.js';
+import { bandFacts } from '../content/band-facts.js';
 import { listedRequirements, pageVerdict, requirementTable } from '../content/requirements.js';
 import { sheetsOf } from '../content/sheets.js';
-import { conditionsText, KICKER, nameOf, SIGNATURES, titleCells, titleFacts } from '../content/title.js';
+import { conditions, KICKER, nameOf, SIGNATURES, titleCells, titleFacts } from '../content/title.js';
 import { cellText, pictureLines, sheetLines, tableLines } from './blocks-markdown.js';
 import { escapeOwn } from './escape.js';
 
@@ -24,18 +25,18 @@ function titleLines(design: DesignReport, source: DesignSource | undefined): rea
   ];
 }
 
-function verdictLines({ specification, mask }: DesignReport): readonly string[] {
+function verdictLines(design: DesignReport): readonly string[] {
+  const { specification, mask } = design;
   const unit = unitOf(specification.band);
   const verdict = pageVerdict(mask, unit);
   const nearest = verdict === undefined ? [] : [escapeOwn(verdict.nearest), ''];
-  const table = mask.length === 0 ? [] : tableLines(requirementTable(listedRequirements(mask, unit), unit));
+  const table = mask.length === 0 ? bandFacts(design, unit) : requirementTable(listedRequirements(mask, unit), unit);
   return [
     `## ${escapeOwn(verdict === undefined ? NO_MASK : verdict.answer)}`,
     '',
     ...nearest,
-    escapeOwn(conditionsText(specification)),
-    '',
-    ...table,
+    ...conditions(specification).flatMap((sentence) => [escapeOwn(sentence), '']),
+    ...tableLines(table),
   ];
 }
 
@@ -51,7 +52,7 @@ export function documentMarkdown(
     ...titleLines(design, source),
     ...verdictLines(design),
     ...(response === undefined ? [] : pictureLines(response)),
-    ...SIGNATURES.map((who) => `- ${who}: `),
+    ...SIGNATURES.map((who) => `- ${who}, name and date: `),
     '',
     ...sheetsOf(design, source).flatMap((sheet) => sheetLines(sheet, pictureOf)),
   ];

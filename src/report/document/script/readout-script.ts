@@ -11,11 +11,11 @@ export const READOUT_SCRIPT = `
   const { hz, unit } = data;
   const box = document.getElementById('show-lossless');
   const hint = 'Point at the picture, or reach it with Tab and use the arrow keys.';
-  const sign = (text) => text.replace('-', '\\u2212');
-  const level = (value) => sign((-value).toFixed(2).replace(/^-(0\\.00)$/, '$1'));
+  const number = (value, digits) => value.toFixed(digits).replace(/^-(?=[0.]+$)/, '').replace('-', '\\u2212');
+  const delayText = (ns) => number((ns * 1e-9) / unit.delay.seconds, unit.delay.digits) + ' ' + unit.delay.name;
 
-  const values = (name, s21, s11, delay) =>
-    name + 'S21 ' + level(s21) + ' dB, S11 ' + level(s11) + ' dB, ' + sign(delay.toFixed(3)) + ' ns';
+  const values = (name, loss, match, delay) =>
+    name + 'loss ' + number(loss, 2) + ' dB, return loss ' + number(match, 2) + ' dB, delay ' + delayText(delay);
 
   /** What the reserved line says of a sweep point: with loss, then lossless where that is shown. */
   const sentences = (n) => {

@@ -13,7 +13,7 @@ figcaption{flex:1 1 176px;font-size:14px;line-height:1.4;color:var(--second);max
 .readout{min-height:63px;font-size:14px;line-height:21px;color:var(--second)}
 .readout b{color:var(--ink);font-weight:600;margin-right:12px;white-space:nowrap}
 .chart{cursor:crosshair}
-label{display:inline-flex;gap:8px;align-items:center;margin-top:8px;color:var(--ink);cursor:pointer}
+label{display:flex;width:fit-content;gap:8px;align-items:center;margin-top:8px;color:var(--ink);cursor:pointer}
 input{accent-color:var(--transmission);width:16px;height:16px;margin:0}
 body:has(#show-lossless:not(:checked)) .lossless{display:none}
 ${pictureRules((role) => `var(--${role})`)}

@@ -39,7 +39,8 @@ dd{font-weight:600}
 .nearest{font-size:20px;line-height:1.35;margin-top:6px}
 .conditions{color:var(--second);margin-top:6px}
 .signatures{display:flex;gap:24px;margin-top:20px;max-width:720px}
-.signatures p{flex:1;border-top:1.5px solid var(--ink);padding-top:4px;font-size:14px;color:var(--second)}
+.signatures p{flex:1;display:flex;flex-direction:column;gap:34px;font-size:14px;color:var(--second)}
+.signatures span{border-top:1.5px solid var(--ink);padding-top:4px}
 nav{margin-top:36px}
 nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
 .sheet{margin-top:36px;padding-top:16px;border-top:3px solid var(--ink)}
@@ -55,8 +56,7 @@ nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
 .pair{grid-template-columns:minmax(0,1fr) minmax(0,1fr)}
 .answer{grid-template:auto 1fr/minmax(0,12fr) minmax(0,11fr)}
 .answer figure{grid-row:span 2}
-.answer .signatures{align-self:end;width:100%}
-.answer.alone{grid-template-columns:minmax(0,1fr)}
+.answer .signatures{align-self:end;width:100%;padding-top:34px}
 .wide{grid-column:1/-1}
 .tall{grid-row:span 2}}
 @media (max-width:639px){

@@ -1,9 +1,11 @@
 /** Print on A4 and letter: the first page holds ten requirements and the response; nothing breaks that can be kept whole. */
 export const PRINT_RULES: string = `
-@page{margin:13mm 12mm}
+@page{margin:13mm 12mm;@bottom-left{content:'irisloom design sheet';font:7pt sans-serif}@bottom-right{content:counter(page) ' of ' counter(pages);font:7pt sans-serif}}
 @media print{
 body{padding:0;max-width:none;font-size:8.5pt;line-height:1.4;background:none}
-.skip,nav,label,.readout{display:none}
+.skip,nav,label,.readout,.on-screen,summary{display:none}
+.on-paper{display:block}
+details caption{font-size:9pt;padding-bottom:6px}
 h1{font-size:25pt;line-height:1.08}
 h2{font-size:14pt;break-after:avoid}
 h3,caption{font-size:9pt;break-after:avoid}
@@ -32,8 +34,10 @@ th,td{padding:.9mm 0 .9mm 2mm}
 .answer .limits{grid-column:1/-1}
 .answer figure{grid-area:2/1/3/3;margin-top:3mm}
 .answer .wide{width:122mm}
-.answer .signatures{grid-area:2/2;align-self:end;flex-direction:column;gap:13mm;margin:0 0 6mm}
-.signatures p{flex:none}
+.answer .signatures{grid-area:2/2;align-self:end;flex-direction:column;gap:9mm;margin:0 0 6mm}
+.signatures p{flex-direction:row;gap:3mm}
+.signatures span{flex:3 1 0}
+.signatures span+span{flex:2 1 0}
 .first{break-after:page}
 .sheet{margin-top:0;padding-top:3mm}
 .sheet+.sheet{margin-top:8mm}
@@ -49,6 +53,5 @@ thead{display:table-header-group}
 .figures td{font-size:7pt}
 [id^=matrix] :is(th,td){font-size:7pt}
 [id^=matrix] :is(th,td):not(:first-child){padding-left:5px}
-details::details-content{content-visibility:visible;display:block;block-size:auto}
-summary{list-style:none;font-size:9pt}}
+details::details-content{content-visibility:visible;display:block;block-size:auto}}
 `.trim();

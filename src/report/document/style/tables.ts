@@ -15,8 +15,10 @@ tbody th:not(.n){white-space:normal}
 tr.tightest :is(th,td){font-weight:700}
 tr.negative :is(th,td){font-weight:700;color:var(--negative)}
 tr.short :is(th,td){color:var(--short);font-weight:700}
-.again{color:var(--second)}
-.tightest .again,.short .again{color:inherit}
+.again,.count{color:var(--second)}
+.count{display:inline-block;min-width:1.3em;font-weight:400}
+.on-paper{display:none}
+.tightest .again,.short .again,.short .count{color:inherit}
 .note{font-size:14px;color:var(--second);margin-top:6px;max-width:68ch}
 .scroll{overflow-x:auto}
 .figures td{font:13px/1.35 ${CODE}}
@@ -31,8 +33,8 @@ tr.short :is(th,td){color:var(--short);font-weight:700}
 #requirements th{vertical-align:middle}
 #requirements thead th{vertical-align:bottom}
 #requirements .room{font-weight:700}
-#requirements .over{white-space:normal}
-#requirements .share{width:136px;text-align:left}
+#requirements .over{white-space:nowrap}
+#requirements .share{width:136px;text-align:left;white-space:nowrap}
 #couplings td{white-space:nowrap}
 #requirements thead .share .unit{display:block;white-space:nowrap;padding-left:22px;font-size:13px}
 #requirements td.share{padding-block:0}
@@ -53,7 +55,7 @@ border-bottom:1px solid var(--hairline)}
 #requirements .over{grid-area:2/1;text-align:left}
 #requirements .limit{grid-area:2/2}
 #requirements .predicted{grid-area:2/3}
-#requirements .share{grid-area:3/1/4/4;width:auto}
+#requirements .share{grid-area:3/1/4/4;width:auto;display:flex;align-items:center;gap:8px}
 #requirements .word{display:inline;color:var(--second);font-weight:400}}
 @media (min-width:480px) and (max-width:699px){
 #requirements tbody tr{grid-template-columns:minmax(0,1fr) minmax(70px,auto) minmax(112px,auto) 124px}
@@ -61,5 +63,10 @@ border-bottom:1px solid var(--hairline)}
 #requirements .room{grid-area:1/4}
 #requirements .share{grid-area:2/4}}
 @media (max-width:639px){
-th,td{padding-left:10px}}
+th,td{padding-left:10px}
+caption{max-width:calc(100vw - 20px)}
+#certificates{font-size:13.5px}
+#certificates :is(th,td){padding-left:8px}
+#certificates :is(th,td):nth-child(n+2){white-space:normal}
+#certificates :is(th,td):first-child{padding-left:0}}
 `.trim();
