@@ -18,14 +18,67 @@ function areaOf(points: string): number {
 }
 
 describe('matrix picture', () => {
-  it('has one mark an entry on and above the diagonal: squares positive, lozenges negative', () => {
+  it('has one mark an entry on and above the diagonal: squares positive, lozenges negative, rings too weak for either', () => {
     for (const seed of [1, 2, 3, 4]) {
       const matrix = randomMatrix(3 + seed, seeded(seed));
       const entries = matrix.values.flatMap((row, i) => row.filter((value, j) => j >= i && value !== 0));
       const { wide } = matrixPicture(matrix);
-      expect(attributes(wide, 'polygon', 'points').length).toBe(entries.filter((value) => value < 0).length);
+      const { step } = matrixLayout(matrix, 'wide');
+      const strong = (value: number): boolean =>
+        0.6 * step * Math.sqrt(Math.abs(value) / Math.max(...entries.map(Math.abs))) >= 5;
+      expect(attributes(wide, 'polygon', 'points').length).toBe(entries.filter((m) => m < 0 && strong(m)).length);
       // One more rectangle: the ground.
-      expect(attributes(wide, 'rect', 'class').length).toBe(1 + entries.filter((value) => value > 0).length);
+      expect(attributes(wide, 'rect', 'class').length).toBe(1 + entries.filter((m) => m > 0 && strong(m)).length);
+      expect(attributes(wide, 'circle', 'r').length).toBe(entries.filter((m) => !strong(m)).length);
+    }
+  });
+
+  it('a lozenge is never smaller than can be told from a square; weaker entries of both signs are hollow rings', () => {
+    for (const { name, matrix } of [...[4, 8, 10, 14, 20].flatMap(foldedDesigns), ...otherDesigns()]) {
+      for (const format of ['wide', 'narrow'] as const) {
+        for (const { kind, side, row, column } of matrixLayout(matrix, format).knots) {
+          if (kind === 'square' || kind === 'lozenge') {
+            expect(side, name).toBeGreaterThanOrEqual(5);
+            expect(kind, name).toBe(entry(matrix, row, column) > 0 ? 'square' : 'lozenge');
+          }
+        }
+      }
+    }
+    const values = foldedDesign(6).matrix.values.map((row) => [...row]);
+    values[2]![5] = values[5]![2] = -0.004;
+    const weak = { order: 6, values };
+    expect(matrixLayout(weak, 'wide').knots.find(({ row, column }) => row === 2 && column === 5)?.kind).toBe('ring');
+    expect(textsOf(matrixPicture(weak).wide)).toContain('−.0040');
+    expect(matrixPicture(weak).caption).toContain('too weak to draw size and sign, which the table holds');
+  });
+
+  it('numbers and row names keep apart by at least the width of a space, true minus and bold digits taken as wide as they are', () => {
+    for (const { name, matrix } of [...[2, 5, 8, 10, 12].flatMap(foldedDesigns), ...otherDesigns()]) {
+      for (const format of ['wide', 'narrow'] as const) {
+        const { entries, nameEnd } = matrixLayout(matrix, format);
+        const half = ({ text, isNegative }: (typeof entries)[number]): number =>
+          textWidth(text.replace('−', '+'), 11, isNegative) / 2;
+        for (const each of entries) {
+          expect(each.x - half(each) - nameEnd, name).toBeGreaterThanOrEqual(4);
+          for (const other of entries)
+            if (other.row === each.row && other.x > each.x)
+              expect(other.x - half(other) - each.x - half(each), name).toBeGreaterThanOrEqual(4);
+        }
+      }
+    }
+  });
+
+  it('captions name only marks and numbers that are drawn', () => {
+    for (const { name, matrix } of [...[1, 3, 8, 11, 14].flatMap(foldedDesigns), ...otherDesigns(), foldedDesign(40)]) {
+      const layouts = (['wide', 'narrow'] as const).map((format) => matrixLayout(matrix, format));
+      const { caption } = matrixPicture(matrix);
+      const has = (kind: string): boolean => layouts.some(({ knots }) => knots.some((knot) => knot.kind === kind));
+      expect(caption.includes('lozenge'), name).toBe(has('lozenge'));
+      expect(caption.includes('ring'), name).toBe(has('ring'));
+      const numbered = layouts.map(({ entries }) => entries.length);
+      expect(caption.includes('numbers below the diagonal'), name).toBe(Math.max(...numbered) > 0);
+      if (numbered[0] !== numbered[1] && Math.min(...numbered) === 0)
+        expect(caption, name).toContain('where there is room');
     }
   });
 
@@ -34,7 +87,8 @@ describe('matrix picture', () => {
     const { knots, step } = matrixLayout(matrix, 'wide');
     const sizes = matrix.values.flatMap((row, i) => row.filter((_, j) => j >= i)).map(Math.abs);
     const largest = Math.max(...sizes);
-    for (const { row, column, side } of knots) {
+    for (const { row, column, side, kind } of knots) {
+      if (kind === 'ring') continue;
       const share = Math.abs(entry(matrix, row, column)) / largest;
       expect(side ** 2).toBeCloseTo((0.6 * step) ** 2 * share, 9);
     }

@@ -94,27 +94,40 @@ describe('pole-zero picture', () => {
     const texts = textsOf(polesAndZerosPicture(polynomials).wide);
     for (const { re, im } of polynomials.poles.filter((pole) => pole.im > 0))
       expect(texts).toContain(`−${Math.abs(re).toFixed(3)} ± j${im.toFixed(3)}`);
-    expect(texts).toContain('±1.450 transmission zero');
+    expect(texts).toContain('±j1.450 transmission zeros');
     expect(texts.filter((text) => text.includes('1.450')).length).toBe(1);
     const repeated = textsOf(polesAndZerosPicture(response(8, [1.5, 1.5, -1.5, -1.5])).wide);
-    expect(repeated).toContain('2 × ±1.500 transmission zero');
+    expect(repeated).toContain('2 × ±j1.500 transmission zeros');
     expect(textsOf(polesAndZerosPicture(response(6, [...PAIR, 1.5])).wide)).toContain('±0.800 + j0.300');
     expect(textsOf(polesAndZerosPicture(response(6, [...PAIR, 1.5])).narrow)).toContain(
       'far or off the axis: zeros at ±0.800 + j0.300',
     );
   });
 
+  it('writes zeros on the axis as imaginary, counts those at 0 in words, and breaks no value', () => {
+    const findingOf = (...zeros: (number | Complex)[]): string => polesAndZerosPicture(response(8, zeros)).finding;
+    expect(findingOf(1.2, -1.25)).toMatch(/^2 transmission zeros, \+j1\.200, −j1\.250; pole nearest the axis −/);
+    expect(findingOf(1.3)).toMatch(/^1 transmission zero, \+j1\.300; /);
+    expect(findingOf(...PAIR, 1.3)).toContain('±0.800\u00a0+\u00a0j0.300');
+    expect(findingOf(1.3)).not.toMatch(/[±+−] |× /);
+    const texts = textsOf(polesAndZerosPicture(butterworth({ order: 12 })).wide);
+    expect(texts).toContain('12 reflection zeros at 0');
+    expect(textsOf(polesAndZerosPicture(butterworth({ order: 1 })).wide)).toContain('reflection zero at 0');
+    expect(textsOf(polesAndZerosPicture(butterworth({ order: 12 })).narrow)).toContain('12 at 0');
+  });
+
   it('tells far zeros in words and keeps the scale', () => {
     const [near, far] = [response(6, [1.45, -1.45]), response(6, [1.45, -1.45, 20, -35])];
     const picture = polesAndZerosPicture(far);
     expect(textsOf(picture.wide)).toEqual(
-      expect.arrayContaining(['far above: zero at +20.000', 'far off the plane: zero at −35.000']),
+      expect.arrayContaining(['far above: zero at +j20.000', 'far off the plane: zero at −j35.000']),
     );
     expect(planeOf(far, 'wide').pixelsPerUnit / planeOf(near, 'wide').pixelsPerUnit).toBeCloseTo(1, 2);
     const many = Array.from({ length: 30 }, (_, n) => ({
       kind: 'transmission' as const,
       at: { re: 0, im: n },
-      text: '+1000',
+      text: '+j1000',
+      count: 1,
     }));
     expect(textWidth(farText(many, 'far above', 300, 11), 11)).toBeLessThanOrEqual(300);
     expect(farText(many, 'far above', 300, 11)).toMatch(/ and \d+ more$/);
@@ -147,8 +160,11 @@ describe('pole-zero picture', () => {
     }
     const large = planeOf(response(100, [1.2, -1.2]), 'wide');
     expect(large.labels.length + large.unlabelled).toBe(50 + 50 + 1);
+    const small = planeOf(response(100, [1.2, -1.2]), 'narrow');
     expect(polesAndZerosPicture(response(100, [1.2, -1.2])).caption).toContain(
-      `${large.unlabelled} more values stand in the table`,
+      small.unlabelled === large.unlabelled
+        ? `${large.unlabelled} more values stand in the table`
+        : 'values without room stand in the table',
     );
   });
 

@@ -3,13 +3,13 @@ import { FORMAT_WIDTH, type Format } from '../../../svg/drawing.js';
 import { minus, textWidth } from '../../../svg/words.js';
 import { signed } from '../../../words/numbers.js';
 
-/** A mark at the crossing of two threads; `dot` for a value that came out zero. */
+/** A mark at the crossing of two threads; `ring` for a value too weak to show its sign, `dot` for one that came out zero. */
 export interface Knot {
   readonly row: number;
   readonly column: number;
   readonly x: number;
   readonly y: number;
-  readonly kind: 'square' | 'lozenge' | 'dot';
+  readonly kind: 'square' | 'lozenge' | 'ring' | 'dot';
   /** Side of the square, and of the square of equal area. */
   readonly side: number;
 }
@@ -31,12 +31,16 @@ export interface MatrixLayout {
   /** Position of the first thread; the same along both edges up to `left` and `top`. */
   readonly left: number;
   readonly top: number;
+  /** Right end of the names of rows. */
+  readonly nameEnd: number;
   readonly step: number;
   readonly size: number;
   readonly knots: readonly Knot[];
   readonly entries: readonly Entry[];
-  /** How many numbers the cells below the diagonal hold: all, those off the main line, or none. */
-  readonly numbers: 'all' | 'cross' | 'none';
+  /** How many numbers the cells below the diagonal hold: all, as many as have room, those off the main line, or none. */
+  readonly numbers: 'all' | 'some' | 'cross' | 'none';
+  /** Decimals of the numbers, which count as one where some of them found no room. */
+  readonly digits: number;
 }
 
 /** Numbers and names are this tall, px. */
@@ -48,34 +52,45 @@ const MOST_NUMBERED = 12;
 /** Side of the largest mark as a share of the step; larger ones would hide the cross couplings in a black stair. */
 const LARGEST = 0.6;
 
-/** A mark is not smaller than this, px: it would vanish. */
-const LEAST_SIDE = 1.2;
+/** Side below which a lozenge is a filled speck that cannot be told from a square, px. */
+export const LEAST_SIGNED = 5;
+
+/** Diameter of a ring as a share of the step, and at most, px. */
+const RING = { share: 0.5, most: 5 };
 
 /** Sizes below print as 0.0000. */
 const PRINTED = 5e-5;
 
-/** Room between two numbers, or a number and a mark, px. */
-const CLEAR = 3;
+/** Room between two numbers, or a number and a mark or a name, px. */
+const CLEAR = 5;
+
+/** Letters of bold digits and of the true minus are wider than the rest of their font lets one expect. */
+const numberWidth = (text: string, isBold: boolean): number => textWidth(text.replace('−', '+'), NUMBER_SIZE, isBold);
 
 /** Signed, leading zero dropped. */
 export function entryText(value: number, digits: number): string {
   return minus(signed(value, digits).replace(/^([+-])0\./, '$1.'));
 }
 
-function stepOf(order: number, format: Format, room: number): number {
-  const usual = order <= MOST_NUMBERED ? { wide: 46, narrow: 37 } : { wide: 26, narrow: 14 };
-  return Math.min(usual[format], room / (order + 2));
+/** Distances of threads, best first: the usual one, and where it costs decimals a wider one if the drawing has room for it. */
+function stepsOf(order: number, format: Format, room: number): readonly number[] {
+  if (order > MOST_NUMBERED) return [Math.min(format === 'wide' ? 26 : 14, room / (order + 2))];
+  const usual = Math.min(format === 'wide' ? 46 : 37, room / (order + 2));
+  return [usual, ...WIDER.filter((step) => step > usual && step * (order + 2) <= room)];
 }
+
+const WIDER: readonly number[] = [42, 52];
 
 function knotsOf({ values }: CouplingMatrix, at: (thread: number) => number, step: number, dy: number): Knot[] {
   const largest = Math.max(...values.map((row) => Math.max(...row.map(Math.abs))), Number.MIN_VALUE);
   return values.flatMap((row, n) =>
     row.flatMap((value, column): Knot[] => {
       if (column < n || value === 0) return [];
-      const side = Math.max(LARGEST * step * Math.sqrt(Math.abs(value) / largest), LEAST_SIDE);
-      const isZero = Math.abs(value) < PRINTED;
-      const kind = isZero ? 'dot' : value > 0 ? 'square' : 'lozenge';
-      return [{ row: n, column, x: at(column), y: at(n) + dy, kind, side: isZero ? 3 : side }];
+      const side = LARGEST * step * Math.sqrt(Math.abs(value) / largest);
+      const place = { row: n, column, x: at(column), y: at(n) + dy };
+      if (Math.abs(value) < PRINTED) return [{ ...place, kind: 'dot', side: 3 }];
+      if (side < LEAST_SIGNED) return [{ ...place, kind: 'ring', side: Math.min(RING.share * step, RING.most) }];
+      return [{ ...place, kind: value > 0 ? 'square' : 'lozenge', side }];
     }),
   );
 }
@@ -108,45 +123,67 @@ function entriesOf({ values }: CouplingMatrix, at: (thread: number) => number, d
   );
 }
 
-/** Does every number keep clear of its neighbors in the row, of the mark on the diagonal and of the left edge? */
-function fits(entries: readonly Entry[], knots: readonly Knot[], step: number): boolean {
-  if (step < NUMBER_SIZE + 2) return entries.length === 0;
-  const own = new Map(knots.filter(({ row, column }) => row === column).map((knot) => [knot.row, knot]));
-  return entries.every(({ row, x, text, isNegative }, n) => {
-    const half = textWidth(text, NUMBER_SIZE, isNegative) / 2;
-    const next = entries[n + 1];
-    const mark = own.get(row);
-    const end = mark === undefined ? Number.POSITIVE_INFINITY : mark.x - mark.side * Math.SQRT1_2;
-    if (x + half + CLEAR > end) return false;
-    if (next === undefined || next.row !== row) return true;
-    return x + half + CLEAR <= next.x - textWidth(next.text, NUMBER_SIZE, next.isNegative) / 2;
+/** Does a number keep clear of its neighbors in the row, of the mark on the diagonal and of the name of the row? */
+function isFree(entry: Entry, others: readonly Entry[], diagonal: Knot | undefined, nameEnd: number): boolean {
+  const halfOf = ({ text, isNegative }: Entry): number => numberWidth(text, isNegative) / 2;
+  const half = halfOf(entry);
+  if (entry.x - half - CLEAR < nameEnd) return false;
+  if (diagonal !== undefined && entry.x + half + CLEAR > diagonal.x - diagonal.side * Math.SQRT1_2) return false;
+  return others.every(
+    (other) =>
+      other.row !== entry.row || other === entry || Math.abs(other.x - entry.x) >= half + halfOf(other) + CLEAR,
+  );
+}
+
+/** Those numbers of a matrix that have room. */
+function withRoom(entries: readonly Entry[], knots: readonly Knot[], step: number, nameEnd: number): Entry[] {
+  if (step < NUMBER_SIZE + 2) return [];
+  const diagonal = new Map(knots.filter(({ row, column }) => row === column).map((knot) => [knot.row, knot]));
+  // Cross couplings first: they are what a matrix is looked at for.
+  const isMain = ({ row, column }: Entry): number => (row === column + 1 ? 1 : 0);
+  const kept: Entry[] = [];
+  for (const entry of [...entries].sort((a, b) => isMain(a) - isMain(b)))
+    if (isFree(entry, kept, diagonal.get(entry.row), nameEnd)) kept.push(entry);
+  return entries.filter((entry) => kept.includes(entry));
+}
+
+/** The most numbers that have room: all with as many decimals as fit, those of cross couplings, or as many as there is room for. */
+function numbersOf(matrix: CouplingMatrix, free: (writing: Writing) => readonly [Entry[], Entry[]]): Numbers {
+  const { order } = matrix;
+  for (const writing of writings(order)) {
+    const [all, kept] = free(writing);
+    if (kept.length === all.length) return { ...writing, entries: all };
+    if (writing.digits === 2 && order <= MOST_NUMBERED && kept.length > 0)
+      return { numbers: 'some', digits: 1, entries: kept };
+  }
+  return { numbers: 'none', digits: 0, entries: [] };
+}
+
+type Numbers = Pick<MatrixLayout, 'numbers' | 'digits' | 'entries'>;
+
+/** Room for the names of rows, and above for those of columns, px. */
+const NAMES = 30;
+const TOP = 24;
+
+function layoutWith(matrix: CouplingMatrix, width: number, step: number): MatrixLayout {
+  const { order } = matrix;
+  const left = NAMES + step / 2;
+  const at = (thread: number): number => left + thread * step;
+  const dy = TOP - NAMES;
+  // Names of three digits need all of their margin.
+  const nameEnd = NAMES - (order > 99 ? 7 : 13);
+  const knots = knotsOf(matrix, at, step, dy);
+  const found = numbersOf(matrix, (writing) => {
+    const entries = entriesOf(matrix, at, dy, writing);
+    return [entries, withRoom(entries, knots, step, nameEnd)];
   });
+  const size = order + 2;
+  return { width, height: TOP + size * step + 4, left, nameEnd, top: left + dy, step, size, knots, ...found };
 }
 
 /** Threads, marks and numbers of a matrix in one format. */
 export function matrixLayout(matrix: CouplingMatrix, format: Format): MatrixLayout {
-  const { order } = matrix;
-  const [width, top] = [FORMAT_WIDTH[format], 24];
-  const names = 30;
-  const step = stepOf(order, format, width - names - 4);
-  const left = names + step / 2;
-  const at = (thread: number): number => left + thread * step;
-  const dy = top - names;
-  const knots = knotsOf(matrix, at, step, dy);
-  const tried = writings(order).map((writing) => ({ writing, entries: entriesOf(matrix, at, dy, writing) }));
-  const found = tried.find(({ entries }) => fits(entries, knots, step)) ?? {
-    writing: { numbers: 'none' },
-    entries: [],
-  };
-  return {
-    width,
-    height: top + (order + 2) * step + 4,
-    left,
-    top: left + dy,
-    step,
-    size: order + 2,
-    knots,
-    entries: found.entries,
-    numbers: found.writing.numbers as MatrixLayout['numbers'],
-  };
+  const width = FORMAT_WIDTH[format];
+  const layouts = stepsOf(matrix.order, format, width - NAMES - 4).map((step) => layoutWith(matrix, width, step));
+  return layouts.reduce((best, each) => (each.digits > best.digits ? each : best));
 }

@@ -11,6 +11,8 @@ export interface Labelled {
   /** Where the label belongs: the image with the largest imaginary part, and of two at one height the right one. */
   readonly at: Complex;
   readonly text: string;
+  /** How many roots it stands for. */
+  readonly count: number;
 }
 
 /** Roots closer than half a digit of their labels are one. */
@@ -27,10 +29,10 @@ function sizeOf(value: number): string {
 
 const signOf = (value: number, isBoth: boolean): string => (isBoth ? '±' : value < 0 ? '−' : '+');
 
-/** A root on the axis as omega, others as real and imaginary part. */
+/** Real and imaginary part; a part that is zero is left out. */
 function rootText({ re, im }: Complex, bothRe: boolean, bothIm: boolean): string {
   const size = Math.hypot(re, im);
-  if (Math.abs(re) <= 1e-9 * size || size === 0) return im === 0 ? '0' : `${signOf(im, bothIm)}${sizeOf(im)}`;
+  if (Math.abs(re) <= 1e-9 * size || size === 0) return im === 0 ? '0' : `${signOf(im, bothIm)}j${sizeOf(im)}`;
   const real = `${bothRe ? '±' : re < 0 ? '−' : '+'}${sizeOf(re)}`;
   return near(im, 0) ? real : `${real} ${signOf(im, bothIm)} j${sizeOf(im)}`;
 }
@@ -49,8 +51,9 @@ export function labelledRoots(kind: RootKind, roots: readonly Complex[]): Labell
     const bothIm = !near(im, 0) && count(re, -im) === own;
     const bothRe = !near(re, 0) && count(-re, im) === own;
     for (const a of bothRe ? [re, -re] : [re]) for (const b of bothIm ? [im, -im] : [im]) seen.push({ re: a, im: b });
-    const times = own > 1 ? `${own} × ` : '';
-    groups.push({ kind, at: root, text: minus(`${times}${rootText(root, bothRe, bothIm)}`) });
+    const value = minus(rootText(root, bothRe, bothIm));
+    const text = own === 1 ? value : value === '0' ? `${own} at 0` : `${own} × ${value}`;
+    groups.push({ kind, at: root, text, count: own * (bothRe ? 2 : 1) * (bothIm ? 2 : 1) });
   }
   return groups;
 }

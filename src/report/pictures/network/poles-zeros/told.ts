@@ -6,9 +6,16 @@ const FAR = 3;
 
 const sizeOf = ({ re, im }: Complex): number => Math.hypot(re, im);
 
+/** A value with the word for it. */
+function wordedText({ text, count }: Labelled, word: string): string {
+  const words = count === 1 ? word : `${word}s`;
+  if (text === '0') return `${words} at 0`;
+  return text.endsWith(' at 0') ? text.replace(' at 0', ` ${words} at 0`) : `${text} ${words}`;
+}
+
 /** Words stand at the first value of each kind in the wide drawing. */
 function named(groups: readonly Labelled[], word: string, isWide: boolean): Labelled[] {
-  return groups.map((group, n) => (isWide && n === 0 ? { ...group, text: `${group.text} ${word}` } : group));
+  return groups.map((group, n) => (isWide && n === 0 ? { ...group, text: wordedText(group, word) } : group));
 }
 
 /** All roots with what labels say of them, sorted by where they are told. */
