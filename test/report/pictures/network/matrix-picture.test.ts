@@ -25,7 +25,7 @@ describe('matrix picture', () => {
       const { wide } = matrixPicture(matrix);
       const { step } = matrixLayout(matrix, 'wide');
       const strong = (value: number): boolean =>
-        0.6 * step * Math.sqrt(Math.abs(value) / Math.max(...entries.map(Math.abs))) >= 5;
+        0.6 * step * Math.sqrt(Math.abs(value) / Math.max(...entries.map(Math.abs))) >= 6.5;
       expect(attributes(wide, 'polygon', 'points').length).toBe(entries.filter((m) => m < 0 && strong(m)).length);
       // One more rectangle: the ground.
       expect(attributes(wide, 'rect', 'class').length).toBe(1 + entries.filter((m) => m > 0 && strong(m)).length);
@@ -38,7 +38,7 @@ describe('matrix picture', () => {
       for (const format of ['wide', 'narrow'] as const) {
         for (const { kind, side, row, column } of matrixLayout(matrix, format).knots) {
           if (kind === 'square' || kind === 'lozenge') {
-            expect(side, name).toBeGreaterThanOrEqual(5);
+            expect(side, name).toBeGreaterThanOrEqual(5.5);
             expect(kind, name).toBe(entry(matrix, row, column) > 0 ? 'square' : 'lozenge');
           }
         }

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { butterworth, type Complex, type FilterPolynomials, generalizedChebyshev } from '../../../../src/index.js';
-import { planeOf } from '../../../../src/report/pictures/network/poles-zeros/plane.js';
+import { leaderEnds, planeOf } from '../../../../src/report/pictures/network/poles-zeros/plane.js';
 import {
   farText,
   polesAndZerosPicture,
@@ -168,9 +168,36 @@ describe('pole-zero picture', () => {
     );
   });
 
-  it('spreads labels without changing those that have room', () => {
+  it('leaders keep clear of the marks they do not belong to, up to order 30', () => {
+    /** Distance of a point from a straight line between two points. */
+    const distance = (x: number, y: number, [a, b]: ReturnType<typeof leaderEnds>): number => {
+      const [dx, dy] = [b[0] - a[0], b[1] - a[1]];
+      const share = ((x - a[0]) * dx + (y - a[1]) * dy) / (dx * dx + dy * dy);
+      const t = Math.min(Math.max(share, 0), 1);
+      return Math.hypot(x - a[0] - t * dx, y - a[1] - t * dy);
+    };
+    for (const [order, zeros] of [
+      [8, [1.2, -1.3]],
+      [16, [1.2, -1.2]],
+      [20, [1.2, 1.3, 1.5]],
+      [24, [1.2, -1.3]],
+      [30, [1.2]],
+    ] as const)
+      for (const format of FORMATS) {
+        const { labels, marks } = planeOf(response(order, zeros, 20), format);
+        for (const label of labels)
+          for (const { x, y } of marks)
+            if (Math.hypot(x - label.markX, y - label.markY) > 0.5)
+              // A cross or a ring reaches 4.5 px along a line and a little over 5 with its stroke.
+              expect(distance(x, y, leaderEnds(label)), `${order} ${format} ${label.text}`).toBeGreaterThan(5.2);
+      }
+  });
+
+  it('spreads labels evenly about their places, without changing those that have room', () => {
     expect(spread([10, 40, 80], 17, 0, 100)).toEqual([10, 40, 80]);
-    expect(spread([10, 12, 80], 17, 0, 100)).toEqual([10, 27, 80]);
+    expect(spread([30, 32, 80], 17, 0, 100)).toEqual([22.5, 39.5, 80]);
     expect(spread([95, 97, 99], 17, 0, 100)).toEqual([66, 83, 100]);
+    expect(spread([1, 2, 3], 17, 0, 100)).toEqual([0, 17, 34]);
+    expect(spread([], 17, 0, 100)).toEqual([]);
   });
 });

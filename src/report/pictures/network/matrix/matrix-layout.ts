@@ -52,8 +52,8 @@ const MOST_NUMBERED = 12;
 /** Side of the largest mark as a share of the step; larger ones would hide the cross couplings in a black stair. */
 const LARGEST = 0.6;
 
-/** Side below which a lozenge is a filled speck that cannot be told from a square, px. */
-export const LEAST_SIGNED = 5;
+/** Side below which a lozenge is a filled speck that cannot be told from a square, px; a little less where threads are tight. */
+const leastSigned = (step: number): number => Math.max(5.5, Math.min(6.5, 0.4 * step));
 
 /** Diameter of a ring as a share of the step, and at most, px. */
 const RING = { share: 0.5, most: 5 };
@@ -89,7 +89,7 @@ function knotsOf({ values }: CouplingMatrix, at: (thread: number) => number, ste
       const side = LARGEST * step * Math.sqrt(Math.abs(value) / largest);
       const place = { row: n, column, x: at(column), y: at(n) + dy };
       if (Math.abs(value) < PRINTED) return [{ ...place, kind: 'dot', side: 3 }];
-      if (side < LEAST_SIGNED) return [{ ...place, kind: 'ring', side: Math.min(RING.share * step, RING.most) }];
+      if (side < leastSigned(step)) return [{ ...place, kind: 'ring', side: Math.min(RING.share * step, RING.most) }];
       return [{ ...place, kind: value > 0 ? 'square' : 'lozenge', side }];
     }),
   );

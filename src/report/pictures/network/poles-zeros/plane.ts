@@ -23,6 +23,20 @@ export interface RootLabel {
   readonly markY: number;
 }
 
+/** Distance of a leader from the middle of its mark, px, and from its label. */
+const FROM_MARK = 7;
+const FROM_LABEL = 4;
+
+type Place = readonly [number, number];
+
+/** Both ends of the line from a mark to its label. */
+export function leaderEnds({ x, y, anchor, markX, markY }: RootLabel): readonly [Place, Place] {
+  const end: Place = [anchor === 'start' ? x - FROM_LABEL : x + FROM_LABEL, y];
+  const [dx, dy] = [end[0] - markX, end[1] - markY];
+  const share = Math.min(FROM_MARK / Math.hypot(dx, dy), 1);
+  return [[markX + dx * share, markY + dy * share], end];
+}
+
 /** The pole plot as plain data. */
 export interface Plane {
   readonly width: number;

@@ -4,7 +4,7 @@ import { cross, ring, triangle } from '../../../svg/marks.js';
 import { element, fragment, type Markup } from '../../../svg/markup.js';
 import { label, minus, textWidth } from '../../../svg/words.js';
 import { trimmed } from '../../../words/numbers.js';
-import { type Plane, planeOf, type RootLabel, type RootMark } from './plane.js';
+import { leaderEnds, type Plane, planeOf, type RootLabel, type RootMark } from './plane.js';
 import { type Labelled, labelledRoots } from './roots.js';
 
 function ground({ left, right, top, bottom, axis, omegaTicks, realTicks }: Plane): Markup {
@@ -37,12 +37,10 @@ function axisMarks({ axis, top, bottom, omegaTicks }: Plane): Markup {
   );
 }
 
-function leader({ x, y, anchor, markX, markY }: RootLabel): Markup {
-  const away = anchor === 'start' ? 1 : -1;
-  const round = (value: number): number => Math.round(value * 10) / 10;
-  const [start, bend, end] = [markX + 7 * away, x - 14 * away, x - 4 * away].map(round);
-  const d = `M${start} ${round(markY)}L${bend} ${round(markY)}L${end} ${round(y)}`;
-  return element('path', { d, class: 'line thin s-second half' });
+/** Straight from the rim of a mark to its label: where labels fan out, lines leave the crowd at once. */
+function leader(each: RootLabel): Markup {
+  const [[x1, y1], [x2, y2]] = leaderEnds(each);
+  return element('line', { x1, y1, x2, y2, class: 'thin s-second half' });
 }
 
 function markOf({ kind, x, y }: RootMark): Markup {
