@@ -14,7 +14,7 @@ import { documentParts } from './parts.js';
  *
  * @example
  * const band = { centerHz: '1 GHz', bandwidthHz: '20 MHz' };
- * reportMarkdown(design({ name: 'A & B', passband: band, order: 4, returnLossDb: 20 })).split('\n')[0]; // '# A \\& B'
+ * reportMarkdown(design({ name: 'A & B', passband: band, order: 4, returnLossDb: 20 })).split('\n')[0]; // '# A & B'
  */
 export function reportMarkdown(design: DesignReport, source?: DesignSource): string {
   return documentMarkdown(design, checkSource(source), documentParts(design).pictures);

@@ -107,6 +107,23 @@ function kindsOf(markdown: string): { readonly shape: string; readonly words: st
   return { shape: kinds.join(' '), words };
 }
 
+describe('harmless text in Markdown', () => {
+  it.each([
+    'Larkmoor, C-band (rev. 2) - draft; 50 % done!',
+    'A & B, AT&T: "combined" mask / part #7, 1 > 0, a=b+c^2',
+    'snake_case_name, www, 12:30, x.y',
+  ])('stands in the file as it was written: %s', (text) => {
+    for (const zone of ['name', 'revision', 'notes'] as const)
+      expect(documentMarkdown(...withText(zone, text), few.pictures)).toContain(text);
+  });
+
+  it('numbers of tables are not escaped', () => {
+    const markdown = documentMarkdown(...withText('name', 'x'), few.pictures);
+    expect(markdown).toMatch(/\| [+-]\d\.\d+ \|/);
+    expect(markdown).not.toMatch(/\\[-+.,>=]/);
+  });
+});
+
 describe('the checks of this file', () => {
   it('see markup that a text makes', () => {
     const [one, other] = ['<p><bdi>x</bdi></p>', '<p><bdi><b>x</b></bdi></p>'].map((inner) =>

@@ -26,9 +26,11 @@ function lossText({ unloadedQ }: Specification): string {
   return `unloaded Q of resonators 1 to ${unloadedQ.length}: ${unloadedQ.map(given).join(', ')}`;
 }
 
-function factTable({ specification }: DesignReport, source: DesignSource | undefined, unit: FrequencyUnit): Table {
+/** The design file, as it was understood. */
+export function inputTable({ specification }: DesignReport, source?: DesignSource): Table {
   const { name, revision, date, band, family, order, returnLossDb, topology, portCouplings, mask, sweep } =
     specification;
+  const unit = unitOf(band);
   const optional = (head: string, line: string | undefined): readonly Row[] =>
     line === undefined || line === '' ? [] : [{ cells: [head, userText(line)] }];
   const stated = (head: string, value: string): Row => ({ cells: [head, value] });
@@ -64,8 +66,8 @@ function zeroTable({ transmissionZeros, band }: Specification, unit: FrequencyUn
     caption: 'Transmission zeros asked for',
     columns: [
       textColumn('Zero'),
-      numberColumn('Real part of s'),
-      numberColumn('omega, imaginary part of s'),
+      numberColumn('Real part'),
+      numberColumn('Imaginary part, omega'),
       numberColumn('Frequency', unit.name),
     ],
     rows: transmissionZeros.map(({ re, im }, n) => ({
@@ -104,12 +106,10 @@ function maskTable(rows: readonly MaskRow[], unit: FrequencyUnit): Table {
   };
 }
 
-/** The design file, as it was understood: its facts, then zeros and mask one by one, numbered as in all other tables. */
-export function inputTables(design: DesignReport, source?: DesignSource): readonly Table[] {
-  const { specification, mask } = design;
+/** Zeros and mask of the design file, one by one, the mask numbered as in all other tables. */
+export function inputLists({ specification, mask }: DesignReport): readonly Table[] {
   const unit = unitOf(specification.band);
   return [
-    factTable(design, source, unit),
     ...(specification.transmissionZeros.length === 0 ? [] : [zeroTable(specification, unit)]),
     ...(mask.length === 0 ? [] : [maskTable(mask, unit)]),
   ];

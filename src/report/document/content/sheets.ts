@@ -4,7 +4,7 @@ import { unitOf } from '../../words/numbers.js';
 import { type Block, type Sheet, type Stack, tableBlock } from './content.js';
 import { assumptionBlock, certificateTable, conventionBlock, powerBlock, remarkBlocks } from './evidence.js';
 import { couplingTable, portTable, resonatorTable, SIGN_SENTENCE } from './hand-over.js';
-import { inputTables } from './inputs.js';
+import { inputLists, inputTable } from './inputs.js';
 import { maskPointTable } from './mask-points.js';
 import { matrixTables } from './matrix-tables.js';
 import { coefficientTable, rootTable } from './polynomials.js';
@@ -62,6 +62,7 @@ function handOverSheet(design: DesignReport): Sheet {
 }
 
 function evidenceSheet(design: DesignReport, source?: DesignSource): Sheet {
+  const remarks = remarkBlocks(design);
   return {
     id: 'evidence',
     head: 'Evidence',
@@ -70,7 +71,9 @@ function evidenceSheet(design: DesignReport, source?: DesignSource): Sheet {
       stack('half', conventionBlock(), assumptionBlock(design), powerBlock()),
       stack('half', tableBlock(rootTable(design))),
       stack('half', tableBlock(coefficientTable(design))),
-      stack('wide', ...inputTables(design, source).map(tableBlock), ...remarkBlocks(design)),
+      stack('wide', tableBlock(inputTable(design, source))),
+      ...inputLists(design).map((table) => stack('half', tableBlock(table))),
+      ...(remarks.length === 0 ? [] : [stack('wide', ...remarks)]),
     ],
   };
 }

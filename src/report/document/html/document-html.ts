@@ -9,7 +9,7 @@ import { windowTitle } from '../content/title.js';
 import { READOUT_SCRIPT } from '../script/readout-script.js';
 import { DOCUMENT_STYLE } from '../style/document-style.js';
 import { figureMarkup } from './figure-html.js';
-import { firstPage, titleStrip } from './first-page.js';
+import { firstPage, runningHead, titleStrip } from './first-page.js';
 import { jsonNumbers } from './json-numbers.js';
 import { POLICY } from './policy.js';
 import { type FigureOf, sheetMarkup } from './sheet-html.js';
@@ -84,7 +84,7 @@ export function documentHtml(design: DesignReport, source: DesignSource | undefi
       {},
       firstPage(design, figureOf('response')),
       linksTo(sheets),
-      ...sheets.map((sheet) => sheetMarkup(sheet, figureOf)),
+      ...sheets.map((sheet) => sheetMarkup(sheet, figureOf, runningHead(design, source))),
     ),
     ...scriptParts(design, parts),
   );

@@ -51,6 +51,14 @@ export function titleStrip(
   );
 }
 
+/** Name and the facts that tell one issue from another, at the head of every printed sheet after the first. */
+export function runningHead(design: DesignReport, source: DesignSource | undefined): Markup {
+  const plain = (text: string): string => text;
+  const cells = titleCells(design, source).flatMap(({ head, value }) => [`${DOT}${head} `, cellMarkup(value, plain)]);
+  const name = cellMarkup(nameOf(design.specification), plain);
+  return element('p', { class: 'running', 'aria-hidden': 'true' }, name, ...cells);
+}
+
 /** The verdict: the answer, what is tightest, and the conditions under which it holds. */
 function verdictMarkup({ specification, mask }: DesignReport): Markup {
   const verdict = pageVerdict(mask, unitOf(specification.band));

@@ -7,6 +7,8 @@ import { clearanceStrip, stripHead } from './strip.js';
 import { numberSigns, sentenceSigns, spanSigns } from './typography.js';
 
 const NO_BREAK = '\u00a0';
+/** As wide as a figure, so that names stand under each other. */
+const FIGURE_BLANK = '\u2007';
 
 /** Roles are written out: a row that the style lays out in two lines would lose them. */
 function cell(cssClass: string, ...children: readonly Child[]): Markup {
@@ -33,15 +35,16 @@ function rowMarkup(
   const name = element('span', { class: isRepeated ? 'again' : undefined }, requirementName(requirement));
   const classes = [isWorst ? 'tightest' : '', isMet ? '' : 'short', isExtra ? 'on-screen' : ''];
   const all = classes.filter((word) => word !== '').join(' ');
-  const share = shareText(requirement);
+  // A miss says its share in the strip.
+  const share = isMet ? shareText(requirement) : '';
   return element(
     'tr',
     { role: 'row', class: all === '' ? undefined : all },
     element(
       'th',
       { scope: 'row', role: 'rowheader' },
-      element('span', { class: 'count' }, String(number)),
-      ' ',
+      element('span', { class: 'count' }, String(number).padStart(2, FIGURE_BLANK)),
+      NO_BREAK,
       name,
       NO_BREAK,
       element('span', { class: 'unit' }, level),

@@ -39,12 +39,13 @@ function stackMarkup({ shape, blocks }: Stack, figureOf: FigureOf): readonly Mar
   return inner.length === 0 ? [] : [element('div', { class: shape }, ...inner)];
 }
 
-/** One sheet after the first. */
-export function sheetMarkup({ id, head, stacks }: Sheet, figureOf: FigureOf): Markup {
+/** One sheet after the first; `running` says on paper whose sheet it is. */
+export function sheetMarkup({ id, head, stacks }: Sheet, figureOf: FigureOf, running: Markup): Markup {
   const headId = `${id}-head`;
   return element(
     'section',
     { id, class: 'sheet', 'aria-labelledby': headId },
+    running,
     element('h2', { id: headId }, head),
     element('div', { class: 'pair' }, ...stacks.flatMap((stack) => stackMarkup(stack, figureOf))),
   );

@@ -4,7 +4,7 @@ import { label } from '../../svg/words.js';
 import type { Requirement } from '../../words/requirement.js';
 
 const WIDTH = 124;
-const HEIGHT = 22;
+const HEIGHT = 18;
 const MIDDLE = HEIGHT / 2;
 /** Where the wall stands: forbidden to its left. */
 const WALL = 26;
@@ -13,8 +13,8 @@ const SCALE = 2.3;
 const TICKS: readonly number[] = [10, 20, 30, 40];
 const END = WALL + SCALE * 40;
 /** Between two rules of a table an octagon must be larger than in a chart to be told from a dot. */
-const OCTAGON = { scale: 1.4, half: 9 } as const;
-const HATCH = 'M0 18L16 2M-4 12L6 2M5 20L23 2M12 20L26 6M19 20L26 13';
+const OCTAGON = { scale: 1.3, half: 9 } as const;
+const HATCH = 'M0 15L12 3M-4 11L4 3M4 15L16 3M10 15L22 3M16 15L26 5M22 15L26 11';
 
 function svg(height: number, ...parts: readonly Markup[]): Markup {
   const attributes = {
@@ -47,7 +47,7 @@ function missMarks({ share, lack }: Requirement): readonly Markup[] {
 
 function roomMarks({ share }: Requirement): readonly Markup[] {
   const x = Math.min(Math.max(WALL + 100 * SCALE * share, WALL), END + 3);
-  const ticks = TICKS.map((tick) => `M${(WALL + SCALE * tick).toFixed(1)} 15v3`).join('');
+  const ticks = TICKS.map((tick) => `M${(WALL + SCALE * tick).toFixed(1)} 12v3`).join('');
   return [
     element('path', { d: ticks, class: 'line hair s-second' }),
     element('line', { x1: WALL, x2: x, y1: MIDDLE, y2: MIDDLE, class: 'line thick s-ink' }),
@@ -63,7 +63,7 @@ export function clearanceStrip(requirement: Requirement): Markup {
   return svg(
     HEIGHT,
     element('path', { d: HATCH, class: 'line hair half s-hatch' }),
-    element('path', { d: `M${WALL} 2v18`, class: 'line edge s-ink' }),
+    element('path', { d: `M${WALL} 2v14`, class: 'line edge s-ink' }),
     ...(requirement.isMet ? roomMarks(requirement) : missMarks(requirement)),
   );
 }

@@ -1,6 +1,6 @@
 import type { Picture } from '../../svg/drawing.js';
 import type { Block, Cell, Column, Row, Sheet, Table } from '../content/content.js';
-import { escapeOwn, escapeUser } from './escape.js';
+import { escapeOwn, escapeUser, lineStart } from './escape.js';
 
 /** Gives a picture by its name; undefined where there is none. */
 export type PictureOf = (name: string) => Picture | undefined;
@@ -47,10 +47,10 @@ function blockLines(block: Block, pictureOf: PictureOf): readonly string[] {
       return tableLines(block.table);
     case 'text': {
       const head = block.head === undefined ? [] : [`**${escapeOwn(block.head)}**`, ''];
-      return [...head, ...block.sentences.flatMap((sentence) => [cellText(sentence), ''])];
+      return [...head, ...block.sentences.flatMap((sentence) => [lineStart(cellText(sentence)), ''])];
     }
     case 'list':
-      return [`**${escapeOwn(block.head)}**`, '', ...block.items.map((item) => `- ${cellText(item)}`), ''];
+      return [`**${escapeOwn(block.head)}**`, '', ...block.items.map((item) => `- ${lineStart(cellText(item))}`), ''];
   }
 }
 

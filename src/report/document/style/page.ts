@@ -17,7 +17,7 @@ h2{font-size:25px}
 h3{font-size:16px;font-weight:700;line-height:1.3;text-wrap:balance}
 a{color:var(--transmission)}
 :focus-visible{outline:3px solid var(--transmission);outline-offset:2px}
-[hidden]{display:none}
+[hidden],.running{display:none}
 .skip{position:absolute;left:-999em}
 .skip:focus{left:36px;top:6px;background:var(--paper);padding:4px 8px}
 .unseen{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%);white-space:nowrap}

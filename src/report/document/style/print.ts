@@ -1,10 +1,15 @@
 /** Print on A4 and letter: the first page holds ten requirements and the response; nothing breaks that can be kept whole. */
 export const PRINT_RULES: string = `
-@page{margin:13mm 12mm;@bottom-left{content:'irisloom design sheet';font:7pt sans-serif}@bottom-right{content:counter(page) ' of ' counter(pages);font:7pt sans-serif}}
+@page{margin:13mm 12mm;@bottom-left{content:'irisloom';font:7pt sans-serif}@bottom-right{content:counter(page) ' of ' counter(pages);font:7pt sans-serif}}
 @media print{
 body{padding:0;max-width:none;font-size:8.5pt;line-height:1.4;background:none}
 .skip,nav,label,.readout,.on-screen,summary{display:none}
-.on-paper{display:block}
+.count{font-size:7.5pt}
+.limits .note,.limits .on-paper{display:inline;margin-right:1em}
+.limits .on-screen{display:none}
+.running{display:block;float:right;max-width:70%;font-size:7pt;line-height:14pt;color:var(--second);
+overflow:hidden;white-space:nowrap;text-overflow:ellipsis}
+#mask-points tbody th{white-space:nowrap}
 details caption{font-size:9pt;padding-bottom:6px}
 h1{font-size:25pt;line-height:1.08}
 h2{font-size:14pt;break-after:avoid}
@@ -46,7 +51,7 @@ th,td{padding:.9mm 0 .9mm 2mm}
 .pair>.wide{grid-column:1/-1}
 .pair>.tall{grid-row:span 2}
 #evidence .pair>:nth-child(-n+2){grid-column:1/-1}
-#evidence .pair>:nth-child(2){grid-template-columns:repeat(3,minmax(0,1fr))}
+#evidence .pair>:nth-child(2){order:-1;grid-template-columns:repeat(3,minmax(0,1fr))}
 figure,table,.text,dl,.verdict,.signatures,tr{break-inside:avoid}
 thead{display:table-header-group}
 .scroll{overflow:visible}

@@ -16,7 +16,7 @@ tr.tightest :is(th,td){font-weight:700}
 tr.negative :is(th,td){font-weight:700;color:var(--negative)}
 tr.short :is(th,td){color:var(--short);font-weight:700}
 .again,.count{color:var(--second)}
-.count{display:inline-block;min-width:1.3em;font-weight:400}
+.count{font-size:13px;font-weight:400}
 .on-paper{display:none}
 .tightest .again,.short .again,.short .count{color:inherit}
 .note{font-size:14px;color:var(--second);margin-top:6px;max-width:68ch}
@@ -43,6 +43,9 @@ tr.short :is(th,td){color:var(--short);font-weight:700}
 summary{cursor:pointer;font-weight:700;padding:4px 0;width:fit-content}
 details caption{font-size:0;padding:0}
 @media (min-width:700px){#requirements :is(th,td):not(:first-child){padding-left:12px}}
+@media (min-width:1060px){#requirements{font-size:14.5px}
+#requirements :is(th,td):not(:first-child){padding-left:8px}
+#requirements .share{width:132px}}
 @media (max-width:699px){
 #requirements{display:block}
 #requirements thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
