@@ -3,8 +3,8 @@ import { element, type Markup } from './markup.js';
 /** Where a text stands against its point. */
 export type Anchor = 'start' | 'mid' | 'end';
 
-const NARROW_LETTERS = new Set("ijltfrI.,:;'|!()[] −-");
-const WIDE_LETTERS = new Set('mwMW@%≥≤');
+const NARROW_LETTERS = new Set("ijltfrI.,:;'|!()[] -");
+const WIDE_LETTERS = new Set('mwMW@%≥≤→←');
 
 /** Width of a text at a font size, pixels, on the safe side: widths differ between systems by up to 12 %. */
 export function textWidth(text: string, size: number, isBold = false): number {

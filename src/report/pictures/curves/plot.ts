@@ -119,7 +119,7 @@ function levelTexts(ticks: readonly number[]): readonly string[] {
 
 /** Room that the numbers of a level axis need at its left, pixels. */
 export function axisRoom(ticks: readonly number[]): number {
-  return Math.max(...levelTexts(ticks).map((text) => textWidth(text, 12.5))) + 8;
+  return Math.max(...levelTexts(ticks).map((text) => textWidth(text, 12.5))) + 9;
 }
 
 /** Horizontal hairlines with their numbers at the left, and the unit alone above the topmost. */
