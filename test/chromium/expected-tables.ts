@@ -94,7 +94,7 @@ function ports({ handOver, matrix }: Design): ExpectedTable {
 
 function matrix({ matrix: { order, values } }: Design): ExpectedTable {
   const names = ['S', ...Array.from({ length: order }, (_, n) => String(n + 1)), 'L'];
-  return values.map((row, n) => [names[n], ...row.map((value) => (value === 0 ? '0' : number(value, 4)))]);
+  return values.map((row, n) => [names[n], ...row.map((value) => (value === 0 ? '·' : number(value, 4)))]);
 }
 
 function certificates({ certificates: all }: Design): ExpectedTable {
@@ -131,6 +131,24 @@ function coefficients({ coefficients: { e, f, p, epsilon, epsilonR } }: Design):
   ];
 }
 
+/** Zeros of fixtures all lie on the axis. */
+function inputZeros({ specification: { transmissionZeros, band } }: Design): ExpectedTable {
+  return transmissionZeros.map(({ im }, n) => {
+    const x = (im * band.bandwidthHz) / band.centerHz / 2;
+    const hertz = band.centerHz * (x + Math.sqrt(1 + x * x));
+    return [String(n + 1), '0', number(im, 0), number(hertz / MEGA, 3)];
+  });
+}
+
+function inputMask({ mask }: Design): ExpectedTable {
+  return mask.map((row, n) => {
+    const [scale] = scaleOf(row);
+    const { fromHz, toHz } = row.line;
+    const limit = number(row.limit * scale, 0);
+    return [String(n + 1), undefined, megahertz(fromHz), megahertz(toHz), limit, 'absolute'];
+  });
+}
+
 /** Every table of numbers that a report holds, made from the result beside it. */
 export const EXPECTED_TABLES: Readonly<Record<string, (design: Design) => ExpectedTable>> = {
   requirements,
@@ -142,4 +160,6 @@ export const EXPECTED_TABLES: Readonly<Record<string, (design: Design) => Expect
   certificates,
   roots,
   coefficients,
+  'input-zeros': inputZeros,
+  'input-mask': inputMask,
 };

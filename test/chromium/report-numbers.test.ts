@@ -6,7 +6,7 @@ import { plainNumber, type ReadTable, shows, tablesOf } from './page/tables.js';
 import { FIXTURES, resultOf, useReports } from './reports.js';
 
 /** The cell without its sign of order and without the words that narrow rows carry. */
-const bare = (cell: string): string => cell.replace(/^(?:[≥≤]|predicted|clear by|short)\s*/, '');
+const bare = (cell: string): string => cell.replace(/^(?:[≥≤]|predicted|clear by|short by|over by)\s*/, '');
 
 const decimalsOf = (cell: string): number => (plainNumber(cell).split('.')[1] ?? '').length;
 

@@ -31,7 +31,7 @@ async function tabOrder(page: Page): Promise<readonly string[]> {
 
 const CHARTS = ['response', 'band', 'group-delay'];
 
-/** What a reserved line says: frequency, and for each set of curves S21, S11 and delay. */
+/** What a reserved line says: frequency, and for each set of curves loss, return loss and delay. */
 interface Reading {
   readonly frequency: string;
   readonly sets: readonly (readonly [string, string, string])[];
@@ -40,8 +40,8 @@ interface Reading {
 async function readingOf(page: Page, name: string): Promise<Reading> {
   const parts = await page.locator(`#figure-${name}-readout b`).allTextContents();
   const text = parts.join(' ').replace(/\s+/g, ' ');
-  const sets = [...text.matchAll(/S21 (\S+) dB, S11 (\S+) dB, (\S+) ns/g)].map(
-    ([, s21 = '', s11 = '', delay = '']) => [s21, s11, delay] as const,
+  const sets = [...text.matchAll(/(?<!return )loss (\S+) dB, return loss (\S+) dB, delay (\S+) ns/g)].map(
+    ([, loss = '', match = '', delay = '']) => [loss, match, delay] as const,
   );
   return { frequency: /^([\d.]+) MHz/.exec(text)?.[1] ?? '', sets };
 }
@@ -52,7 +52,7 @@ function computed({ matrix, specification }: Design, hertz: number, isLossless: 
   const lossy = isLossless || unloadedQ === undefined ? band : { ...band, unloadedQ };
   const { s21, s11, groupDelaySeconds } = sweepHz(matrix, lossy, [hertz]);
   const decibels = (re: Float64Array, im: Float64Array): number =>
-    20 * Math.log10(Math.hypot(re[0] as number, im[0] as number));
+    -20 * Math.log10(Math.hypot(re[0] as number, im[0] as number));
   return [decibels(s21.re, s21.im), decibels(s11.re, s11.im), (groupDelaySeconds[0] as number) * 1e9];
 }
 

@@ -7,8 +7,7 @@ body{padding:0;max-width:none;font-size:8.5pt;line-height:1.4;background:none}
 .count{font-size:7.5pt}
 .limits .note,.limits .on-paper{display:inline;margin-right:1em}
 .limits .on-screen{display:none}
-.running{display:block;float:right;max-width:70%;font-size:7pt;line-height:14pt;color:var(--second);
-overflow:hidden;white-space:nowrap;text-overflow:ellipsis}
+.running{display:block;font-size:7pt;margin-bottom:1mm;text-align:right;color:var(--second)}
 #mask-points tbody th{white-space:nowrap}
 details caption{font-size:9pt;padding-bottom:6px}
 h1{font-size:25pt;line-height:1.08}
@@ -20,15 +19,15 @@ h3,caption{font-size:9pt;break-after:avoid}
 .facts,.emblem,.cells{margin-top:2mm}
 .cells div{padding:1mm 1.6mm}
 dd{font-size:8pt}
-.verdict{padding:3mm 0 2mm}
-.verdict.short{margin:3mm 0 2mm;padding-block:0}
+.verdict{padding:2mm 0 1.5mm}
+.verdict.short{margin:2mm 0 1.5mm;padding-block:0}
 .verdict h2{font-size:18pt}
 .nearest{font-size:10.5pt;margin-top:1mm}
 .conditions{margin-top:1mm}
 .note{max-width:none}
 table,thead th{font-size:8.5pt}
 th,td{padding:.9mm 0 .9mm 2mm}
-#requirements :is(th,td){padding-block:.4mm}
+#requirements :is(th,td){padding-block:.3mm}
 #requirements .strip{width:28mm;height:auto}
 .half table{font-size:8pt}
 .half :is(th,td):not(:first-child){padding-left:1.3mm}
@@ -37,14 +36,14 @@ th,td{padding:.9mm 0 .9mm 2mm}
 .unit,#requirements thead .share .unit{font-size:7.5pt}
 .answer{display:grid;grid-template:auto auto/122mm minmax(0,1fr);gap:0 7mm}
 .answer .limits{grid-column:1/-1}
-.answer figure{grid-area:2/1/3/3;margin-top:3mm}
+.answer figure{grid-area:2/1/3/3;margin-top:2mm}
 .answer .wide{width:122mm}
 .answer .signatures{grid-area:2/2;align-self:end;flex-direction:column;gap:9mm;margin:0 0 6mm}
 .signatures p{flex-direction:row;gap:3mm}
 .signatures span{flex:3 1 0}
 .signatures span+span{flex:2 1 0}
 .first{break-after:page}
-.sheet{margin-top:0;padding-top:3mm}
+.sheet{margin-top:0;padding-top:1.5mm}
 .sheet+.sheet{margin-top:8mm}
 .pair{grid-template-columns:minmax(0,1fr) minmax(0,1fr);gap:6mm 7mm;margin-top:3mm}
 .pair>div{gap:6mm}
