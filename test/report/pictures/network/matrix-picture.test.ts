@@ -52,12 +52,11 @@ describe('matrix picture', () => {
     expect(matrixPicture(weak).caption).toContain('too weak to draw size and sign, which the table holds');
   });
 
-  it('numbers and row names keep apart by at least the width of a space, true minus and bold digits taken as wide as they are', () => {
+  it('numbers and row names keep apart by at least the width of a space', () => {
     for (const { name, matrix } of [...[2, 5, 8, 10, 12].flatMap(foldedDesigns), ...otherDesigns()]) {
       for (const format of ['wide', 'narrow'] as const) {
         const { entries, nameEnd } = matrixLayout(matrix, format);
-        const half = ({ text, isNegative }: (typeof entries)[number]): number =>
-          textWidth(text.replace('−', '+'), 11, isNegative) / 2;
+        const half = ({ text, isNegative }: (typeof entries)[number]): number => textWidth(text, 11, isNegative) / 2;
         for (const each of entries) {
           expect(each.x - half(each) - nameEnd, name).toBeGreaterThanOrEqual(4);
           for (const other of entries)

@@ -64,8 +64,7 @@ const PRINTED = 5e-5;
 /** Room between two numbers, or a number and a mark or a name, px. */
 const CLEAR = 5;
 
-/** Letters of bold digits and of the true minus are wider than the rest of their font lets one expect. */
-const numberWidth = (text: string, isBold: boolean): number => textWidth(text.replace('−', '+'), NUMBER_SIZE, isBold);
+const halfWidth = ({ text, isNegative }: Entry): number => textWidth(text, NUMBER_SIZE, isNegative) / 2;
 
 /** Signed, leading zero dropped. */
 export function entryText(value: number, digits: number): string {
@@ -125,13 +124,12 @@ function entriesOf({ values }: CouplingMatrix, at: (thread: number) => number, d
 
 /** Does a number keep clear of its neighbors in the row, of the mark on the diagonal and of the name of the row? */
 function isFree(entry: Entry, others: readonly Entry[], diagonal: Knot | undefined, nameEnd: number): boolean {
-  const halfOf = ({ text, isNegative }: Entry): number => numberWidth(text, isNegative) / 2;
-  const half = halfOf(entry);
+  const half = halfWidth(entry);
   if (entry.x - half - CLEAR < nameEnd) return false;
   if (diagonal !== undefined && entry.x + half + CLEAR > diagonal.x - diagonal.side * Math.SQRT1_2) return false;
   return others.every(
     (other) =>
-      other.row !== entry.row || other === entry || Math.abs(other.x - entry.x) >= half + halfOf(other) + CLEAR,
+      other.row !== entry.row || other === entry || Math.abs(other.x - entry.x) >= half + halfWidth(other) + CLEAR,
   );
 }
 
