@@ -1,4 +1,4 @@
-import { checkPolynomials } from '../forms/index.js';
+import { type CouplingMatrix, checkPolynomials } from '../forms/index.js';
 import { refusal } from '../numerics/index.js';
 import { checkBand } from '../specification/index.js';
 import { rowsOf } from '../topology/index.js';
@@ -58,6 +58,16 @@ export function checkDesign(design: DesignReport): DesignReport {
   checkPolynomials(design.polynomials);
   rowsOf(design.matrix);
   return design;
+}
+
+/**
+ * A matrix with rows of plain numbers, whatever kind of array they came in.
+ *
+ * @throws FilterFailure E_TYPE, E_MATRIX_SHAPE, E_NOT_FINITE, E_ENTRY_RANGE, E_NOT_SYMMETRIC, E_FINITE_ZEROS
+ */
+export function checkMatrix(matrix: CouplingMatrix): CouplingMatrix {
+  const values = rowsOf(matrix).map((row) => Array.from(row));
+  return { ...matrix, values };
 }
 
 /**

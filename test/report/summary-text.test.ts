@@ -128,3 +128,14 @@ describe('summaryText(design)', () => {
     expect(text).toContain('Remark: ');
   });
 });
+
+describe('texts of a caller', () => {
+  it('bring no escape sequence, direction mark or line break to the terminal', () => {
+    const made = sampleDesign({ name: 'x' });
+    const specification = { ...made.specification, name: 'a\u001b[2Jb\u202ec\u0007\nd', remarks: ['e\u001b]0;f'] };
+    const text = summaryText({ ...made, specification });
+    // biome-ignore lint/suspicious/noControlCharactersInRegex: what must not be there
+    expect(text).not.toMatch(/[\u0000-\u0009\u000b-\u001f\u202e]/);
+    expect(text.split('\n')[0]).toBe('a\ufffd[2Jb\ufffdc\ufffd d');
+  });
+});

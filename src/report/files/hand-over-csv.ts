@@ -1,3 +1,4 @@
+import { checkDesign } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import { csvText } from './csv.js';
 
@@ -56,7 +57,7 @@ function portRows({ specification, matrix, handOver }: DesignReport): readonly (
  * table.split('\r\n')[0]?.startsWith('kind,from,to,M,k,'); // true
  */
 export function handOverCsv(report: DesignReport): string {
-  const { specification, matrix, handOver } = report;
+  const { specification, matrix, handOver } = checkDesign(report);
   const entry = (i: number, j: number): number => matrix.values[i]?.[j] ?? 0;
   const resonators = handOver.resonators.map(({ frequencyHz }, n) => {
     const offsetHz = frequencyHz - specification.band.centerHz;

@@ -1,4 +1,5 @@
 import type { CouplingMatrix } from '../../forms/index.js';
+import { checkMatrix } from '../check-design.js';
 import { nodeNames } from '../words/nodes.js';
 import { csvText } from './csv.js';
 
@@ -9,7 +10,8 @@ import { csvText } from './csv.js';
  * const { matrix } = folded(transversal(chebyshev({ order: 2, returnLossDb: 20 })));
  * matrixCsv(matrix).split('\r\n')[0]; // 'node,S,1,2,L'
  */
-export function matrixCsv(matrix: CouplingMatrix): string {
+export function matrixCsv(given: CouplingMatrix): string {
+  const matrix = checkMatrix(given);
   const names = nodeNames(matrix.order);
   return csvText([['node', ...names], ...matrix.values.map((row, node) => [names[node] ?? '', ...row])]);
 }

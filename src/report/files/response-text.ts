@@ -1,6 +1,7 @@
 import { sweepHz } from '../../bandpass/index.js';
 import { type Band, edgesOfBand, hzFromOmega, type MaskLine } from '../../forms/index.js';
 import { formatTouchstone } from '../../measurement/index.js';
+import { checkDesign } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
 import { CONVENTIONS } from '../words/conventions.js';
 import { frequencyText, unitOf } from '../words/numbers.js';
@@ -65,7 +66,7 @@ function commentsOf({ version, specification }: DesignReport): readonly string[]
  * text.includes('# Hz S RI R 50'); // true
  */
 export function responseText(report: DesignReport): string {
-  const { band, unloadedQ } = report.specification;
+  const { band, unloadedQ } = checkDesign(report).specification;
   const lossy = unloadedQ === undefined ? band : { ...band, unloadedQ };
   const response = sweepHz(report.matrix, lossy, responseGrid(report.specification));
   return formatTouchstone({ ...response, comments: commentsOf(report) });

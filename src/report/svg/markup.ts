@@ -1,3 +1,5 @@
+import { cleanText } from '../words/clean-text.js';
+
 /** Text that is markup already; only this file makes it, and it escapes what it is given. */
 export interface Markup {
   readonly markup: string;
@@ -31,14 +33,9 @@ const ENTITIES: Readonly<Record<string, string>> = {
   "'": '&#39;',
 };
 
-/** Characters that no XML file may hold, lone surrogates among them, and those that turn the direction of a line. */
-const FORBIDDEN =
-  // biome-ignore lint/suspicious/noControlCharactersInRegex: these are the characters to be removed
-  /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f-\u009f\u200e\u200f\u2028-\u202e\u2066-\u2069\u061c\ufeff\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g;
-
 /** Plain text as it may stand between tags and in quoted attributes. */
 export function escapeMarkup(text: string): string {
-  return text.replace(FORBIDDEN, '\ufffd').replace(/[&<>"']/g, (character) => ENTITIES[character] ?? character);
+  return cleanText(text).replace(/[&<>"']/g, (character) => ENTITIES[character] ?? character);
 }
 
 /** A coordinate to a tenth of a pixel. */

@@ -1,4 +1,6 @@
+import { checkDesign } from '../check-design.js';
 import type { DesignReport } from '../design-report.js';
+import { cleanLine } from '../words/clean-text.js';
 import { CONVENTIONS, cautionsOf } from '../words/conventions.js';
 import { unitOf } from '../words/numbers.js';
 import { certificateSentence } from './certificate-text.js';
@@ -22,7 +24,7 @@ const LARGEST_MATRIX = 10;
  * text.split('\n')[0]; // 'Larkmoor'
  */
 export function summaryText(design: DesignReport, paint: Paint = PLAIN): string {
-  const { specification, matrix, handOver, mask, certificates } = design;
+  const { specification, matrix, handOver, mask, certificates } = checkDesign(design);
   const { band, remarks } = specification;
   const unit = unitOf(band);
   const isLarge = matrix.order > LARGEST_MATRIX;
@@ -33,7 +35,7 @@ export function summaryText(design: DesignReport, paint: Paint = PLAIN): string 
     handOverLines({ band, matrix, handOver, unit }, paint),
     isLarge ? ['All couplings are listed above; the whole matrix is in matrix.csv.'] : matrixTable(matrix, paint),
     certificateSentence(certificates),
-    remarks.flatMap((remark) => wrapped(`Remark: ${remark}`, 2)),
+    remarks.flatMap((remark) => wrapped(`Remark: ${cleanLine(remark)}`, 2)),
     [...CONVENTIONS.map(paint.dim), ...cautionsOf(band).flatMap((caution) => wrapped(caution, 2))],
   );
 }

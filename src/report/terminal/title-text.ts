@@ -1,4 +1,5 @@
 import type { Specification } from '../../specification/index.js';
+import { cleanLine } from '../words/clean-text.js';
 import type { FrequencyUnit } from '../words/numbers.js';
 import { bandText, familyText, levelText, qualityText, UNNAMED, zerosText } from '../words/title.js';
 import { wrapped } from './layout.js';
@@ -10,7 +11,7 @@ export function titleLines(specification: Specification, unit: FrequencyUnit, pa
   const zeros = zerosText(specification, unit);
   const edges = returnLossDb === undefined ? `${familyText(family)}, ` : '';
   return [
-    ...wrapped(name ?? UNNAMED).map(paint.strong),
+    ...wrapped(cleanLine(name ?? UNNAMED)).map(paint.strong),
     ...wrapped(bandText(band, unit)),
     ...wrapped(`Order ${order}, ${topology}, ${edges}${levelText(returnLossDb)}, ${qualityText(unloadedQ)}`),
     ...wrapped(zeros),

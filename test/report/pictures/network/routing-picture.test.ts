@@ -209,7 +209,7 @@ describe('routing picture', () => {
     const values = matrix.values.map((row) => [...row]);
     values[1]![6] = values[6]![1] = 2e-5;
     const picture = routingPicture({ order: 6, values });
-    expect(picture.caption).toContain('one weaker coupling is not drawn');
+    expect(picture.caption).toContain('one more coupling is not drawn');
     expect(classesOf(picture.wide).length).toBe(8);
   });
 

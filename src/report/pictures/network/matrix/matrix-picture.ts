@@ -1,10 +1,10 @@
 import type { CouplingMatrix } from '../../../../forms/index.js';
+import { checkMatrix } from '../../../check-design.js';
 import { type Drawing, FORMAT_WIDTH, type Picture } from '../../../svg/drawing.js';
 import { lozenge, square } from '../../../svg/marks.js';
 import { element, fragment, type Markup } from '../../../svg/markup.js';
 import { label } from '../../../svg/words.js';
 import { nodeName } from '../../../words/nodes.js';
-import { checkedHandOver } from '../routing/couplings.js';
 import { couplingText } from '../routing/label-text.js';
 import { pairName } from '../routing/routing-words.js';
 import { type Entry, type Knot, type MatrixLayout, matrixLayout } from './matrix-layout.js';
@@ -138,8 +138,8 @@ function captionOf(layouts: readonly MatrixLayout[]): string {
  * const { matrix } = folded(transversal(generalizedChebyshev({ order: 6, returnLossDb: 22, transmissionZeros: [1.45, -1.45] })));
  * matrixPicture(matrix).finding.startsWith('8 couplings: strongest S'); // true
  */
-export function matrixPicture(matrix: CouplingMatrix): Picture {
-  checkedHandOver(matrix, undefined);
+export function matrixPicture(given: CouplingMatrix): Picture {
+  const matrix = checkMatrix(given);
   const wide = matrixLayout(matrix, 'wide');
   const narrow = matrixLayout(matrix, 'narrow');
   const finding = findingOf(matrix);

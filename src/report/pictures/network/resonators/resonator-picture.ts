@@ -1,4 +1,6 @@
 import type { Band, CouplingMatrix } from '../../../../forms/index.js';
+import { checkBand } from '../../../../specification/index.js';
+import { checkMatrix } from '../../../check-design.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../../svg/drawing.js';
 import { lozenge, square } from '../../../svg/marks.js';
 import { element, fragment, type Markup } from '../../../svg/markup.js';
@@ -62,8 +64,9 @@ function drawing(layout: ResonatorLayout, network: Network, band: Band, format: 
  * const picture = resonatorPicture(matrix, { centerHz: 2537e6, bandwidthHz: 42e6 });
  * picture.finding.startsWith('Resonator 3 lies farthest off the center'); // true
  */
-export function resonatorPicture(matrix: CouplingMatrix, band: Band): Picture {
-  const handOver = checkedHandOver(matrix, band);
+export function resonatorPicture(given: CouplingMatrix, band: Band): Picture {
+  const matrix = checkMatrix(given);
+  const handOver = checkedHandOver(matrix, checkBand(band));
   const network = networkOf(matrix);
   const wide = resonatorLayout(network, handOver, band, 'wide');
   const narrow = resonatorLayout(network, handOver, band, 'narrow');

@@ -1,5 +1,6 @@
 import { denormalize, type HandOver } from '../../../../bandpass/index.js';
 import type { Band, CouplingMatrix } from '../../../../forms/index.js';
+import { checkBand } from '../../../../specification/index.js';
 
 /** A coupling that is drawn: from < to. */
 export interface Link {
@@ -16,6 +17,8 @@ export interface Network {
   /** Every resonator hangs between both ports and touches no other one. */
   readonly isFan: boolean;
   readonly links: readonly Link[];
+  /** All cross couplings, those of a crowd that are not drawn among them. */
+  readonly cross: readonly Link[];
   /** M_ii of the resonators 1..N. */
   readonly detuning: readonly number[];
   /** Couplings that print as zero, and weak ones of a crowd: not drawn, but counted. */
@@ -36,7 +39,7 @@ const ROUNDING = 1e-9;
 
 /** Checks matrix and band by what hands numbers over, and gives those numbers. */
 export function checkedHandOver(matrix: CouplingMatrix, band: Band | undefined): HandOver {
-  return denormalize(matrix, band ?? NO_BAND);
+  return denormalize(matrix, band === undefined ? NO_BAND : checkBand(band));
 }
 
 /** Smallest size that is drawn: what prints as zero is not, unless all of the matrix is about that small. */
@@ -63,13 +66,15 @@ export function networkOf(matrix: CouplingMatrix): Network {
   const visible = pairs.filter(({ value }) => Math.abs(value) >= smallest);
   const fan = hangsBetweenPorts(order, visible);
   const links = visible.map((pair) => ({ ...pair, isMain: fan ? !isDirect(pair, order) : pair.to === pair.from + 1 }));
-  const sizes = links.filter(({ isMain }) => !isMain).map(({ value }) => Math.abs(value));
-  const limit = sizes.sort((a, b) => b - a)[MOST_CROSS] ?? 0;
-  const drawn = links.filter(({ value, isMain }) => isMain || Math.abs(value) > limit);
+  const cross = links.filter(({ isMain }) => !isMain);
+  // Of equals the first are drawn.
+  const kept = new Set([...cross].sort((a, b) => Math.abs(b.value) - Math.abs(a.value)).slice(0, MOST_CROSS));
+  const drawn = links.filter((link) => link.isMain || kept.has(link));
   return {
     order,
     isFan: fan,
     links: drawn,
+    cross,
     detuning: values.slice(1, order + 1).map((row, n) => row[n + 1] as number),
     hidden: pairs.length - drawn.length,
   };

@@ -1,8 +1,9 @@
 import type { CouplingMatrix } from '../../../../forms/index.js';
+import { checkMatrix } from '../../../check-design.js';
 import type { Drawing } from '../../../svg/drawing.js';
 import { cascade } from './cascade.js';
 import { chainRow } from './chain.js';
-import { checkedHandOver, type Network, networkOf } from './couplings.js';
+import { type Network, networkOf } from './couplings.js';
 import { drawn } from './draw.js';
 import { fan } from './fan.js';
 import { foldedRows } from './folded.js';
@@ -41,8 +42,8 @@ function figureOf(network: Network): Skeleton {
  *
  * @throws FilterFailure E_TYPE, E_MATRIX_SHAPE, E_NOT_FINITE, E_ENTRY_RANGE, E_NOT_SYMMETRIC
  */
-export function emblem(matrix: CouplingMatrix): Drawing {
-  checkedHandOver(matrix, undefined);
+export function emblem(given: CouplingMatrix): Drawing {
+  const matrix = checkMatrix(given);
   const { order } = matrix;
   const layout = emblemLayout(networkOf(matrix));
   return { width: layout.width, height: layout.height, body: drawn(layout, order, false) };

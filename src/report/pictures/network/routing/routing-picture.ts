@@ -1,4 +1,5 @@
 import type { Band, CouplingMatrix } from '../../../../forms/index.js';
+import { checkMatrix } from '../../../check-design.js';
 import { type Drawing, FORMAT_WIDTH, type Format, type Picture } from '../../../svg/drawing.js';
 import { layoutOf } from './compose.js';
 import { checkedHandOver, networkOf } from './couplings.js';
@@ -27,7 +28,8 @@ export function routingLayout(matrix: CouplingMatrix, band: Band | undefined, fo
  * picture.finding.startsWith('Folded in two lines: one cross coupling'); // true
  * picture.wide.width; // 560
  */
-export function routingPicture(matrix: CouplingMatrix, band?: Band): Picture {
+export function routingPicture(given: CouplingMatrix, band?: Band): Picture {
+  const matrix = checkMatrix(given);
   const handOver = checkedHandOver(matrix, band);
   const network = networkOf(matrix);
   const layouts = (['wide', 'narrow'] as const).map((format) => layoutOf({ network, band, handOver, format }));

@@ -13,8 +13,7 @@ export const pairName = ({ from, to }: Pick<Link, 'from' | 'to'>, order: number)
 /** Word joiner: a line may end after a dash, but not in the name of a pair. */
 const JOINED = '\u2060';
 
-function crossWords({ order, links }: Network): string {
-  const cross = links.filter(({ isMain }) => !isMain);
+function crossWords({ order, cross }: Network): string {
   const first = cross[0];
   if (first === undefined) return 'no cross coupling';
   const negative = cross.filter(({ value }) => value < 0).length;
@@ -110,7 +109,7 @@ function omissions({ network }: Wording, layouts: readonly Layout[]): string[] {
   if (dropped > 0) words.push('numbers without room stand in the table only');
   if (network.hidden > 0)
     words.push(
-      network.hidden === 1 ? 'one weaker coupling is not drawn' : `${network.hidden} weaker couplings are not drawn`,
+      network.hidden === 1 ? 'one more coupling is not drawn' : `${network.hidden} more couplings are not drawn`,
     );
   return words;
 }
