@@ -141,10 +141,3 @@ export function askedText({ limit, slope }: Requirement, decimals = 2): string {
 export function predictedText(predicted: number, unit: string, decimals = 2): string {
   return unit === 'dB' && predicted >= 400 ? 'over 400' : fixed(predicted, decimals);
 }
-
-/** Room left, or short, in the words of the pictures. */
-export function roomText(margin: number, isMet: boolean, unit: string): string {
-  const size = Math.abs(margin);
-  const text = size >= 0.95 ? fixed(size, 1) : clearanceText(size);
-  return `${text} ${unit} ${isMet ? 'clear' : 'short'}`;
-}

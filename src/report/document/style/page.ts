@@ -59,6 +59,7 @@ nav ul{display:flex;flex-wrap:wrap;gap:4px 22px;padding:0;list-style:none}
 .answer .signatures{align-self:end;width:100%;padding-top:34px}
 .wide{grid-column:1/-1}
 .tall{grid-row:span 2}}
+@media (min-width:1320px){.answer{grid-template-columns:minmax(min-content,12fr) minmax(0,11fr)}}
 @media (max-width:639px){
 body{padding:16px 10px 32px}
 h1{font-size:34px}

@@ -7,7 +7,8 @@ body{padding:0;max-width:none;font-size:8.5pt;line-height:1.4;background:none}
 .count{font-size:7.5pt}
 .limits .note,.limits .on-paper{display:inline;margin-right:1em}
 .limits .on-screen{display:none}
-.running{display:block;font-size:7pt;margin-bottom:1mm;text-align:right;color:var(--second)}
+.running{display:block;font-size:7pt;margin-bottom:1mm;text-align:right;color:var(--second);break-after:avoid}
+.note{break-before:avoid}
 #mask-points tbody th{white-space:nowrap}
 details caption{font-size:9pt;padding-bottom:6px}
 h1{font-size:25pt;line-height:1.08}
@@ -29,6 +30,7 @@ table,thead th{font-size:8.5pt}
 th,td{padding:.9mm 0 .9mm 2mm}
 #requirements :is(th,td){padding-block:.3mm}
 #requirements .strip{width:28mm;height:auto}
+#certificates :is(th,td){padding-block:.35mm}
 .half table{font-size:8pt}
 .half :is(th,td):not(:first-child){padding-left:1.3mm}
 #couplings td{white-space:normal}

@@ -1,5 +1,8 @@
 const CODE = 'ui-monospace,Consolas,"Liberation Mono","DejaVu Sans Mono",monospace';
 
+/** Widths at which requirements stand beside the response and have no room for one line each. */
+const BESIDE = 'screen and (min-width:1060px) and (max-width:1319px)';
+
 /** Tables: words left, numbers right with equal decimals, hairlines between rows and nothing else. */
 export const TABLES: string = `
 table{border-collapse:collapse;width:100%;font-size:15px;line-height:1.35}
@@ -42,11 +45,11 @@ tr.short :is(th,td){color:var(--short);font-weight:700}
 .word{display:none}
 summary{cursor:pointer;font-weight:700;padding:4px 0;width:fit-content}
 details caption{font-size:0;padding:0}
-@media (min-width:700px){#requirements :is(th,td):not(:first-child){padding-left:12px}}
-@media (min-width:1060px){#requirements{font-size:14.5px}
+@media print,(min-width:768px) and (max-width:1059px){#requirements :is(th,td):not(:first-child){padding-left:12px}}
+@media (min-width:1320px){#requirements{font-size:14.5px}
 #requirements :is(th,td):not(:first-child){padding-left:8px}
 #requirements .share{width:132px}}
-@media (max-width:699px){
+@media screen and (max-width:767px),${BESIDE}{
 #requirements{display:block}
 #requirements thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}
 #requirements tbody{display:block;border-top:1.5px solid var(--ink)}
@@ -60,11 +63,6 @@ border-bottom:1px solid var(--hairline)}
 #requirements .predicted{grid-area:2/3}
 #requirements .share{grid-area:3/1/4/4;width:auto;display:flex;align-items:center;gap:8px}
 #requirements .word{display:inline;color:var(--second);font-weight:400}}
-@media (min-width:480px) and (max-width:699px){
-#requirements tbody tr{grid-template-columns:minmax(0,1fr) minmax(70px,auto) minmax(112px,auto) 124px}
-#requirements tbody th{grid-area:1/1/2/4}
-#requirements .room{grid-area:1/4}
-#requirements .share{grid-area:2/4}}
 @media (max-width:639px){
 th,td{padding-left:10px}
 caption{max-width:calc(100vw - 20px)}
