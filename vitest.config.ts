@@ -8,6 +8,7 @@ export default defineConfig({
     include: ['test/**/*.test.ts'],
     exclude: ['test/evidence/**'],
     testTimeout: 60_000,
+    hookTimeout: 60_000,
     reporters: report === undefined ? ['default'] : ['default', 'json'],
     ...(report === undefined ? {} : { outputFile: { json: report } }),
     coverage: { provider: 'v8', include: ['src/**/*.ts'], exclude: ['src/**/index.ts'] },

@@ -139,3 +139,11 @@ describe('texts of a caller', () => {
     expect(text.split('\n')[0]).toBe('a\ufffd[2Jb\ufffdc\ufffd d');
   });
 });
+
+describe('delays of a narrow band', () => {
+  it('have a unit of their size in the ports table too', () => {
+    const text = summaryText(sampleDesign({ passband: { centerHz: '450 kHz', bandwidthHz: '5 kHz' } }));
+    expect(text).toContain('reflected delay, µs');
+    expect(text).toMatch(/^source +1 +[\d.]+ +(?:[1-9]\d{1,2})\.\d{3} /m);
+  });
+});

@@ -47,12 +47,16 @@ function couplingLines(parts: HandOverParts): readonly string[] {
 
 /** A row for each coupling of a port; the delay is told where a port has one coupling only. */
 function portRows(port: 'source' | 'load', parts: HandOverParts): readonly (readonly string[])[] {
-  const { handOver, matrix } = parts;
+  const { handOver, matrix, unit } = parts;
   const node = port === 'source' ? 0 : matrix.order + 1;
   const [quality, delay] = [handOver.externalQ[port], handOver.reflectedDelaySeconds[port]];
   if (quality !== null && delay !== null) {
     const resonator = (matrix.values[node] ?? []).findIndex((m, n) => m !== 0 && n > 0 && n <= matrix.order);
-    const values = [figures(quality, Q_FIGURES), fixed(delay * 1e9, 3), entry(parts, node, resonator)];
+    const values = [
+      figures(quality, Q_FIGURES),
+      fixed(delay / unit.delay.seconds, unit.delay.digits),
+      entry(parts, node, resonator),
+    ];
     return [[port, String(resonator), ...values]];
   }
   const own = handOver.portCouplings.filter((each) => each.port === port);
@@ -68,7 +72,7 @@ function portLines(parts: HandOverParts): readonly string[] {
   const rows = (['source', 'load'] as const).flatMap((port) => portRows(port, parts));
   const directRow = direct === 0 ? [] : [['direct', 'S-L', '', '', signed(direct, M_DIGITS)]];
   const lines = table(
-    [['port', 'resonator', 'external Q', 'reflected delay, ns', 'M'], ...rows, ...directRow],
+    [['port', 'resonator', 'external Q', `reflected delay, ${parts.unit.delay.name}`, 'M'], ...rows, ...directRow],
     'lrrrr',
   );
   return portCouplings.length === 0 ? lines : [...lines, SEVERAL];
