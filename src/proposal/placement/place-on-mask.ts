@@ -1,0 +1,128 @@
+import { EPS, refusal } from '../../numerics/index.js';
+import { type Bounded, type NodeBounds, placeBounded, pullOf } from './bounded.js';
+import { lobeGradients, spreadOf } from './equalize.js';
+import type { LineProblem } from './lobes.js';
+import { type Coordinate, type MaskPiece, PAIRS, SINGLE, segmentsOf, sideOf } from './mask-pieces.js';
+import { lobeWeights } from './multipliers.js';
+import { kappaOf } from './rejection-level.js';
+import { upperEnvelope } from './segments.js';
+import type { ActiveMargin, ZeroPlacement } from './zero-placement.js';
+
+/** A checked request. */
+export interface PlacementRequest {
+  readonly order: number;
+  readonly zeroCount: number;
+  readonly returnLossDb: number;
+  readonly pieces: readonly MaskPiece[];
+  readonly symmetric: boolean;
+  readonly closestZero?: number | undefined;
+  readonly zerosAbove?: number | undefined;
+  readonly offsets?: readonly number[] | undefined;
+}
+
+/** Zeros farther out than this are not told from infinity: at 1e4 band widths S21 differs by less than 1e-3 dB. */
+const FARTHEST = 1e4;
+
+/** Widest enclosure that is let out, dB. */
+const WIDEST_ENCLOSURE = 1e-6;
+
+/**
+ * The best placement with its enclosure.
+ *
+ * @throws FilterFailure E_MASK, E_NO_CONVERGENCE
+ */
+export function placeOnMask(request: PlacementRequest): ZeroPlacement {
+  const coordinate = request.symmetric ? PAIRS : SINGLE;
+  const problem = lineProblem(request, coordinate);
+  refuseFewPoints(problem, request);
+  const bounded = placeBounded(problem, boundsOf(request, coordinate));
+  const { free, nodes, lobes } = bounded;
+  const weights = lobeWeights(lobeGradients(free, nodes, lobes));
+  if (weights === undefined || !(spreadOf(lobes) <= WIDEST_ENCLOSURE) || !pinnedHold(bounded, weights))
+    throw notPlaced(request);
+  const margins = lobes.map(({ marginDb }) => marginDb);
+  // Margins are sums of one logarithm a zero: their own rounding belongs to the enclosure.
+  const rounding = 16 * EPS * (request.order + Math.max(...lobes.map(({ potential }) => 8.7 * potential)));
+  return {
+    order: request.order,
+    ...zerosOf([...nodes, ...bounded.pinned], coordinate, request.order),
+    marginDb: Math.min(...margins),
+    lowestDb: Math.min(...margins) - rounding,
+    highestDb: Math.max(...margins) + rounding,
+    active: lobes.map((lobe, i) => {
+      const piece = request.pieces.find(({ source }) => source === lobe.source) as MaskPiece;
+      const side = coordinate.pairs ? sideOf(piece) : 1;
+      return {
+        omega: side * coordinate.toOmega(lobe.at),
+        marginDb: lobe.marginDb,
+        weight: Math.max(0, weights[i] as number),
+        piece: lobe.source,
+      } satisfies ActiveMargin;
+    }),
+    pinned: bounded.pinned.filter((t) => t !== 0).map(coordinate.toOmega),
+  };
+}
+
+function lineProblem(request: PlacementRequest, coordinate: Coordinate): LineProblem {
+  const { order, zeroCount, pieces, returnLossDb, offsets } = request;
+  const share = coordinate.pairs ? 2 : 1;
+  return {
+    count: zeroCount / share,
+    field: [{ at: 0, weight: (order - zeroCount) / share }],
+    segments: upperEnvelope(segmentsOf(pieces, coordinate)),
+    kappa: kappaOf(returnLossDb),
+    ...(offsets === undefined ? {} : { offsets }),
+  };
+}
+
+/** As many zeros as isolated points stand on the points, and no margin is the best one. */
+function refuseFewPoints({ segments, count }: LineProblem, { symmetric }: PlacementRequest): void {
+  if (segments.some(({ low, high }) => low < high) || segments.length > count) return;
+  throw refusal(
+    'E_MASK',
+    'rejection',
+    `${segments.length} isolated ${segments.length === 1 ? 'frequency' : 'frequencies'}, which ${count} ${symmetric ? 'pairs of zeros' : 'zeros'} would null one by one`,
+    'a stretch, or more frequencies than zeros',
+    'give the width that drift and setting need, or fewer zeros',
+  );
+}
+
+/** Each zero between its bounds, counted from below. */
+function boundsOf(
+  { zeroCount, zerosAbove, closestZero }: PlacementRequest,
+  { fromOmega, pairs }: Coordinate,
+): NodeBounds {
+  const count = pairs ? zeroCount / 2 : zeroCount;
+  const reach = closestZero === undefined ? Number.POSITIVE_INFINITY : fromOmega(closestZero);
+  const below = zerosAbove === undefined ? undefined : zeroCount - zerosAbove;
+  const ranks = Array.from({ length: count }, (_, j) => j);
+  return {
+    low: ranks.map((j) => (below !== undefined && j >= below ? 0 : -reach)),
+    high: ranks.map((j) => (below !== undefined && j < below ? 0 : reach)),
+  };
+}
+
+/** Whether every zero on a bound is held there: the margin must not grow when it moves inside. */
+function pinnedHold(bounded: Bounded, weights: readonly number[]): boolean {
+  return bounded.pinned.every((at, n) => (bounded.sides[n] as number) * pullOf(bounded, weights, at) >= -1e-6);
+}
+
+function zerosOf(
+  places: readonly number[],
+  { toOmega, pairs }: Coordinate,
+  order: number,
+): Pick<ZeroPlacement, 'transmissionZeros' | 'atInfinity'> {
+  const finite = places.map(toOmega).filter((omega) => Math.abs(omega) <= FARTHEST);
+  const zeros = (pairs ? finite.flatMap((omega) => [omega, -omega]) : finite).sort((a, b) => a - b);
+  return { transmissionZeros: zeros, atInfinity: order - zeros.length };
+}
+
+function notPlaced({ order, zeroCount }: PlacementRequest): Error {
+  return refusal(
+    'E_NO_CONVERGENCE',
+    'rejection',
+    `no placement of ${zeroCount} zeros at order ${order} with equal lobes`,
+    `lobes within ${WIDEST_ENCLOSURE} dB of each other`,
+    'move a line of the mask slightly, or ask for another number of zeros',
+  );
+}
