@@ -23,6 +23,8 @@ export { inverseColumns } from './complex-solve.js';
 export type { Complex } from './complex-type.js';
 export type { Doubled } from './doubled.js';
 export { doubledAdd, doubledDivide, doubledDot, doubledMultiply, doubledSquareRoot } from './doubled.js';
+export type { DoubledProduct } from './doubled-product.js';
+export { doubledProduct, sumRest, timesConstant, timesLinear, timesPowerOfTwo } from './doubled-product.js';
 export type { FailureDetail } from './failure.js';
 export { FilterFailure, refusal } from './failure.js';
 export { EPS } from './limits.js';
