@@ -14,6 +14,8 @@ export interface LossyProblem {
   readonly line: LineProblem;
   readonly segments: readonly LossySegment[];
   readonly coordinate: Coordinate;
+  /** Called before every step: a chance to stop. */
+  readonly step?: () => void;
 }
 
 /** Zeros with their lossy minima and the local certificate: weights of the minima, and what a small move still promises. */
@@ -59,6 +61,7 @@ export function refineWithLoss(problem: LossyProblem, start: readonly number[]):
   let steps = 0;
   while (steps < MOST_STEPS && radius > SMALLEST_RADIUS && problem.line.count > 0) {
     steps++;
+    problem.step?.();
     const { step, smallest } = bestStep(modelAt(problem, here), radius);
     const promised = smallest - here.marginDb;
     if (promised < SETTLED_DB) break;

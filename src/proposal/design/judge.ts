@@ -1,0 +1,71 @@
+import { generalizedChebyshev } from '../../approximation/index.js';
+import { decibels, evaluateMask, type LossyBand, sweepHz } from '../../bandpass/index.js';
+import { edgesOfBand, hzFromOmega, type MaskLine, type MaskRow } from '../../forms/index.js';
+import type { BestZeros } from './best-zeros.js';
+import { lineWords, missWords } from './line-words.js';
+import type { MaskCost, ProposedDesign, SmallerDesign } from './proposal.js';
+import type { CheckedRequest } from './request.js';
+
+/** A design that meets every line, or what it misses in words. */
+export type Verdict =
+  | { readonly design: ProposedDesign; readonly misses?: undefined }
+  | { readonly misses: readonly string[]; readonly design?: undefined };
+
+/** Costs below this share are left out: a lobe that only touches. */
+const SMALLEST_WEIGHT = 1e-3;
+
+/** The real response, loss included, against every line of the mask. */
+export function judge(request: CheckedRequest, zeros: BestZeros, smaller: () => readonly SmallerDesign[]): Verdict {
+  const { band, unloadedQ, mask, returnLossDb } = request;
+  const { order, transmissionZeros, symmetric, lossless } = zeros;
+  const response = generalizedChebyshev({ order, returnLossDb, transmissionZeros });
+  const lossy: LossyBand = unloadedQ === undefined ? band : { ...band, unloadedQ };
+  const { lowerHz, upperHz } = edgesOfBand(band);
+  const whole: MaskLine = { fromHz: lowerHz, toHz: upperHz, groupDelayVariationSeconds: 0 };
+  const rows = evaluateMask(response, lossy, [...mask, whole]);
+  const judged = rows.slice(0, -1);
+  const misses = missesOf(request, judged);
+  if (misses.length > 0) return { misses };
+  const { s21 } = sweepHz(response, lossy, [band.centerHz, lowerHz, upperHz]);
+  const lossAt = (n: number): number => decibels(s21.re[n] as number, s21.im[n] as number);
+  return {
+    design: {
+      order,
+      transmissionZeros,
+      symmetric,
+      marginDb: Math.min(...judged.filter(({ line }) => 'rejectionDb' in line).map(({ margin }) => margin)),
+      lossless: { lowestDb: lossless.lowestDb, highestDb: lossless.highestDb },
+      ...(zeros.promisedDb === undefined ? {} : { promisedDb: zeros.promisedDb }),
+      mask: judged,
+      insertionLossDb: { center: lossAt(0), lowerEdge: lossAt(1), upperEdge: lossAt(2) },
+      groupDelayVariationSeconds: (rows.at(-1) as MaskRow).predicted,
+      costs: costsOf(request, zeros),
+      smaller: smaller(),
+    },
+  };
+}
+
+/** Lines that miss the wanted margin by more than the rounding of a worst point. */
+function missesOf({ margins }: CheckedRequest, rows: readonly MaskRow[]): readonly string[] {
+  return rows.flatMap(({ line, margin, limit }, index) => {
+    const missing = wantedFor(line, margins) - margin;
+    const room = 1e-9 * Math.max(Math.abs(limit), 'groupDelayVariationSeconds' in line ? 0 : 1);
+    return missing > room ? [`${lineWords(line, index)}, is missed by ${missWords(line, missing)}`] : [];
+  });
+}
+
+/** The margin wanted on a line. */
+export function wantedFor(line: MaskLine, margins: CheckedRequest['margins']): number {
+  if ('rejectionDb' in line) return margins.rejectionDb;
+  if ('returnLossDb' in line) return margins.returnLossDb;
+  if ('insertionLossDb' in line) return margins.insertionLossDb;
+  if ('insertionLossVariationDb' in line) return margins.insertionLossVariationDb;
+  return margins.groupDelayVariationSeconds;
+}
+
+function costsOf({ band }: CheckedRequest, { costs }: BestZeros): readonly MaskCost[] {
+  return costs
+    .filter(({ weight }) => weight > SMALLEST_WEIGHT)
+    .map(({ line, omega, weight }) => ({ line, hz: hzFromOmega(band, omega), weight }))
+    .sort((a, b) => b.weight - a.weight);
+}

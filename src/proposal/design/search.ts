@@ -1,0 +1,170 @@
+import { FilterFailure } from '../../numerics/index.js';
+import type { BestZeros, BestZerosTable } from './best-zeros.js';
+import { judge } from './judge.js';
+import type { MaskProblem } from './mask-problem.js';
+import type { ExcludedDesign, ProposedDesign, SmallerDesign } from './proposal.js';
+import type { CheckedRequest } from './request.js';
+
+/** How many designs are kept at the smallest order that has one, at the next, and at the one after. */
+const KEPT: readonly number[] = [3, 2, 1];
+
+/** Orders looked at beyond the first whose rejection suffices. */
+const FURTHER_ORDERS = 4;
+
+/** Counts of zeros looked at beyond the wanted number of designs. */
+const FURTHER_COUNTS = 2;
+
+/** Loss may raise the margins of a stop band: designs that miss by less than this without loss are looked at with it. */
+const RAISED_BY_LOSS_DB = 1.5;
+
+/** A zero farther out is not worth its coupling, nor one that gains less. */
+const FARTHEST_USEFUL = 6;
+const LEAST_GAIN_DB = 0.3;
+
+/** Pairs +-w are offered where they cost less. */
+const SYMMETRY_PRICE_DB = 0.1;
+
+/** Everything a search looked at. */
+export interface Found {
+  readonly designs: readonly ProposedDesign[];
+  readonly excluded: readonly ExcludedDesign[];
+}
+
+/** The smallest order whose rejection suffices with all zeros it may have; undefined when none does. */
+export function firstOrder(request: CheckedRequest, problem: MaskProblem, table: BestZerosTable): number | undefined {
+  const threshold = thresholdOf(request);
+  for (let order = 1; order <= request.largestOrder; order++)
+    if (losslessMargin(table, order, mostZeros(request, problem, order)) >= threshold) return order;
+  return undefined;
+}
+
+/** Smallest designs that meet the mask, from the first order upward. */
+export function searchFrom(first: number, request: CheckedRequest, problem: MaskProblem, table: BestZerosTable): Found {
+  const designs: ProposedDesign[] = [];
+  const excluded: ExcludedDesign[] = [];
+  let orders = 0;
+  const last = Math.min(first + FURTHER_ORDERS, request.largestOrder);
+  for (let order = first; order <= last && orders < KEPT.length; order++) {
+    const found = searchOrder(order, KEPT[orders] as number, request, problem, table);
+    designs.push(...found.designs);
+    excluded.push(...found.excluded);
+    if (found.designs.length > 0) orders++;
+  }
+  return { designs, excluded };
+}
+
+function searchOrder(
+  order: number,
+  kept: number,
+  request: CheckedRequest,
+  problem: MaskProblem,
+  table: BestZerosTable,
+): Found {
+  const designs: ProposedDesign[] = [];
+  const excluded: ExcludedDesign[] = [];
+  const most = mostZeros(request, problem, order);
+  const least = fewestZeros(order, most, thresholdOf(request), table);
+  let accepted = 0;
+  for (let count = least; count <= most && count < least + kept + FURTHER_COUNTS && accepted < kept; count++) {
+    const found = tryOne(order, count, request, problem, table);
+    if (found.designs.length > 0) accepted++;
+    designs.push(...found.designs);
+    excluded.push(...found.excluded);
+  }
+  return { designs, excluded };
+}
+
+/** One order and count: the design, with its symmetric variant where that costs little, or the reason against it. */
+function tryOne(
+  order: number,
+  zeroCount: number,
+  request: CheckedRequest,
+  problem: MaskProblem,
+  table: BestZerosTable,
+): Found {
+  const out = (reason: string): Found => ({ designs: [], excluded: [{ order, zeroCount, reason }] });
+  const zeros = attempt(() => table.best(order, zeroCount));
+  if (typeof zeros === 'string') return out(zeros);
+  const useless = uselessZero(zeros, request, table);
+  if (useless !== undefined) return out(useless);
+  const smaller = (): readonly SmallerDesign[] => smallerThan(order, zeroCount, request, problem, table);
+  const verdict = attempt(() => judge(request, zeros, smaller));
+  if (typeof verdict === 'string') return out(verdict);
+  if (verdict.design === undefined) return out(verdict.misses.join('; '));
+  const designs = [verdict.design];
+  if (zeroCount > 0 && zeroCount % 2 === 0) {
+    const pairs = attempt(() => table.best(order, zeroCount, true));
+    if (typeof pairs !== 'string' && zeros.marginDb - pairs.marginDb < SYMMETRY_PRICE_DB) {
+      const second = attempt(() => judge(request, pairs, smaller));
+      if (typeof second !== 'string' && second.design !== undefined) designs.push(second.design);
+    }
+  }
+  return { designs, excluded: [] };
+}
+
+/** Why the last zero is not worth it: too far out, or too little gained where the mask is met without it. */
+function uselessZero(zeros: BestZeros, request: CheckedRequest, table: BestZerosTable): string | undefined {
+  const { order, zeroCount, transmissionZeros, marginDb } = zeros;
+  const farthest = transmissionZeros.reduce((far, omega) => (Math.abs(omega) > Math.abs(far) ? omega : far), 0);
+  if (Math.abs(farthest) > FARTHEST_USEFUL || transmissionZeros.length < zeroCount)
+    return `a zero ${Math.abs(farthest) > FARTHEST_USEFUL ? `at omega = ${farthest.toFixed(1)}` : 'at infinity'} is of no use: farther out than ${FARTHEST_USEFUL}`;
+  if (zeroCount === 0) return undefined;
+  const before = attempt(() => table.best(order, zeroCount - 1));
+  if (typeof before === 'string' || before.marginDb < request.margins.rejectionDb) return undefined;
+  const gain = marginDb - before.marginDb;
+  if (gain >= LEAST_GAIN_DB) return undefined;
+  return `the last zero changes the margin by ${gain.toFixed(2)} dB only, and the mask is met without it`;
+}
+
+/** What one zero fewer, and one resonator fewer, would have beyond what is wanted. */
+function smallerThan(
+  order: number,
+  zeroCount: number,
+  request: CheckedRequest,
+  problem: MaskProblem,
+  table: BestZerosTable,
+): readonly SmallerDesign[] {
+  const tried = [
+    ...(zeroCount > 0 ? [[order, zeroCount - 1] as const] : []),
+    ...(order > 1 ? [[order - 1, Math.min(zeroCount, mostZeros(request, problem, order - 1))] as const] : []),
+  ];
+  return tried.flatMap(([n, count]) => {
+    const found = attempt(() => table.best(n, count));
+    if (typeof found === 'string') return [];
+    return [{ order: n, zeroCount: count, marginDb: found.marginDb - request.margins.rejectionDb }];
+  });
+}
+
+function mostZeros({ largestZeroCount }: CheckedRequest, { mostZeros: most }: MaskProblem, order: number): number {
+  return Math.max(0, Math.min(order - 2, largestZeroCount, most));
+}
+
+function thresholdOf({ sigma, margins }: CheckedRequest): number {
+  return margins.rejectionDb - (sigma > 0 ? RAISED_BY_LOSS_DB : 0);
+}
+
+/** The fewest zeros whose lossless margin reaches the threshold; the margin grows with their number. */
+function fewestZeros(order: number, most: number, threshold: number, table: BestZerosTable): number {
+  let [low, high] = [0, most];
+  while (low < high) {
+    const middle = Math.floor((low + high) / 2);
+    if (losslessMargin(table, order, middle) >= threshold) high = middle;
+    else low = middle + 1;
+  }
+  return low;
+}
+
+function losslessMargin(table: BestZerosTable, order: number, zeroCount: number): number {
+  const placed = attempt(() => table.lossless(order, zeroCount));
+  return typeof placed === 'string' ? Number.NEGATIVE_INFINITY : placed.marginDb;
+}
+
+/** A value, or the message of a refusal that concerns this one design: others go on. A stop ends everything. */
+function attempt<T extends object>(find: () => T): T | string {
+  try {
+    return find();
+  } catch (error) {
+    if (error instanceof FilterFailure && error.code !== 'E_STOPPED') return error.message;
+    throw error;
+  }
+}
