@@ -3,8 +3,17 @@
  *  Gives    FilterPolynomials: poles, reflection zeros, transmission zeros, ripple constants
  *  Refuses  E_ORDER_RANGE, E_RL_RANGE, E_ZERO_COUNT, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR, E_ZERO_RANGE
  *  Source   R. J. Cameron, General coupling matrix synthesis methods for Chebyshev filtering functions, IEEE Trans. MTT 47(4), 1999 (from memory) */
+export type { BesselRequest } from './bessel/bessel.js';
+export { bessel } from './bessel/bessel.js';
 export { butterworth } from './butterworth.js';
 export type { PolynomialCoefficients } from './coefficients.js';
 export { coefficients } from './coefficients.js';
+export type { EllipticRequest } from './elliptic/elliptic.js';
+export { elliptic } from './elliptic/elliptic.js';
 export type { GeneralizedChebyshevRequest, TransmissionZero } from './generalized-chebyshev.js';
 export { chebyshev, generalizedChebyshev } from './generalized-chebyshev.js';
+export { inlineMatrix } from './inline-matrix.js';
+export type { InverseChebyshevRequest } from './inverse-chebyshev.js';
+export { inverseChebyshev } from './inverse-chebyshev.js';
+export type { PrototypeElements, PrototypeRequest } from './prototype-elements.js';
+export { prototypeElements } from './prototype-elements.js';
