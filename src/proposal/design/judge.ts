@@ -1,7 +1,8 @@
 import { generalizedChebyshev } from '../../approximation/index.js';
 import { decibels, evaluateMask, type LossyBand, sweepHz } from '../../bandpass/index.js';
-import { edgesOfBand, hzFromOmega, type MaskLine, type MaskRow } from '../../forms/index.js';
+import { edgesOfBand, type FilterPolynomials, hzFromOmega, type MaskLine, type MaskRow } from '../../forms/index.js';
 import type { BestZeros } from './best-zeros.js';
+import { endedFarOut } from './far-ends.js';
 import { lineWords, missWords } from './line-words.js';
 import type { MaskCost, ProposedDesign, SmallerDesign } from './proposal.js';
 import type { CheckedRequest } from './request.js';
@@ -22,10 +23,22 @@ export function judge(request: CheckedRequest, zeros: BestZeros, smaller: () => 
   const lossy: LossyBand = unloadedQ === undefined ? band : { ...band, unloadedQ };
   const { lowerHz, upperHz } = edgesOfBand(band);
   const whole: MaskLine = { fromHz: lowerHz, toHz: upperHz, groupDelayVariationSeconds: 0 };
-  const rows = evaluateMask(response, lossy, [...mask, whole]);
-  const judged = rows.slice(0, -1);
-  const misses = missesOf(request, judged);
-  if (misses.length > 0) return { misses };
+  // The lines of the passband first: they are cheap, and most that exclude a design are among them.
+  const inBand = rowsOf(
+    response,
+    lossy,
+    mask.map((line) => ('rejectionDb' in line ? undefined : line)),
+  );
+  const early = missesOf(request, inBand);
+  if (early.length > 0) return { misses: early };
+  const outside = rowsOf(
+    response,
+    lossy,
+    mask.map((line) => ('rejectionDb' in line ? line : undefined)),
+  );
+  const late = missesOf(request, outside);
+  if (late.length > 0) return { misses: late };
+  const judged = mask.map((_, n) => (inBand[n] ?? outside[n]) as MaskRow);
   const { s21 } = sweepHz(response, lossy, [band.centerHz, lowerHz, upperHz]);
   const lossAt = (n: number): number => decibels(s21.re[n] as number, s21.im[n] as number);
   return {
@@ -38,16 +51,33 @@ export function judge(request: CheckedRequest, zeros: BestZeros, smaller: () => 
       ...(zeros.promisedDb === undefined ? {} : { promisedDb: zeros.promisedDb }),
       mask: judged,
       insertionLossDb: { center: lossAt(0), lowerEdge: lossAt(1), upperEdge: lossAt(2) },
-      groupDelayVariationSeconds: (rows.at(-1) as MaskRow).predicted,
+      groupDelayVariationSeconds: (evaluateMask(response, lossy, [whole])[0] as MaskRow).predicted,
       costs: costsOf(request, zeros),
       smaller: smaller(),
     },
   };
 }
 
+/** Rows of the lines that are given, at their own indexes. */
+function rowsOf(
+  response: FilterPolynomials,
+  band: LossyBand,
+  lines: readonly (MaskLine | undefined)[],
+): readonly (MaskRow | undefined)[] {
+  const kept = lines.filter((line) => line !== undefined);
+  const rows = evaluateMask(
+    response,
+    band,
+    kept.map((line) => endedFarOut(line, band, response.order)),
+  );
+  return lines.map((line) => (line === undefined ? undefined : { ...(rows[kept.indexOf(line)] as MaskRow), line }));
+}
+
 /** Lines that miss the wanted margin by more than the rounding of a worst point. */
-function missesOf({ margins }: CheckedRequest, rows: readonly MaskRow[]): readonly string[] {
-  return rows.flatMap(({ line, margin, limit }, index) => {
+function missesOf({ margins }: CheckedRequest, rows: readonly (MaskRow | undefined)[]): readonly string[] {
+  return rows.flatMap((row, index) => {
+    if (row === undefined) return [];
+    const { line, margin, limit } = row;
     const missing = wantedFor(line, margins) - margin;
     const room = 1e-9 * Math.max(Math.abs(limit), 'groupDelayVariationSeconds' in line ? 0 : 1);
     return missing > room ? [`${lineWords(line, index)}, is missed by ${missWords(line, missing)}`] : [];

@@ -10,7 +10,7 @@ import { firstOrder, searchFrom } from './search.js';
  * The smallest designs that meet a mask: order, transmission zeros, margins at every line of the real response, loss included.
  *
  * For each order and number of zeros the best placement is found with proof (`placeZeros`); the smallest order that meets the
- * rejection lines is kept with the fewest zeros and with up to two more, then the next two orders with their fewest. Pairs +-w
+ * rejection lines is kept with the fewest zeros and with more, then the next order likewise. Pairs +-w
  * are added where they cost below 0.1 dB. Zeros that gain below 0.3 dB or lie beyond |omega| = 6 are dropped, and designs that
  * miss another line of the mask (return loss, insertion loss, variations) are excluded, each with the reason in words. With an
  * unloaded Q the zeros are placed again on the lossy response, with a local certificate. Cost: some 10 ms lossless, some

@@ -5,11 +5,11 @@ import type { MaskProblem } from './mask-problem.js';
 import type { ExcludedDesign, ProposedDesign, SmallerDesign } from './proposal.js';
 import type { CheckedRequest } from './request.js';
 
-/** How many designs are kept at the smallest order that has one, at the next, and at the one after. */
-const KEPT: readonly number[] = [3, 2, 1];
+/** How many counts of zeros are kept at the smallest order that has a design, and at the next one that has. */
+const KEPT: readonly number[] = [2, 2];
 
 /** Orders looked at beyond the first whose rejection suffices. */
-const FURTHER_ORDERS = 4;
+const FURTHER_ORDERS = 3;
 
 /** Counts of zeros looked at beyond the wanted number of designs. */
 const FURTHER_COUNTS = 2;
@@ -49,6 +49,8 @@ export function searchFrom(first: number, request: CheckedRequest, problem: Mask
     designs.push(...found.designs);
     excluded.push(...found.excluded);
     if (found.designs.length > 0) orders++;
+    // Loss and delay grow with the order: what the next one misses, later ones miss by more.
+    else if (designs.length > 0) break;
   }
   return { designs, excluded };
 }
