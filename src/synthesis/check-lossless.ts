@@ -53,7 +53,7 @@ function refuseUnpaired(index: number, gap: number, limit: number): never {
   throw refusal(
     'E_NOT_RECIPROCAL',
     `polynomials.transmissionZeros[${index}]`,
-    Number.isFinite(gap) ? `its mirror image missed by ${gap.toPrecision(3)}` : 'no mirror image -conj z',
+    Number.isFinite(gap) ? `a mirror image off by ${gap.toPrecision(3)}` : 'no mirror image -conj z',
     `a distance of ${limit.toPrecision(3)}`,
     'list zeros off the axis in pairs z, -conj z',
   );
@@ -78,16 +78,16 @@ function checkConstants({ order, reflectionZeros, transmissionZeros, epsilon, ep
   const transmitted = transmissionZeros.length < order ? 0 : 1 / epsilon;
   const defect = Math.abs(reflected * reflected + transmitted * transmitted - 1);
   if (defect <= LARGEST_DEFECT) return;
-  refuseDefect('at infinite frequency', defect);
+  refuseDefect('infinite frequency', defect);
 }
 
 function refuseDefect(place: string, defect: number): never {
   throw refusal(
     'E_NOT_LOSSLESS',
     'polynomials',
-    `power off by ${defect.toPrecision(3)} ${place}`,
+    `a power balance off by ${defect.toPrecision(3)}`,
     LARGEST_DEFECT,
-    'the roots of E must fit F, P, epsilon and epsilonR',
+    `it is so at ${place}; the roots of E must fit F, P, epsilon and epsilonR`,
   );
 }
 
@@ -101,13 +101,13 @@ function checkPower(polynomials: FilterPolynomials): void {
   }
   if (worst <= LARGEST_DEFECT) return;
   const unit = ROUNDING_UNITS * EPS * spread(polynomials, place);
-  if (!(worst <= unit)) refuseDefect(`at omega = ${place.toPrecision(6)}`, worst);
+  if (!(worst <= unit)) refuseDefect(`omega = ${place.toPrecision(6)}`, worst);
   throw refusal(
     'E_ILL_CONDITIONED',
     'polynomials',
-    `power off by ${worst.toPrecision(3)} at omega = ${place.toPrecision(6)}, which is rounding of the roots`,
+    `a power balance off by ${worst.toPrecision(3)}`,
     LARGEST_DEFECT,
-    'move the poles there further from the axis',
+    `it is rounding of the roots next to omega = ${place.toPrecision(6)}; move the poles there further from the axis`,
   );
 }
 
@@ -126,7 +126,7 @@ export function checkConditioned({ poles }: FilterPolynomials): void {
   throw refusal(
     'E_ILL_CONDITIONED',
     `polynomials.poles[${effects.indexOf(worst)}]`,
-    `a pole whose rounding moves S by ${worst.toPrecision(3)}`,
+    `rounding that moves S by ${worst.toPrecision(3)}`,
     LARGEST_ROUNDING,
     'move it further from the axis',
   );

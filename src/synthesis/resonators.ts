@@ -64,9 +64,9 @@ function refinedRoot(
   throw refusal(
     'E_ILL_CONDITIONED',
     'polynomials',
-    `a resonance at omega = ${(start * form.unit).toPrecision(6)} that doubled precision does not settle`,
-    `${MOST_STEPS} steps`,
-    'check the roots next to that frequency',
+    'an eigenphase that is not monotone',
+    `rounding in ${MOST_STEPS} steps`,
+    `it is so next to omega = ${(start * form.unit).toPrecision(6)}, where the roots listed are too rough for their poles`,
   );
 }
 
