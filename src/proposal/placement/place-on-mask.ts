@@ -1,9 +1,8 @@
 import { EPS, refusal } from '../../numerics/index.js';
-import { type Bounded, type NodeBounds, placeBounded, pullOf } from './bounded.js';
-import { lobeGradients, spreadOf } from './equalize.js';
+import { type NodeBounds, placeBounded } from './bounded.js';
+import { spreadOf } from './equalize.js';
 import type { LineProblem } from './lobes.js';
 import { type Coordinate, type MaskPiece, PAIRS, SINGLE, segmentsOf, sideOf } from './mask-pieces.js';
-import { lobeWeights } from './multipliers.js';
 import { kappaOf } from './rejection-level.js';
 import { upperEnvelope } from './segments.js';
 import type { ActiveMargin, ZeroPlacement } from './zero-placement.js';
@@ -36,16 +35,15 @@ export function placeOnMask(request: PlacementRequest): ZeroPlacement {
   const problem = lineProblem(request, coordinate);
   refuseFewPoints(problem, request);
   const bounded = placeBounded(problem, boundsOf(request, coordinate));
-  const { free, nodes, lobes } = bounded;
-  const weights = lobeWeights(lobeGradients(free, nodes, lobes));
-  if (weights === undefined || !(spreadOf(lobes) <= WIDEST_ENCLOSURE) || !pinnedHold(bounded, weights))
-    throw notPlaced(request);
+  if (bounded === undefined || !(spreadOf(bounded.lobes) <= WIDEST_ENCLOSURE)) throw notPlaced(request);
+  const { nodes, lobes, pinned, weights } = bounded;
+  const places = pinned.map(({ at }) => at);
   const margins = lobes.map(({ marginDb }) => marginDb);
   // Margins are sums of one logarithm a zero: their own rounding belongs to the enclosure.
   const rounding = 16 * EPS * (request.order + Math.max(...lobes.map(({ potential }) => 8.7 * potential)));
   return {
     order: request.order,
-    ...zerosOf([...nodes, ...bounded.pinned], coordinate, request.order),
+    ...zerosOf([...nodes, ...places], coordinate, request.order),
     marginDb: Math.min(...margins),
     lowestDb: Math.min(...margins) - rounding,
     highestDb: Math.max(...margins) + rounding,
@@ -59,7 +57,7 @@ export function placeOnMask(request: PlacementRequest): ZeroPlacement {
         piece: lobe.source,
       } satisfies ActiveMargin;
     }),
-    pinned: bounded.pinned.filter((t) => t !== 0).map(coordinate.toOmega),
+    pinned: places.filter((t) => t !== 0).map(coordinate.toOmega),
   };
 }
 
@@ -91,20 +89,14 @@ function refuseFewPoints({ segments, count }: LineProblem, { symmetric }: Placem
 function boundsOf(
   { zeroCount, zerosAbove, closestZero }: PlacementRequest,
   { fromOmega, pairs }: Coordinate,
-): NodeBounds {
+): readonly NodeBounds[] {
   const count = pairs ? zeroCount / 2 : zeroCount;
   const reach = closestZero === undefined ? Number.POSITIVE_INFINITY : fromOmega(closestZero);
   const below = zerosAbove === undefined ? undefined : zeroCount - zerosAbove;
-  const ranks = Array.from({ length: count }, (_, j) => j);
-  return {
-    low: ranks.map((j) => (below !== undefined && j >= below ? 0 : -reach)),
-    high: ranks.map((j) => (below !== undefined && j < below ? 0 : reach)),
-  };
-}
-
-/** Whether every zero on a bound is held there: the margin must not grow when it moves inside. */
-function pinnedHold(bounded: Bounded, weights: readonly number[]): boolean {
-  return bounded.pinned.every((at, n) => (bounded.sides[n] as number) * pullOf(bounded, weights, at) >= -1e-6);
+  return Array.from({ length: count }, (_, j) => ({
+    low: below !== undefined && j >= below ? 0 : -reach,
+    high: below !== undefined && j < below ? 0 : reach,
+  }));
 }
 
 function zerosOf(
