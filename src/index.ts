@@ -15,6 +15,7 @@ export type {
   TransmissionZero,
 } from './approximation/index.js';
 export {
+  bandstop,
   bessel,
   butterworth,
   chebyshev,

@@ -31,7 +31,7 @@ export function wholeRoots(
       // The step from here on is quadratically smaller: one more sweep ends at the last digit.
       settled[k] = magnitude(step) <= 1e-12 * magnitude(z);
     }
-    if (settled.every((each) => each)) return roots.map((z) => subtract(z, newtonStep(coefficients, z, bits)));
+    if (settled.every((each) => each)) return roots.map((z) => upper(subtract(z, newtonStep(coefficients, z, bits))));
   }
   return undefined;
 }
@@ -72,3 +72,6 @@ function aberthStep(newton: Complex, roots: readonly Complex[], k: number): Comp
   const turned = { re: 1 - (newton.re * sum.re - newton.im * sum.im), im: -(newton.re * sum.im + newton.im * sum.re) };
   return divide(newton, turned);
 }
+
+/** A root may have crossed the real axis on its way, past its own conjugate. */
+const upper = ({ re, im }: Complex): Complex => complex(re, Math.abs(im));
