@@ -7,6 +7,7 @@ import {
   doubledProduct,
   doubledSquareRoot,
   sumRest,
+  timesConstant,
   timesLinear,
   timesPowerOfTwo,
 } from '../numerics/index.js';
@@ -88,6 +89,7 @@ const LARGE: number = 2 ** 200;
 function multiplyOut(form: LosslessForm, omega: Doubled, { e, phi, chi }: Workspace): void {
   doubledProduct(1, 0, e);
   doubledProduct(form.reflection.hi, form.reflection.lo, phi);
+  timesConstant(phi, form.turn.re, 0, form.turn.im, 0);
   doubledProduct(form.transmission.hi, form.transmission.lo, chi);
   for (let k = 0; k < form.order; k++) {
     timesRoot(e, form.poles, k, omega);

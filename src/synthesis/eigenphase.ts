@@ -19,7 +19,8 @@ export interface PhaseValue {
 export function eigenphase(form: LosslessForm, omega: number, branch: Branch, target: number): PhaseValue {
   const { poles, reflectionZeros, transmissionZeros, parity } = form;
   let [psi, psiSlope, eRe, eIm] = [0, 0, 1, 0];
-  const phi = { re: form.reflection.hi, im: 0, slopeRe: 0, slopeIm: 0 };
+  const [startRe, startIm] = [form.turn.re * form.reflection.hi, form.turn.im * form.reflection.hi];
+  const phi = { re: startRe, im: startIm, slopeRe: 0, slopeIm: 0 };
   const chi = { re: form.transmission.hi, im: 0, slopeRe: 0, slopeIm: 0 };
   for (let k = 0; k < form.order; k++) {
     const x = omega - (poles.im[k] as number) - (poles.imRest[k] as number);

@@ -1,5 +1,12 @@
 import type { FilterPolynomials, FineRoot } from '../forms/index.js';
-import { type Doubled, doubledAdd, doubledMultiply, doubledSquareRoot } from '../numerics/index.js';
+import {
+  type Complex,
+  type Doubled,
+  doubledAdd,
+  doubledMultiply,
+  doubledSquareRoot,
+  powerOfJ,
+} from '../numerics/index.js';
 
 /** Roots as columns, both parts as pairs: a root r is the factor `(omega - im) + j*re` of a product in omega. */
 export interface RootColumns {
@@ -13,8 +20,8 @@ export interface RootColumns {
  * A lossless two-port in the form that its eigenphases are computed from, frequency scaled by a power of 4.
  *
  * With `e = prod((omega - im p) + j*re p)`, the same for F and P, and psi the half phase of det S, `e^(-j psi) = (-1)^N e/|e|`:
- * `e^(-j psi) S = [[a, j*b], [j*b, conj a]]`, `a = (-1)^N reflection*phi/|e|`, `b = transmission*chi/|e|`, chi the product of
- * the transmission zeros (real for zeros on the axis or mirrored in it).
+ * `e^(-j psi) S = [[a, j*b], [j*b, conj a]]`, `a = (-1)^N turn*reflection*phi/|e|`, `b = transmission*chi/|e|`, chi the product
+ * of the transmission zeros (real for zeros on the axis or mirrored in it).
  */
 export interface LosslessForm {
   readonly order: number;
@@ -23,6 +30,8 @@ export interface LosslessForm {
   readonly transmissionZeros: RootColumns;
   /** `1/epsilonR`, exactly what `1/epsilon` leaves of 1 at infinite frequency. */
   readonly reflection: Doubled;
+  /** `j^(nf - N)`: 1 but for a response with fewer reflection zeros than its order. */
+  readonly turn: Complex;
   /** `1/epsilon` with the sign of b. */
   readonly transmission: Doubled;
   /** `(-1)^N`. */
@@ -46,6 +55,7 @@ export function losslessForm(polynomials: FilterPolynomials): LosslessForm {
     reflectionZeros: columnsOf(reflectionZeros, unit),
     transmissionZeros: columnsOf(transmissionZeros, unit),
     reflection,
+    turn: powerOfJ(reflectionZeros.length - order),
     transmission: { hi: sign * transmission.hi, lo: sign * transmission.lo },
     parity: order % 2 === 0 ? 1 : -1,
     unit,
@@ -95,7 +105,7 @@ function inverse(constant: number, unit: number, exponent: number): Doubled {
   const rest = unit ** (exponent - Math.floor(exponent / 2));
   const hi = 1 / constant;
   const product = doubledMultiply({ hi, lo: 0 }, { hi: constant, lo: 0 });
-  const lo = (hi * (1 - product.hi - product.lo)) as number;
+  const lo = hi * (1 - product.hi - product.lo);
   return { hi: hi * half * rest, lo: lo * half * rest };
 }
 

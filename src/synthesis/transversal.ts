@@ -38,7 +38,12 @@ export function transversal(polynomials: FilterPolynomials): CouplingMatrix {
   const found = symmetricResonators(polynomials, angle) ?? anyResonators(polynomials);
   const resonators = [...found].sort((a, b) => b.diagonal - a.diagonal);
   const exact = isMirrored(polynomials) ? symmetrized(resonators) : resonators;
-  return { order, values: matrixOf(exact, -Math.tan(angle / 2)), finiteZeros };
+  return { order, values: matrixOf(exact, directCoupling(polynomials, angle)), finiteZeros };
+}
+
+/** `M_SL` from S at infinite frequency: `S11 = (1 - M_SL^2)/(1 + M_SL^2)`, `S21 = -2j*M_SL/(1 + M_SL^2)`. */
+function directCoupling({ order, reflectionZeros, transmissionLead }: FilterPolynomials, angle: number): number {
+  return reflectionZeros.length < order ? -transmissionLead.im : -Math.tan(angle / 2);
 }
 
 /** The resonators by the modes of a response with S11 = S22; undefined for any other. */

@@ -1,7 +1,10 @@
 import type { Complex, FilterPolynomials } from '../../src/forms/index.js';
 import { seeded } from './random.js';
 
-/** Reflection zeros anywhere, transmission zeros mirrored in the axis, level of |S11| at omega = 1 (nz < N), or |S11| far out (nz = N). */
+/**
+ * Reflection zeros anywhere, transmission zeros mirrored in the axis, as many as the order of one kind at least; level of |S11|
+ * at omega = 1 (fewer transmission zeros), far out (as many of both), or times |s| to the difference far out (fewer of reflection).
+ */
 export interface LosslessRequest {
   readonly reflectionZeros: readonly Complex[];
   readonly transmissionZeros: readonly Complex[];
@@ -35,16 +38,19 @@ function ratio(roots: readonly Complex[], poles: readonly Complex[], k: number):
  */
 export function losslessResponse(request: LosslessRequest): FilterPolynomials | undefined {
   const { reflectionZeros, transmissionZeros, level } = request;
-  const order = reflectionZeros.length;
+  const order = Math.max(reflectionZeros.length, transmissionZeros.length);
   const isFull = transmissionZeros.length === order;
+  const isStop = reflectionZeros.length < order;
   const atEdge = (roots: readonly Complex[]): number =>
     roots.reduce((product, { re, im }) => product * Math.hypot(re, 1 - im), 1);
   const edge = (atEdge(transmissionZeros) / atEdge(reflectionZeros)) * (level / Math.sqrt(1 - level * level));
-  const [epsilon, epsilonR] = isFull ? [1 / Math.sqrt(1 - level * level), 1 / level] : [edge, 1];
-  const poles = reflectionZeros.map(({ im }, n) => ({ re: -0.5 - 0.01 * n, im: im + 0.003 * n }));
-  const reflectedSign = order % 2 === 0 ? 1 : -1;
+  const transmitted = isStop ? 1 : 1 / Math.sqrt(1 - level * level);
+  const [epsilon, epsilonR] = isFull ? [transmitted, 1 / level] : [edge, 1];
+  const starts = isStop ? transmissionZeros : reflectionZeros;
+  const poles = starts.map(({ im }, n) => ({ re: -0.5 - 0.01 * n, im: im + 0.003 * n }));
+  const reflectedSign = reflectionZeros.length % 2 === 0 ? 1 : -1;
   const transmittedSign = transmissionZeros.length % 2 === 0 ? 1 : -1;
-  const lead = isFull ? reflectedSign * (1 / epsilonR ** 2 + 1 / epsilon ** 2) : reflectedSign;
+  const lead = order % 2 === 0 ? 1 : -1;
   let largest = Infinity;
   for (let sweep = 0; sweep < 500 && largest > 1e-15; sweep++) {
     largest = 0;
