@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { generalizedChebyshev, scatteringAt } from '../../src/index.js';
 import { placeZerosForLobes } from '../../src/proposal/index.js';
 import { seeded } from '../support/random.js';
+import { goldenMinimum } from './sampled-margin.js';
 
 describe('placeZerosForLobes', () => {
   // R. J. Cameron, General coupling matrix synthesis methods for Chebyshev filtering functions, 1999 (from memory): the two
@@ -66,19 +67,8 @@ function lobeLevels(order: number, zeros: readonly number[]): { above: number[];
       .sort((a, b) => a - b);
     // Reciprocals make the lobe to infinity an interval like the others.
     return own.map((zero, k) =>
-      lowest((x) => rejection(sign / x), 1 / (own[k + 1] ?? Number.POSITIVE_INFINITY), 1 / zero),
+      goldenMinimum((x) => rejection(sign / x), 1 / (own[k + 1] ?? Number.POSITIVE_INFINITY), 1 / zero),
     );
   };
   return { above: side(1), below: side(-1) };
-}
-
-function lowest(f: (x: number) => number, low: number, high: number): number {
-  const ratio = (Math.sqrt(5) - 1) / 2;
-  let [a, b] = [low, high];
-  for (let turn = 0; turn < 60; turn++) {
-    const [x, y] = [b - ratio * (b - a), a + ratio * (b - a)];
-    if (f(x) < f(y)) b = y;
-    else a = x;
-  }
-  return f((a + b) / 2);
 }

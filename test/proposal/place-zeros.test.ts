@@ -76,6 +76,25 @@ describe('placeZeros', () => {
     }
   });
 
+  it('places 600 random problems with bounds, splits or pairs: none refused, none beyond its bounds, none above the free optimum', () => {
+    const random = seeded(99);
+    for (let n = 0; n < 600; n++) {
+      const request = randomRequest(random);
+      const even = 2 * Math.floor(request.zeroCount / 2);
+      const change = [
+        { closestZero: 1.05 + random() },
+        { zerosAbove: Math.floor((request.zeroCount + 1) * random()) },
+        { symmetric: true, zeroCount: even },
+      ][n % 3]!;
+      const [bound, free] = [placeZeros({ ...request, ...change }), placeZeros(request)];
+      expect(width(bound)).toBeLessThanOrEqual(1e-9);
+      expect(bound.lowestDb).toBeLessThanOrEqual(free.highestDb);
+      const { closestZero = 1, zerosAbove = request.zeroCount } = change;
+      for (const w of bound.transmissionZeros) expect(Math.abs(w)).toBeGreaterThanOrEqual(closestZero * (1 - 1e-12));
+      expect(bound.transmissionZeros.filter((w) => w > 0).length).toBeLessThanOrEqual(zerosAbove);
+    }
+  });
+
   it('gives pairs when asked, at most the margin of free zeros, and the same where the mask is symmetric', () => {
     const rejection = [
       { fromOmega: 1.2, rejectionDb: 40 },

@@ -48,3 +48,43 @@ export function closedFormRejection({ order, returnLossDb }: PlaceZerosRequest, 
     return 10 * Math.log10(1 + Math.cosh(sum) ** 2 / kappaSquared);
   };
 }
+
+/** Smallest margin of a placement by the closed form: samples even in 1/omega, the lowest ones followed down between. */
+export function lowestMargin(request: PlaceZerosRequest, zeros: readonly number[], points: number): number {
+  const rejectionAt = closedFormRejection(request, zeros);
+  let worst = Number.POSITIVE_INFINITY;
+  for (const piece of request.rejection) {
+    const [low, high] = [1 / far(piece.fromOmega ?? -1e9), 1 / far(piece.toOmega ?? 1e9)];
+    const pitch = (high - low) / points;
+    const margin = (x: number): number => rejectionAt(1 / x) - levelOf(piece, 1 / x);
+    const margins = Array.from({ length: points + 1 }, (_, n) => margin(low + n * pitch));
+    margins.forEach((value, n) => {
+      worst = Math.min(worst, value);
+      const [before = Number.POSITIVE_INFINITY, after = Number.POSITIVE_INFINITY] = [margins[n - 1], margins[n + 1]];
+      if (value > before || value > after) return;
+      const ends = [low + Math.max(0, n - 1) * pitch, low + Math.min(points, n + 1) * pitch] as const;
+      worst = Math.min(worst, goldenMinimum(margin, Math.min(...ends), Math.max(...ends)));
+    });
+  }
+  return worst;
+}
+
+/** Lowest value of a function with one minimum, by golden sections. */
+export function goldenMinimum(f: (x: number) => number, low: number, high: number): number {
+  const ratio = (Math.sqrt(5) - 1) / 2;
+  let [a, b] = [low, high];
+  let [x, y] = [b - ratio * (b - a), a + ratio * (b - a)];
+  let [fx, fy] = [f(x), f(y)];
+  for (let turn = 0; turn < 45; turn++) {
+    if (fx < fy) {
+      [b, y, fy] = [y, x, fx];
+      x = b - ratio * (b - a);
+      fx = f(x);
+    } else {
+      [a, x, fx] = [x, y, fy];
+      y = a + ratio * (b - a);
+      fy = f(y);
+    }
+  }
+  return Math.min(fx, fy);
+}

@@ -17,7 +17,15 @@ export interface BestZeros {
   readonly marginDb: number;
   readonly lossless: ZeroPlacement;
   readonly promisedDb?: number;
-  readonly costs: readonly { readonly line: number; readonly omega: number; readonly weight: number }[];
+  readonly costs: readonly Place[];
+}
+
+/** A place of the mask near which the margin is small. */
+export interface Place {
+  readonly line: number;
+  readonly omega: number;
+  readonly marginDb: number;
+  readonly weight: number;
 }
 
 /** Finds best zeros, each asked-for pair of numbers once. */
@@ -37,7 +45,7 @@ export function bestZerosTable(request: CheckedRequest, problem: MaskProblem, st
     const placed = lossless(order, zeroCount, symmetric);
     const found = { order, zeroCount, symmetric, lossless: placed };
     if (request.sigma === 0) {
-      const costs = placed.active.map(({ piece, omega, weight }) => ({ line: piece, omega, weight }));
+      const costs = placed.active.map(({ piece, ...place }) => ({ ...place, line: piece }));
       const { transmissionZeros, marginDb } = placed;
       return { ...found, transmissionZeros, marginDb, costs } satisfies BestZeros;
     }
@@ -82,7 +90,7 @@ function withLoss(
     transmissionZeros: (symmetric ? zeros.flatMap((w) => [w, -w]) : zeros).sort((a, b) => a - b),
     marginDb: refined.marginDb,
     promisedDb: refined.promisedDb,
-    costs: refined.minima.map(({ source, omega, weight }) => ({ line: source, omega, weight })),
+    costs: refined.minima.map(({ source, omega, marginDb, weight }) => ({ line: source, omega, marginDb, weight })),
   };
 }
 

@@ -54,6 +54,7 @@ export function judge(request: CheckedRequest, zeros: BestZeros, smaller: () => 
       groupDelayVariationSeconds: (evaluateMask(response, lossy, [whole])[0] as MaskRow).predicted,
       costs: costsOf(request, zeros),
       smaller: smaller(),
+      remarks: remarksOf(zeros),
     },
   };
 }
@@ -91,6 +92,20 @@ export function wantedFor(line: MaskLine, margins: CheckedRequest['margins']): n
   if ('insertionLossDb' in line) return margins.insertionLossDb;
   if ('insertionLossVariationDb' in line) return margins.insertionLossVariationDb;
   return margins.groupDelayVariationSeconds;
+}
+
+/** How near to the smallest margin, dB, a place counts as holding it. */
+const HELD_DB = 1e-3;
+
+/** With all zeros at work the margin is held at one place more than there are zeros; loss that fills a notch takes places away. */
+function remarksOf({ promisedDb, transmissionZeros, marginDb, costs, symmetric }: BestZeros): readonly string[] {
+  if (promisedDb === undefined) return [];
+  const unknowns = transmissionZeros.length / (symmetric ? 2 : 1);
+  const held = costs.filter((cost) => cost.marginDb - marginDb < HELD_DB).length;
+  if (held > unknowns) return [];
+  return [
+    `Loss fills the notches: the margin is held at ${held} places only, where ${transmissionZeros.length} zeros could hold it at ${unknowns + 1}; a zero is partly wasted at this unloaded Q.`,
+  ];
 }
 
 function costsOf({ band }: CheckedRequest, { costs }: BestZeros): readonly MaskCost[] {

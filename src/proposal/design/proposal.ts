@@ -37,6 +37,7 @@ export interface ProposedDesign {
   readonly costs: readonly MaskCost[];
   /** One zero fewer, and one resonator fewer. */
   readonly smaller: readonly SmallerDesign[];
+  readonly remarks: readonly string[];
 }
 
 /** A design that was looked at and left out, with the reason in words. */

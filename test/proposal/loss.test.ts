@@ -1,0 +1,119 @@
+import { describe, expect, it } from 'vitest';
+import { bandFromEdges, generalizedChebyshev, sweep } from '../../src/index.js';
+import { propose } from '../../src/proposal/index.js';
+import { attenuationDb, gradientOf, lossyResponse } from '../../src/proposal/loss/lossy-response.js';
+import { lineFromOmega, omegaFromLine } from '../../src/proposal/placement/line.js';
+import { seeded } from '../support/random.js';
+import { MASKS, type MaskName, requestFor } from './masks.js';
+
+const PLACES = [-0.5, 0.4, 0.6];
+
+describe('the lossy response', () => {
+  it('is the swept one, also where products of roots would leave the range of doubles', () => {
+    for (const [order, zeros] of [
+      [7, [-1.6, 1.5, 2.4]],
+      [60, [1.1, -1.3]],
+    ] as const) {
+      const places = zeros.map(lineFromOmega);
+      const response = lossyResponse(order, 22, places, 0.01);
+      const model = generalizedChebyshev({ order, returnLossDb: 22, transmissionZeros: [...zeros] });
+      for (const omega of [-1.35, -0.9, 0, 0.4, 1.02, 1.5, 3]) {
+        const { s21 } = sweep(model, [omega], { loss: 0.01 });
+        const swept = -20 * Math.log10(Math.hypot(s21.re[0]!, s21.im[0]!));
+        expect(Math.abs(attenuationDb(response, omega) - swept)).toBeLessThan(1e-9 * (1 + swept));
+      }
+    }
+  });
+
+  it('has the derivatives that differences show', () => {
+    for (const sigma of [0, 0.005, 0.05]) {
+      const gradient = gradientOf(lossyResponse(7, 22, PLACES, sigma));
+      for (const omega of [-3, -1.2, 0, 0.7, 1.3, 2.2, 50]) {
+        const found = gradient(omega);
+        PLACES.forEach((_, j) => {
+          const at = (h: number): number =>
+            attenuationDb(
+              lossyResponse(
+                7,
+                22,
+                PLACES.map((t, k) => (k === j ? t + h : t)),
+                sigma,
+              ),
+              omega,
+            );
+          // Fourth-order differences: their truncation and rounding stay near 1e-8 of the curvature scale.
+          const h = 1e-4;
+          const difference = (8 * (at(h) - at(-h)) - (at(2 * h) - at(-2 * h))) / (12 * h);
+          expect(Math.abs(found[j]! - difference)).toBeLessThan(1e-5 * (1 + Math.abs(difference)));
+        });
+      }
+    }
+  });
+});
+
+/** Smallest rejection margin with loss on 4,001 points a line, from the engine's sweep: never below the true one. */
+function sweptMargin(name: MaskName, q: number, order: number, zeros: readonly number[], points = 4001): number {
+  const { edges, returnLossDb, lines } = MASKS[name];
+  const { centerHz, bandwidthHz } = bandFromEdges(edges[0], edges[1]);
+  const model = generalizedChebyshev({ order, returnLossDb, transmissionZeros: zeros });
+  return Math.min(
+    ...lines.map(([from, to, level]) => {
+      const grid = Float64Array.from({ length: points }, (_, n) => {
+        // An open end is followed out in 1/omega, down to a twentieth.
+        const omega = (mhz: number): number => (centerHz / bandwidthHz) * (mhz / centerHz - centerHz / mhz);
+        const low = from === undefined ? -0.05 : 1 / omega(from);
+        const high = to === undefined ? 0.05 : 1 / omega(to);
+        return 1 / (low + ((high - low) * n) / (points - 1));
+      });
+      const { s21 } = sweep(model, grid, { loss: centerHz / (bandwidthHz * q) });
+      return Math.min(...grid.map((_, n) => -20 * Math.log10(Math.hypot(s21.re[n]!, s21.im[n]!)))) - level;
+    }),
+  );
+}
+
+describe('proposals with loss', () => {
+  it.each([
+    ['channel', 9000, 6, 2],
+    ['diplexer', 3800, 7, 3],
+    ['diplexer', 1500, 7, 3],
+    ['baseStation', 3000, 8, 2],
+  ] as const)(
+    '%s, Qu %i, %i-%i: the margin is that of the swept response, and no random change betters it',
+    (name, q, order, zeroCount) => {
+      const { designs } = propose(requestFor(name, { unloadedQ: q }));
+      const design = designs.find((each) => each.order === order && each.transmissionZeros.length === zeroCount)!;
+      const swept = sweptMargin(name, q, order, design.transmissionZeros);
+      expect(swept - design.marginDb).toBeGreaterThan(-1e-6);
+      expect(swept - design.marginDb).toBeLessThan(1e-3);
+      expect(design.promisedDb).toBeLessThan(1e-5);
+      const random = seeded(8);
+      for (let n = 0; n < 400; n++) {
+        const size = 10 ** (-4 * random());
+        const zeros = design.transmissionZeros
+          .map(lineFromOmega)
+          .map((t) => omegaFromLine(t * (1 + size * (random() - 0.5))));
+        if (sweptMargin(name, q, order, zeros, 61) <= design.marginDb) continue;
+        expect(sweptMargin(name, q, order, zeros)).toBeLessThanOrEqual(design.marginDb + 1e-4);
+      }
+    },
+  );
+
+  it('gains over the lossless zeros where the notches fill up', () => {
+    const lossless = propose(requestFor('diplexer')).designs[0]!;
+    const lossy = propose(requestFor('diplexer', { unloadedQ: 1500 })).designs[0]!;
+    expect(lossy.marginDb).toBeGreaterThan(sweptMargin('diplexer', 1500, 7, lossless.transmissionZeros) + 1);
+  });
+
+  it('prices the lines: one raised by a little costs its weight times that', () => {
+    const request = requestFor('diplexer', { unloadedQ: 3800 });
+    const [design] = propose(request).designs;
+    request.mask.forEach((line, index) => {
+      const weight = design!.costs.filter((cost) => cost.line === index).reduce((sum, cost) => sum + cost.weight, 0);
+      const raised = request.mask.map((each, n) =>
+        n === index ? { ...line, rejectionDb: (line.rejectionDb as number) + 0.01 } : each,
+      );
+      const cost = (design!.marginDb - propose({ ...request, mask: raised }).designs[0]!.marginDb) / 0.01;
+      expect(Math.abs(cost - weight)).toBeLessThan(0.01);
+    });
+  });
+});
