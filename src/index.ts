@@ -87,6 +87,7 @@ export type {
   MaskLineInput,
   PassbandInput,
   PortCouplings,
+  ReflectionSide,
   Specification,
   SpecificationFamily,
   SpecificationInput,

@@ -3,6 +3,7 @@
  *  Gives    FilterPolynomials: poles, reflection zeros, transmission zeros, ripple constants
  *  Refuses  E_ORDER_RANGE, E_RL_RANGE, E_ZERO_COUNT, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR, E_ZERO_RANGE
  *  Source   R. J. Cameron, General coupling matrix synthesis methods for Chebyshev filtering functions, IEEE Trans. MTT 47(4), 1999 (from memory) */
+export { approximate, zerosAskedFor } from './approximate.js';
 export { bandstop } from './bandstop.js';
 export type { BesselRequest } from './bessel/bessel.js';
 export { bessel } from './bessel/bessel.js';

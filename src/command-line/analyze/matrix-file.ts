@@ -21,7 +21,17 @@ export interface MatrixFile {
   readonly hasBand: boolean;
 }
 
-const RESPONSE_KEYS = ['family', 'order', 'returnLossDb', 'transmissionZeros', 'topology'] as const;
+const RESPONSE_KEYS = [
+  'family',
+  'order',
+  'returnLossDb',
+  'rejectionDb',
+  'stopBandEdge',
+  'largestPairAtInfinity',
+  'reflectionSide',
+  'transmissionZeros',
+  'topology',
+] as const;
 const BAND_KEYS = ['unloadedQ', 'mask'] as const;
 const KEYS = ['matrix', 'name', 'notes', 'passband', ...BAND_KEYS, ...RESPONSE_KEYS] as const;
 
@@ -51,9 +61,12 @@ function needsBand(members: Members): boolean {
   return inHertz || BAND_KEYS.some((key) => members[key] !== undefined);
 }
 
+/** Families that need no level to be stated. */
+const HALF_POWER = ['butterworth', 'bessel'] as const;
+
 /** Whether the members say what response the matrix should have. */
 function statesResponse({ family, returnLossDb, transmissionZeros }: Members): boolean {
-  return returnLossDb !== undefined || transmissionZeros !== undefined || family === 'butterworth';
+  return returnLossDb !== undefined || transmissionZeros !== undefined || HALF_POWER.some((name) => name === family);
 }
 
 /** The members as a whole specification: stand-ins for what is not stated, so that one check tells every fault. */
