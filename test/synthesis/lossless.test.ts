@@ -154,6 +154,17 @@ describe('transversal of any lossless reciprocal response', () => {
     }
   });
 
+  it.each([
+    [64, 40, [1.1, 1.3, -1.1, -1.3]],
+    [100, 20, []],
+    [100, 26, [1.05, -1.2]],
+  ] as const)('reaches order %i at %i dB by eigenphases too', (order, returnLossDb, transmissionZeros) => {
+    const polynomials = generalizedChebyshev({ order, returnLossDb, transmissionZeros });
+    const reflectionZeros = polynomials.reflectionZeros.map((zero) => ({ ...zero, re: 1e-40 }));
+    const matrix = transversal({ ...polynomials, reflectionZeros });
+    expect(responseGap(matrix, polynomials)).toBeLessThan(4 * order * EPS * sharpness(polynomials));
+  });
+
   it('goes on to hardware: external Q differs at the two ports', () => {
     const polynomials = losslessResponse({
       reflectionZeros: [-0.9, 0, 0.9].map((im) => ({ re: -0.4, im })),
