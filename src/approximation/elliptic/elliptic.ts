@@ -23,7 +23,7 @@ export interface EllipticRequest {
  * Elliptic response: equal ripple in the pass band and in the stop band, the steepest edge for its order.
  *
  * `order` 1 to 100; `returnLossDb` 0.01 to 100 dB, reached at omega = +-1 and at every ripple peak between; the stop band
- * by `rejectionDb` (0.1 to 300 dB) or by `stopBandEdge`, which must start 2.2e-6 above the pass band at least. An odd order has
+ * by `rejectionDb` (0.1 to 300 dB) or by `stopBandEdge`, which must start 2.2e-5 above the pass band at least. An odd order has
  * N-1 finite zeros, an even one N (and so a direct coupling), or N-2 with `largestPairAtInfinity`: the same ripples with a
  * stop band that starts a little later. The result states the level and the edge that the stop band has.
  * Cost O(order), under 1 ms at order 60.
@@ -47,8 +47,8 @@ export function elliptic(request: EllipticRequest): FilterPolynomials {
   const { rejectionDb, stopBandEdge } = request;
   const selected = selectivity({ order, kappa, rejectionDb, stopBandEdge, largestPairAtInfinity });
   const ripple = modulusOfDecay(order * selected.modulus.decay);
-  const part = partOfQuarterPeriod(kappa, ripple.k);
-  const rest = partOfQuarterPeriod(selected.stopRatio, ripple.k);
+  const part = partOfQuarterPeriod(kappa, ripple);
+  const rest = partOfQuarterPeriod(selected.stopRatio, ripple);
   const half = upperHalf(order, selected.modulus, part, rest, largestPairAtInfinity);
   const zeros = [...half.transmissionZeros, ...half.transmissionZeros.map((w) => -w).reverse()].map((w) =>
     complex(0, w),

@@ -41,24 +41,23 @@ function commonMean(x: number): number {
   return (a + b) / 2;
 }
 
-/** 1 and 1e-300 meet after 15 means. */
+/** 1 and 1e-300 meet after 15 means; a modulus next to 1 is below 1e-300 as soon. */
 const MOST_MEANS = 20;
 
 /**
- * `F(atan(tangent))/K` for the modulus whose complement is `complement`: the part of the quarter period at which the
- * function sn/cn reaches `tangent`. Landen's transformation in the form of the amplitude.
+ * `F(atan(tangent))/K` for the modulus that is complementary to `ripple`: the part of the quarter period at which the function
+ * sn/cn reaches `tangent`.
+ *
+ * There sn of the modulus `ripple` itself is `j*tangent`; Landen's transformation takes that modulus to 0, where sn is the sine.
+ * Every step adds positive numbers only, so that tangents far above 1 keep their digits.
  */
-export function partOfQuarterPeriod(tangent: number, complement: number): number {
-  let [a, b] = [1, complement];
-  let angle = Math.atan(tangent);
-  let slope = tangent;
-  let parts = 2 / Math.PI;
-  for (let step = 0; step < MOST_MEANS && a !== b; step++) {
-    const turns = Math.floor(angle / Math.PI + 0.5);
-    angle += Math.atan((b / a) * slope) + turns * Math.PI;
-    slope = Math.tan(angle);
-    parts /= 2;
-    [a, b] = [(a + b) / 2, Math.sqrt(a * b)];
+export function partOfQuarterPeriod(tangent: number, ripple: Modulus): number {
+  let [{ k, kPrime }, value] = [ripple, tangent];
+  for (let step = 0; step < MOST_MEANS && k > 0; step++) {
+    const next = (k / (1 + kPrime)) ** 2;
+    value *= 2 / ((1 + next) * (1 + Math.hypot(1, k * value)));
+    kPrime = (2 * Math.sqrt(kPrime)) / (1 + kPrime);
+    k = next;
   }
-  return angle * parts;
+  return (2 * Math.asinh(value)) / ripple.decay;
 }

@@ -23,7 +23,7 @@ export interface Selectivity {
 }
 
 /** Relative error of S that the rounding of a transmission zero may cause at the edge of the pass band. */
-const ZERO_ROUNDING = 1e-10;
+const ZERO_ROUNDING = 1e-11;
 
 /** A zero rounded by EPS moves its distance from the band edge by EPS/distance, relatively. */
 const LEAST_GAP = EPS / ZERO_ROUNDING;
