@@ -7,7 +7,7 @@ import type { Complex, CouplingMatrix, FilterPolynomials, FineRoot } from '../..
 import { EPS, type FilterFailure } from '../../src/numerics/index.js';
 import { scatteringAt } from '../../src/response/index.js';
 import { transversal } from '../../src/synthesis/index.js';
-import { resonatorsOf } from '../../src/synthesis/resonators.js';
+import { type Resonator, resonatorsOf } from '../../src/synthesis/resonators.js';
 import { losslessResponse, randomLossless } from '../support/lossless-response.js';
 import { entry, matrixOf, responseGap, sharpness } from '../support/models.js';
 
@@ -284,6 +284,31 @@ describe('1500 random responses of orders to 40', () => {
     expect(wrong).toEqual([]);
     expect(new Set(refusals)).toEqual(new Set(['E_ILL_CONDITIONED']));
     expect(refusals.length).toBeLessThan(15);
+  });
+});
+
+describe('transversal of an exactly double eigenvalue', () => {
+  it.each([0, 0.5, -0.75, 3])('S = V diag((s-1)/(s+1), (s-3)/(s+3)) V^T about omega = %d', (center) => {
+    // V turns by g with cos 2g = -1/4: F = s^2 + 2*cos(2g)*s - 3 = (s + 3/2)(s - 2), P = 2*sin(2g)*s, E = (s + 1)(s + 3).
+    const twiceSine = 2 * Math.sqrt(1 - 1 / 16);
+    const polynomials: FilterPolynomials = {
+      family: 'lossless',
+      order: 2,
+      poles: [-1, -3].map((re) => ({ re, im: center })),
+      reflectionZeros: [-1.5, 2].map((re) => ({ re, im: center })),
+      transmissionZeros: [{ re: 0, im: center }],
+      transmissionLead: { re: 1, im: 0 },
+      epsilon: 1 / twiceSine,
+      epsilonR: 1,
+    };
+    const [one, two] = couplings(polynomials) as [Resonator, Resonator];
+    expect([one.diagonal + center, two.diagonal + center].map(Math.abs)).toEqual([0, 0]);
+    // (S - I)/(S + I) has the residue Q = V diag(1, 3) V^T there: m_1 m_1^T + m_2 m_2^T.
+    expect(one.source ** 2 + two.source ** 2).toBeCloseTo((1 + 3) / 2 + 0.25, 14);
+    expect(one.load ** 2 + two.load ** 2).toBeCloseTo((1 + 3) / 2 - 0.25, 14);
+    expect(Math.abs(one.source * one.load + two.source * two.load)).toBeCloseTo(twiceSine / 2, 14);
+    expect(one.source * two.source + one.load * two.load).toBeCloseTo(0, 14);
+    expect(responseGap(transversal(polynomials), polynomials)).toBeLessThan(16 * EPS);
   });
 });
 
