@@ -1,6 +1,7 @@
 import { FilterFailure } from '../../numerics/index.js';
 import type { BestZeros, BestZerosTable } from './best-zeros.js';
 import { judge } from './judge.js';
+import { lineWords, missWords } from './line-words.js';
 import type { MaskProblem } from './mask-problem.js';
 import type { ExcludedDesign, ProposedDesign, SmallerDesign } from './proposal.js';
 import type { CheckedRequest } from './request.js';
@@ -8,7 +9,7 @@ import type { CheckedRequest } from './request.js';
 /** How many counts of zeros are kept at the smallest order that has a design, and at the next one that has. */
 const KEPT: readonly number[] = [2, 2];
 
-/** Orders looked at beyond the first whose rejection suffices. */
+/** Orders looked at beyond the first whose rejection suffices, loss included. */
 const FURTHER_ORDERS = 3;
 
 /** Counts of zeros looked at beyond the wanted number of designs. */
@@ -28,6 +29,8 @@ const SYMMETRY_PRICE_DB = 0.1;
 export interface Found {
   readonly designs: readonly ProposedDesign[];
   readonly excluded: readonly ExcludedDesign[];
+  /** Whether the rejection lines were met at all, whatever else was missed. */
+  readonly reached: boolean;
 }
 
 /** The smallest order whose rejection suffices with all zeros it may have; undefined when none does. */
@@ -43,16 +46,19 @@ export function searchFrom(first: number, request: CheckedRequest, problem: Mask
   const designs: ProposedDesign[] = [];
   const excluded: ExcludedDesign[] = [];
   let orders = 0;
-  const last = Math.min(first + FURTHER_ORDERS, request.largestOrder);
+  let last = request.largestOrder;
+  let reached = false;
   for (let order = first; order <= last && orders < KEPT.length; order++) {
     const found = searchOrder(order, KEPT[orders] as number, request, problem, table);
     designs.push(...found.designs);
     excluded.push(...found.excluded);
+    if (found.reached && !reached) last = Math.min(order + FURTHER_ORDERS, last);
+    reached ||= found.reached;
     if (found.designs.length > 0) orders++;
     // Loss and delay grow with the order: what the next one misses, later ones miss by more.
     else if (designs.length > 0) break;
   }
-  return { designs, excluded };
+  return { designs, excluded, reached };
 }
 
 function searchOrder(
@@ -62,18 +68,39 @@ function searchOrder(
   problem: MaskProblem,
   table: BestZerosTable,
 ): Found {
-  const designs: ProposedDesign[] = [];
-  const excluded: ExcludedDesign[] = [];
   const most = mostZeros(request, problem, order);
   const least = fewestZeros(order, most, thresholdOf(request), table);
+  const last = Math.min(most, least + kept + FURTHER_COUNTS - 1);
+  // More zeros are never worse: an order whose rejection is missed with the most of them, loss included, is out at once.
+  const hopeless = missedRejection(order, last, request, table);
+  if (hopeless !== undefined)
+    return { designs: [], excluded: [{ order, zeroCount: last, reason: hopeless }], reached: false };
+  const designs: ProposedDesign[] = [];
+  const excluded: ExcludedDesign[] = [];
   let accepted = 0;
-  for (let count = least; count <= most && count < least + kept + FURTHER_COUNTS && accepted < kept; count++) {
+  for (let count = least; count <= last && accepted < kept; count++) {
     const found = tryOne(order, count, request, problem, table);
     if (found.designs.length > 0) accepted++;
     designs.push(...found.designs);
     excluded.push(...found.excluded);
   }
-  return { designs, excluded };
+  return { designs, excluded, reached: true };
+}
+
+/** The rejection that the best zeros of one order and count miss, in words. */
+function missedRejection(
+  order: number,
+  zeroCount: number,
+  { mask, margins }: CheckedRequest,
+  table: BestZerosTable,
+): string | undefined {
+  const zeros = attempt(() => table.best(order, zeroCount));
+  if (typeof zeros === 'string') return zeros;
+  const missing = margins.rejectionDb - zeros.marginDb;
+  if (missing <= 1e-9) return undefined;
+  const dearest = zeros.costs.reduce((most, cost) => (cost.weight > most.weight ? cost : most));
+  const line = mask[dearest.line] as (typeof mask)[number];
+  return `the rejection is missed by ${missWords(line, missing)}, first at ${lineWords(line, dearest.line)}`;
 }
 
 /** One order and count: the design, with its symmetric variant where that costs little, or the reason against it. */
@@ -84,9 +111,10 @@ function tryOne(
   problem: MaskProblem,
   table: BestZerosTable,
 ): Found {
-  const out = (reason: string): Found => ({ designs: [], excluded: [{ order, zeroCount, reason }] });
-  const zeros = attempt(() => table.best(order, zeroCount));
-  if (typeof zeros === 'string') return out(zeros);
+  const out = (reason: string): Found => ({ designs: [], excluded: [{ order, zeroCount, reason }], reached: true });
+  const missed = missedRejection(order, zeroCount, request, table);
+  if (missed !== undefined) return out(missed);
+  const zeros = table.best(order, zeroCount);
   const useless = uselessZero(zeros, request, table);
   if (useless !== undefined) return out(useless);
   const smaller = (): readonly SmallerDesign[] => smallerThan(order, zeroCount, request, problem, table);
@@ -101,7 +129,7 @@ function tryOne(
       if (typeof second !== 'string' && second.design !== undefined) designs.push(second.design);
     }
   }
-  return { designs, excluded: [] };
+  return { designs, excluded: [], reached: true };
 }
 
 /** Why the last zero is not worth it: too far out, or too little gained where the mask is met without it. */

@@ -25,6 +25,18 @@ const BETWEEN = 8;
 /** Points round a zero, in units of the loss: a notch is about as wide. */
 const ROUND_ZERO: readonly number[] = [-4, -2, -1, -0.5, 0, 0.5, 1, 2, 4];
 
+/** Minima higher than the lowest one by more than this, dB, are left at their sample: they hold no margin. */
+const FOLLOWED_DB = 10;
+
+/** A local minimum among the samples of a stretch, and the samples beside it. */
+interface Dip {
+  readonly segment: LossySegment;
+  readonly margin: (t: number) => number;
+  readonly at: number;
+  readonly value: number;
+  readonly between?: readonly [number, number];
+}
+
 /**
  * Every local minimum of the margin with loss over the mask: ends of stretches and the lowest points between. `knots` are the
  * places of the zeros on the line of the coordinate.
@@ -36,26 +48,40 @@ export function lossyMinima(
   knots: readonly number[],
 ): readonly LossyMinimum[] {
   const center = attenuationDb(response, 0);
-  return segments.flatMap((segment) => {
+  const dips = segments.flatMap((segment) => dipsOf(response, segment, center, coordinate, knots));
+  const lowest = Math.min(...dips.map(({ value }) => value));
+  return dips.map(({ segment, margin, at, value, between }) => {
+    let found = { x: at, value };
+    if (between !== undefined && value < lowest + FOLLOWED_DB) {
+      const inner = localMinimum(margin, ...between);
+      if (inner.value < value) found = inner;
+    }
     const { relative, side, source } = segment;
-    const margin = (t: number): number => {
-      if (t === 0) return Number.POSITIVE_INFINITY;
-      const attenuation = attenuationDb(response, side * coordinate.toOmega(t));
-      return attenuation - (relative ? center : 0) - levelAt(segment, t);
-    };
-    const points = pointsOf(segment, coordinate, knots, response.sigma);
-    const margins = points.map(margin);
-    return points.flatMap((t, n) => {
-      const here = margins[n] as number;
-      const [before, after] = [margins[n - 1], margins[n + 1]];
-      if (here > (before ?? Number.POSITIVE_INFINITY) || here >= (after ?? Number.POSITIVE_INFINITY)) return [];
-      let found = { x: t, value: here };
-      if (before !== undefined && after !== undefined) {
-        const inner = localMinimum(margin, points[n - 1] as number, points[n + 1] as number);
-        if (inner.value < here) found = inner;
-      }
-      return [{ omega: side * coordinate.toOmega(found.x), marginDb: found.value, relative, source }];
-    });
+    return { omega: side * coordinate.toOmega(found.x), marginDb: found.value, relative, source };
+  });
+}
+
+function dipsOf(
+  response: LossyResponse,
+  segment: LossySegment,
+  center: number,
+  coordinate: Coordinate,
+  knots: readonly number[],
+): readonly Dip[] {
+  const margin = (t: number): number => {
+    if (t === 0) return Number.POSITIVE_INFINITY;
+    const attenuation = attenuationDb(response, segment.side * coordinate.toOmega(t));
+    return attenuation - (segment.relative ? center : 0) - levelAt(segment, t);
+  };
+  const points = pointsOf(segment, coordinate, knots, response.sigma);
+  const margins = points.map(margin);
+  return points.flatMap((at, n) => {
+    const value = margins[n] as number;
+    const [before, after] = [margins[n - 1], margins[n + 1]];
+    if (value > (before ?? Number.POSITIVE_INFINITY) || value >= (after ?? Number.POSITIVE_INFINITY)) return [];
+    const dip = { segment, margin, at, value };
+    if (before === undefined || after === undefined) return [dip];
+    return [{ ...dip, between: [points[n - 1] as number, points[n + 1] as number] as const }];
   });
 }
 

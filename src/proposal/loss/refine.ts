@@ -1,4 +1,4 @@
-import { equalize } from '../placement/equalize.js';
+import { equalizeNear } from '../placement/equalize.js';
 import type { LineProblem } from '../placement/lobes.js';
 import type { Coordinate } from '../placement/mask-pieces.js';
 import { rejectionDb } from '../placement/rejection-level.js';
@@ -46,8 +46,13 @@ const CHECK_RADIUS = 1e-4;
 /** Promised gains below this, dB, end the search. */
 const SETTLED_DB = 1e-7;
 
-const MOST_STEPS = 60;
-const FROZEN_ROUNDS = 20;
+/** Steps that are slow where loss leaves fewer minima than zeros; usual ones need three. */
+const MOST_STEPS = 150;
+
+/** Rounds with held loss, how far its change settles, and how equal the lobes are made: the linear program does the rest. */
+const FROZEN_ROUNDS = 8;
+const FROZEN_DB = 1e-3;
+const FROZEN_SPREAD_DB = 1e-4;
 
 /**
  * The best zeros with loss near those without: first the lossless placement again with the loss at each lobe held, then steps
@@ -56,7 +61,7 @@ const FROZEN_ROUNDS = 20;
  */
 export function refineWithLoss(problem: LossyProblem, start: readonly number[]): Refined {
   const frozen = withFrozenLoss(problem, start);
-  let here = better(pointAt(problem, start), frozen === undefined ? undefined : pointAt(problem, frozen));
+  let here = better(pointAt(problem, start), pointAt(problem, frozen));
   let radius = FIRST_RADIUS;
   let steps = 0;
   while (steps < MOST_STEPS && radius > SMALLEST_RADIUS && problem.line.count > 0) {
@@ -84,13 +89,14 @@ export function refineWithLoss(problem: LossyProblem, start: readonly number[]):
   };
 }
 
-/** Lossless lobes with the loss at each lobe added as a constant, until the constants settle; undefined when they do not. */
-function withFrozenLoss(problem: LossyProblem, start: readonly number[]): readonly number[] | undefined {
+/** Lossless lobes with the loss at each lobe added as a constant, until the constants settle or Newton fails. */
+function withFrozenLoss(problem: LossyProblem, start: readonly number[]): readonly number[] {
   let nodes = start;
   let offsets: readonly number[] = [];
   for (let round = 0; round < FROZEN_ROUNDS && problem.line.count > 0; round++) {
-    const placed = equalize({ ...problem.line, offsets }, nodes);
-    nodes = [...placed.nodes];
+    const placed = equalizeNear({ ...problem.line, offsets }, nodes, FROZEN_SPREAD_DB);
+    if (placed === undefined) return nodes;
+    nodes = placed.nodes;
     const response = lossyResponse(problem.order, problem.returnLossDb, placesOf(problem, nodes), problem.sigma);
     const next = placed.lobes.map(({ at, potential, source }) => {
       const segment = problem.segments.find((each) => each.source === source) as LossySegment;
@@ -98,10 +104,10 @@ function withFrozenLoss(problem: LossyProblem, start: readonly number[]): readon
       const reference = segment.relative ? attenuationDb(response, 0) : 0;
       return attenuationDb(response, omega) - reference - rejectionDb(potential, problem.line.kappa);
     });
-    if (!next.every(Number.isFinite)) return undefined;
+    if (!next.every(Number.isFinite)) return nodes;
     const change = Math.max(...next.map((offset, i) => Math.abs(offset - (offsets[i] ?? 0))));
     offsets = next;
-    if (change < 1e-3) return nodes;
+    if (change < FROZEN_DB) return nodes;
   }
   return nodes;
 }
@@ -142,4 +148,4 @@ function modelAt(
   return { values: minima.map(({ marginDb }) => marginDb), gradients };
 }
 
-const better = (a: Point, b: Point | undefined): Point => (b !== undefined && b.marginDb > a.marginDb ? b : a);
+const better = (a: Point, b: Point): Point => (b.marginDb > a.marginDb ? b : a);

@@ -15,6 +15,9 @@ export interface Equalized {
 /** Rounds before the search is given up; seeded random masks take 6 in the median and 30 at most. */
 const MOST_ROUNDS = 200;
 
+/** Rounds that suffice from a good start. */
+const FEW_ROUNDS = 12;
+
 /** How far toward its neighboring minima a zero may go in one step: the order stays, and no lobe loses its mask. */
 const CONFINEMENT = 0.8;
 
@@ -26,8 +29,8 @@ const CONFINEMENT = 0.8;
  * halved until the spread of the margins falls; where that fails, or a lobe has no mask, one sweep of `balanced` follows:
  * the difference of the two lobes beside a zero rises with its position alone.
  */
-export function equalize(problem: LineProblem, start?: readonly number[]): Equalized {
-  let nodes: readonly number[] = start ?? equilibriumStart(problem);
+export function equalize(problem: LineProblem): Equalized {
+  let nodes: readonly number[] = equilibriumStart(problem);
   let lobes = lobesOf(problem, nodes);
   let spread = spreadOf(lobes);
   let rounds = 0;
@@ -52,6 +55,23 @@ export function equalize(problem: LineProblem, start?: readonly number[]): Equal
     [nodes, lobes, spread] = [swept, sweptLobes, sweptSpread];
   }
   return { nodes, lobes, rounds };
+}
+
+/** A few Newton steps from zeros that are nearly right; undefined where Newton alone does not get the lobes within `spreadDb`. */
+export function equalizeNear(
+  problem: LineProblem,
+  start: readonly number[],
+  spreadDb: number,
+): Pick<Equalized, 'nodes' | 'lobes'> | undefined {
+  let here = { nodes: start, lobes: lobesOf(problem, start) };
+  for (let round = 0; round < FEW_ROUNDS; round++) {
+    const spread = spreadOf(here.lobes);
+    if (spread <= spreadDb) return here;
+    const stepped = newton(problem, here.nodes, here.lobes, spread);
+    if (stepped === undefined) return undefined;
+    here = stepped;
+  }
+  return undefined;
 }
 
 /** Largest margin minus smallest; Infinity where a lobe has no mask. */
