@@ -35,6 +35,10 @@ def cases():
     for n in (1, 2, 3, 4, 5, 8, 13, 20, 30, 40):
         for edge in ("halfPower", "unitDelay"):
             out.append({"family": "bessel", "order": n, "edge": edge})
+    # Levels at both ends of their ranges.
+    for n, rl, rej in ((1, 100, 150), (3, 60, 300), (6, 60, 80), (6, 100, 1), (7, 0.01, 200), (15, 100, 150), (12, 40, 3)):
+        for family in ("elliptic", "inverseChebyshev"):
+            out.append({"family": family, "order": n, "returnLossDb": rl, "rejectionDb": rej})
     return out
 
 

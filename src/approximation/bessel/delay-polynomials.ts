@@ -40,7 +40,7 @@ function factorial(n: number): bigint {
   return product;
 }
 
-/** Bits behind the point: the terms of order N reach N^N while they cancel, and 64 more stay for the digits of a double. */
+/** Bits behind the point: the terms of order N reach N^N while they cancel, and 192 more stay; 0.4 of these give the same doubles. */
 export function bitsFor(order: number): number {
   return 192 + Math.ceil(order * Math.log2(4 * order + 4));
 }
@@ -77,7 +77,7 @@ export function reflectionRoots(order: number): readonly Complex[] {
     const s = complex(-Math.sin(angle) * (0.74 * order + 0.4), isReal ? 0 : Math.cos(angle) * order);
     return complex(-4 * (s.re * s.re - s.im * s.im), isReal ? 0 : -8 * s.re * s.im);
   });
-  return settled(wholeRoots(reflectionPolynomial(order), starts, 2 * bitsFor(order)), order);
+  return settled(wholeRoots(reflectionPolynomial(order), starts, bitsFor(order)), order);
 }
 
 function settled(roots: readonly Complex[] | undefined, order: number): readonly Complex[] {
