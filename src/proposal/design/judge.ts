@@ -97,13 +97,21 @@ export function wantedFor(line: MaskLine, margins: CheckedRequest['margins']): n
 /** How near to the smallest margin, dB, a place counts as holding it. */
 const HELD_DB = 1e-3;
 
+/** A promise of more than this, dB, is told. */
+const UNSETTLED_DB = 1e-3;
+
 /** With all zeros at work the margin is held at one place more than there are zeros; loss that fills a notch takes places away. */
 function remarksOf({ promisedDb, transmissionZeros, marginDb, costs, symmetric }: BestZeros): readonly string[] {
   if (promisedDb === undefined) return [];
   const unknowns = transmissionZeros.length / (symmetric ? 2 : 1);
   const held = costs.filter((cost) => cost.marginDb - marginDb < HELD_DB).length;
-  if (held > unknowns) return [];
+  const settled =
+    promisedDb < UNSETTLED_DB
+      ? []
+      : [`The search with loss did not settle: a small move of the zeros still promises ${promisedDb.toFixed(4)} dB.`];
+  if (held > unknowns) return settled;
   return [
+    ...settled,
     `Loss fills the notches: the margin is held at ${held} places only, where ${transmissionZeros.length} zeros could hold it at ${unknowns + 1}; a zero is partly wasted at this unloaded Q.`,
   ];
 }

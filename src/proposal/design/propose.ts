@@ -11,7 +11,7 @@ import { firstOrder, searchFrom } from './search.js';
  *
  * For each order and number of zeros the best placement is found with proof (`placeZeros`); the smallest order that meets the
  * rejection lines is kept with the fewest zeros and with more, then the next order likewise. Pairs +-w
- * are added where they cost below 0.1 dB. Zeros that gain below 0.3 dB or lie beyond |omega| = 6 are dropped, and designs that
+ * are added to the fewest zeros of an order where they cost below 0.1 dB. Zeros that gain below 0.3 dB or lie beyond |omega| = 6 are dropped, and designs that
  * miss another line of the mask (return loss, insertion loss, variations) are excluded, each with the reason in words. With an
  * unloaded Q the zeros are placed again on the lossy response, with a local certificate. Cost: some 10 ms lossless, some
  * 100 ms with loss.

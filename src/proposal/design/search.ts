@@ -1,9 +1,8 @@
-import { FilterFailure } from '../../numerics/index.js';
-import type { BestZeros, BestZerosTable } from './best-zeros.js';
+import type { BestZerosTable } from './best-zeros.js';
 import { judge } from './judge.js';
-import { lineWords, missWords } from './line-words.js';
 import type { MaskProblem } from './mask-problem.js';
 import type { ExcludedDesign, ProposedDesign, SmallerDesign } from './proposal.js';
+import { attempt, missedRejection, uselessZero } from './reasons.js';
 import type { CheckedRequest } from './request.js';
 
 /** How many counts of zeros are kept at the smallest order that has a design, and at the next one that has. */
@@ -17,10 +16,6 @@ const FURTHER_COUNTS = 2;
 
 /** Loss may raise the margins of a stop band: designs that miss by less than this without loss are looked at with it. */
 const RAISED_BY_LOSS_DB = 1.5;
-
-/** A zero farther out is not worth its coupling, nor one that gains less. */
-const FARTHEST_USEFUL = 6;
-const LEAST_GAIN_DB = 0.3;
 
 /** Pairs +-w are offered where they cost less. */
 const SYMMETRY_PRICE_DB = 0.1;
@@ -80,30 +75,17 @@ function searchOrder(
   let accepted = 0;
   for (let count = least; count <= last && accepted < kept; count++) {
     const found = tryOne(order, count, request, problem, table);
-    if (found.designs.length > 0) accepted++;
-    designs.push(...found.designs);
     excluded.push(...found.excluded);
+    const [free] = found.designs;
+    if (free === undefined) continue;
+    // Pairs for the fewest zeros of an order only: every verdict costs as much as the search for its zeros.
+    designs.push(free, ...(accepted === 0 ? inPairs(free, request, table) : []));
+    accepted++;
   }
   return { designs, excluded, reached: true };
 }
 
-/** The rejection that the best zeros of one order and count miss, in words. */
-function missedRejection(
-  order: number,
-  zeroCount: number,
-  { mask, margins }: CheckedRequest,
-  table: BestZerosTable,
-): string | undefined {
-  const zeros = attempt(() => table.best(order, zeroCount));
-  if (typeof zeros === 'string') return zeros;
-  const missing = margins.rejectionDb - zeros.marginDb;
-  if (missing <= 1e-9) return undefined;
-  const dearest = zeros.costs.reduce((most, cost) => (cost.weight > most.weight ? cost : most));
-  const line = mask[dearest.line] as (typeof mask)[number];
-  return `the rejection is missed by ${missWords(line, missing)}, first at ${lineWords(line, dearest.line)}`;
-}
-
-/** One order and count: the design, with its symmetric variant where that costs little, or the reason against it. */
+/** One order and count: the design, or the reason against it. */
 function tryOne(
   order: number,
   zeroCount: number,
@@ -121,29 +103,17 @@ function tryOne(
   const verdict = attempt(() => judge(request, zeros, smaller));
   if (typeof verdict === 'string') return out(verdict);
   if (verdict.design === undefined) return out(verdict.misses.join('; '));
-  const designs = [verdict.design];
-  if (zeroCount > 0 && zeroCount % 2 === 0) {
-    const pairs = attempt(() => table.best(order, zeroCount, true));
-    if (typeof pairs !== 'string' && zeros.marginDb - pairs.marginDb < SYMMETRY_PRICE_DB) {
-      const second = attempt(() => judge(request, pairs, smaller));
-      if (typeof second !== 'string' && second.design !== undefined) designs.push(second.design);
-    }
-  }
-  return { designs, excluded: [], reached: true };
+  return { designs: [verdict.design], excluded: [], reached: true };
 }
 
-/** Why the last zero is not worth it: too far out, or too little gained where the mask is met without it. */
-function uselessZero(zeros: BestZeros, request: CheckedRequest, table: BestZerosTable): string | undefined {
-  const { order, zeroCount, transmissionZeros, marginDb } = zeros;
-  const farthest = transmissionZeros.reduce((far, omega) => (Math.abs(omega) > Math.abs(far) ? omega : far), 0);
-  if (Math.abs(farthest) > FARTHEST_USEFUL || transmissionZeros.length < zeroCount)
-    return `a zero ${Math.abs(farthest) > FARTHEST_USEFUL ? `at omega = ${farthest.toFixed(1)}` : 'at infinity'} is of no use: farther out than ${FARTHEST_USEFUL}`;
-  if (zeroCount === 0) return undefined;
-  const before = attempt(() => table.best(order, zeroCount - 1));
-  if (typeof before === 'string' || before.marginDb < request.margins.rejectionDb) return undefined;
-  const gain = marginDb - before.marginDb;
-  if (gain >= LEAST_GAIN_DB) return undefined;
-  return `the last zero changes the margin by ${gain.toFixed(2)} dB only, and the mask is met without it`;
+/** The same order and count in pairs +-w, where that costs little and meets the mask too. */
+function inPairs(free: ProposedDesign, request: CheckedRequest, table: BestZerosTable): readonly ProposedDesign[] {
+  const count = free.transmissionZeros.length;
+  if (count === 0 || count % 2 === 1) return [];
+  const pairs = attempt(() => table.best(free.order, count, true));
+  if (typeof pairs === 'string' || free.marginDb - pairs.marginDb >= SYMMETRY_PRICE_DB) return [];
+  const verdict = attempt(() => judge(request, pairs, () => free.smaller));
+  return typeof verdict === 'string' || verdict.design === undefined ? [] : [verdict.design];
 }
 
 /** What one zero fewer, and one resonator fewer, would have beyond what is wanted. */
@@ -187,14 +157,4 @@ function fewestZeros(order: number, most: number, threshold: number, table: Best
 function losslessMargin(table: BestZerosTable, order: number, zeroCount: number): number {
   const placed = attempt(() => table.lossless(order, zeroCount));
   return typeof placed === 'string' ? Number.NEGATIVE_INFINITY : placed.marginDb;
-}
-
-/** A value, or the message of a refusal that concerns this one design: others go on. A stop ends everything. */
-function attempt<T extends object>(find: () => T): T | string {
-  try {
-    return find();
-  } catch (error) {
-    if (error instanceof FilterFailure && error.code !== 'E_STOPPED') return error.message;
-    throw error;
-  }
 }
