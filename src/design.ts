@@ -52,7 +52,7 @@ export function designChecked(specification: Specification): Design {
   refuseUncertified(certificates, specification, (tried) => synthesize(tried).certificates);
   return {
     version: VERSION,
-    specification,
+    specification: withZeros(specification, polynomials),
     polynomials,
     coefficients: coefficients(polynomials),
     transversal: start,
@@ -75,6 +75,12 @@ function maskRows(
 ): readonly MaskRow[] {
   if (unloadedQ === undefined) return evaluateMask(polynomials, band, mask);
   return evaluateMask(typeof unloadedQ === 'number' ? polynomials : matrix, { ...band, unloadedQ }, mask);
+}
+
+/** The specification that documents tell: with the transmission zeros also where the family placed them and nobody asked. */
+function withZeros(specification: Specification, { transmissionZeros }: FilterPolynomials): Specification {
+  if (zerosAskedFor(specification) !== undefined) return specification;
+  return Object.freeze({ ...specification, transmissionZeros });
 }
 
 /** Transfer function, matrices and certificates, whether these hold or not. */

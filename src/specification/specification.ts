@@ -49,7 +49,7 @@ export interface Specification {
   readonly largestPairAtInfinity?: boolean;
   /** `bessel` only. */
   readonly reflectionSide?: ReflectionSide;
-  /** Finite zeros that were asked for, s-plane, normalized; families that place their own have none here. */
+  /** Finite zeros, s-plane, normalized; those of families that place their own are filled in by the design. */
   readonly transmissionZeros: readonly Complex[];
   readonly topology: Topology;
   readonly portCouplings: PortCouplings;

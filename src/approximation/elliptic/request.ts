@@ -56,8 +56,8 @@ export function selectivity(request: StopBandRequest): Selectivity {
   throw refusal(
     'E_STOP_BAND',
     stopBandEdge === undefined ? 'rejectionDb' : 'stopBandEdge',
-    `a stop band that starts ${gap.toPrecision(2)} above the pass band`,
-    `${LEAST_GAP.toPrecision(2)} at least, for zeros held as doubles`,
+    `a gap of ${gap.toExponential(1)} to the stop band`,
+    `${LEAST_GAP.toExponential(1)} at least, for zeros held as doubles`,
     stopBandEdge === undefined ? 'raise the rejection, or lower the order' : 'move the edge outward',
   );
 }

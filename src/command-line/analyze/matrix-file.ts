@@ -99,6 +99,12 @@ function readOwn(reading: Reading, members: Members): MatrixFile | undefined {
   return { matrix, specification, isStated, hasForm: topology !== undefined, hasBand: passband !== undefined };
 }
 
+/** A design states the zeros that its family placed; who asks for the family does not. */
+function withoutOwnZeros(members: Members): Members {
+  const { transmissionZeros: _, ...others } = members;
+  return members.family === 'elliptic' || members.family === 'inverseChebyshev' ? others : members;
+}
+
 function readResult(reading: Reading, members: Members): MatrixFile | undefined {
   checkKeys(reading, members, [], RESULT_KEYS);
   const matrix = readMatrix(reading, members.matrix, ['matrix']);
@@ -107,7 +113,7 @@ function readResult(reading: Reading, members: Members): MatrixFile | undefined 
   if (matrix !== undefined) checkOrder(reading, stated, matrix, ['specification']);
   const { band, remarks: _, ...rest } = stated;
   const { positionOf, faults } = reading;
-  const whole = { ...rest, passband: band };
+  const whole = { ...withoutOwnZeros(rest), passband: band };
   const specification = locating(positionOf, ['specification'], faults, () => checkSpecification(whole));
   if (matrix === undefined || specification === undefined) return undefined;
   return { matrix, specification, isStated: true, hasForm: true, hasBand: true };
