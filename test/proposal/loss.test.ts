@@ -1,10 +1,14 @@
 import { describe, expect, it } from 'vitest';
 import { bandFromEdges, generalizedChebyshev, sweep } from '../../src/index.js';
-import { propose } from '../../src/proposal/index.js';
+import { placeZeros, propose } from '../../src/proposal/index.js';
 import { attenuationDb, gradientOf, lossyResponse } from '../../src/proposal/loss/lossy-response.js';
+import { refineWithLoss } from '../../src/proposal/loss/refine.js';
 import { lineFromOmega, omegaFromLine } from '../../src/proposal/placement/line.js';
+import { SINGLE, segmentsOf } from '../../src/proposal/placement/mask-pieces.js';
+import { kappaOf } from '../../src/proposal/placement/rejection-level.js';
+import { upperEnvelope } from '../../src/proposal/placement/segments.js';
 import { seeded } from '../support/random.js';
-import { MASKS, type MaskName, requestFor } from './masks.js';
+import { MASKS, type MaskName, piecesFor, requestFor } from './masks.js';
 
 const PLACES = [-0.5, 0.4, 0.6];
 
@@ -115,5 +119,44 @@ describe('proposals with loss', () => {
       const cost = (design!.marginDb - propose({ ...request, mask: raised }).designs[0]!.marginDb) / 0.01;
       expect(Math.abs(cost - weight)).toBeLessThan(0.01);
     });
+  });
+});
+
+describe('the search with loss', () => {
+  it.each([
+    ['diplexer', 1500, 7, 3],
+    ['diplexer', 3800, 7, 3],
+    ['channel', 3000, 6, 2],
+    ['baseStation', 800, 7, 3],
+  ] as const)('%s, Qu %i: 12 starts end at the same margin', (name, q, order, zeroCount) => {
+    const { edges, returnLossDb } = MASKS[name];
+    const { centerHz, bandwidthHz } = bandFromEdges(edges[0], edges[1]);
+    const pieces = piecesFor(name).map(({ fromOmega, toOmega, rejectionDb }, source) => ({
+      fromOmega: fromOmega ?? Number.NEGATIVE_INFINITY,
+      toOmega: toOmega ?? Number.POSITIVE_INFINITY,
+      level: rejectionDb as number,
+      source,
+    }));
+    const segments = upperEnvelope(segmentsOf(pieces, SINGLE));
+    const problem = {
+      order,
+      returnLossDb,
+      sigma: centerHz / (bandwidthHz * q),
+      line: { count: zeroCount, field: [{ at: 0, weight: order - zeroCount }], segments, kappa: kappaOf(returnLossDb) },
+      segments: segments.map((segment) => ({ ...segment, relative: false, side: 1 as const })),
+      coordinate: SINGLE,
+    };
+    const lossless = placeZeros({ order, zeroCount, returnLossDb, rejection: piecesFor(name) });
+    const best = refineWithLoss(
+      problem,
+      lossless.transmissionZeros.map(lineFromOmega).sort((a, b) => a - b),
+    ).marginDb;
+    const random = seeded(12);
+    for (let n = 0; n < 12; n++) {
+      const start = lossless.transmissionZeros
+        .map((w) => lineFromOmega(w) * (0.8 + 0.4 * random()))
+        .sort((a, b) => a - b);
+      expect(Math.abs(refineWithLoss(problem, start).marginDb - best)).toBeLessThan(2e-3);
+    }
   });
 });

@@ -1,6 +1,18 @@
 import { describe, expect, it } from 'vitest';
-import { bandFromEdges, evaluateMask, FilterFailure, generalizedChebyshev, type MaskLine } from '../../src/index.js';
-import { type ProposeRequest, propose } from '../../src/proposal/index.js';
+import {
+  type Band,
+  bandFromEdges,
+  evaluateMask,
+  FilterFailure,
+  generalizedChebyshev,
+  hzFromOmega,
+  type Level,
+  type LossyBand,
+  type MaskLine,
+  sweepHz,
+} from '../../src/index.js';
+import { type ProposedDesign, type ProposeRequest, propose } from '../../src/proposal/index.js';
+import { seeded } from '../support/random.js';
 import { maskLines, requestFor } from './masks.js';
 
 const MHZ = 1e6;
@@ -147,6 +159,60 @@ describe('propose', () => {
     expect(asked).toBe(21);
   });
 });
+
+/** A random mask in hertz: one to five rejection lines at 1.05 to 2 of the band, levels 5 to 65 dB, some relative, sloped or points. */
+function randomMask(random: () => number, band: Band): readonly MaskLine[] {
+  return Array.from({ length: 1 + Math.floor(5 * random()) }, () => {
+    const side = random() < 0.5 ? 1 : -1;
+    const near = 1.05 + random() ** 2;
+    const ends = [near, near + 0.1 + 2 * random()].map((omega) => hzFromOmega(band, side * omega));
+    const [fromHz, toHz] = [Math.min(...ends), Math.max(...ends)];
+    const rejectionDb = 5 + 60 * random();
+    const reference = random() < 0.2 ? { relativeTo: 'center' as const } : {};
+    const kind = random();
+    if (kind < 0.4) return { ...(side > 0 ? { fromHz } : { toHz }), rejectionDb, ...reference };
+    if (kind > 0.85) return { fromHz, toHz, rejectionDb: [rejectionDb, 0.6 * rejectionDb] as const, ...reference };
+    return { fromHz, toHz: kind > 0.75 ? fromHz : toHz, rejectionDb, ...reference };
+  });
+}
+
+describe('propose on random masks', () => {
+  it('gives designs whose swept response clears every line by what is stated, or refuses the mask in words', () => {
+    const random = seeded(2024);
+    let refused = 0;
+    for (let n = 0; n < 25; n++) {
+      const band = { centerHz: 2e9, bandwidthHz: 2e9 * 10 ** (-3 + 2.3 * random()) };
+      const unloadedQ = (band.centerHz / band.bandwidthHz) * 10 ** (1 + 2 * random());
+      const mask = randomMask(random, band);
+      try {
+        for (const design of propose({ passband: band, returnLossDb: 18, mask, unloadedQ }).designs)
+          for (const row of design.mask)
+            expect(sweptRow(design, { ...band, unloadedQ }, row.line)).toBeGreaterThanOrEqual(row.margin - 1e-6);
+      } catch (error) {
+        if (!(error instanceof FilterFailure && error.code === 'E_MASK')) throw error;
+        refused++;
+      }
+    }
+    expect(refused).toBeLessThanOrEqual(2);
+  });
+});
+
+/** Margin of a line on 801 points, an open end followed out to omega = 50. */
+function sweptRow(design: ProposedDesign, band: LossyBand, line: MaskLine): number {
+  const { order, transmissionZeros } = design;
+  const model = generalizedChebyshev({ order, returnLossDb: 18, transmissionZeros });
+  const [from, to] = [line.fromHz ?? hzFromOmega(band, -50), line.toHz ?? hzFromOmega(band, 50)];
+  const grid = Float64Array.from({ length: 801 }, (_, n) => from + (to - from) * (n / 800) ** 2);
+  const { s21 } = sweepHz(model, band, [band.centerHz, ...grid]);
+  const loss = (n: number): number => -20 * Math.log10(Math.hypot(s21.re[n]!, s21.im[n]!));
+  const level = (line as { rejectionDb: Level }).rejectionDb;
+  const reference = line.relativeTo === 'center' ? loss(0) : 0;
+  const margins = Array.from(grid, (hz, n) => {
+    const wanted = typeof level === 'number' ? level : level[0] + ((level[1] - level[0]) * (hz - from)) / (to - from);
+    return loss(n + 1) - reference - wanted;
+  });
+  return Math.min(...margins);
+}
 
 describe('propose refuses', () => {
   const inBand = (line: object): object => requestFor('channel', { mask: [...maskLines('channel'), line as MaskLine] });

@@ -1,5 +1,5 @@
-import { type Level, type MaskLine, omegaFromHz } from '../../forms/index.js';
-import type { LevelOverOmega, MaskPiece } from '../placement/mask-pieces.js';
+import { hzFromOmega, type Level, type MaskLine, omegaFromHz } from '../../forms/index.js';
+import type { MaskPiece } from '../placement/mask-pieces.js';
 import { kappaOf, rejectionDb } from '../placement/rejection-level.js';
 import type { CheckedRequest } from './request.js';
 
@@ -47,27 +47,16 @@ function endsOf({ fromHz, toHz }: MaskLine, band: CheckedRequest['band']): Pick<
   };
 }
 
-/** A pair is straight in hertz: over omega it follows the band-pass map, `d omega/df = (1 + (f0/f)^2)/B`. */
+/** A pair is straight in hertz, on the exact band-pass map. */
 function levelOf({ fromHz, toHz }: MaskLine, level: Level, band: CheckedRequest['band']): MaskPiece['level'] {
   if (typeof level === 'number') return level;
   if (level[0] === level[1] || fromHz === undefined || toHz === undefined || fromHz === toHz) return greatest(level);
-  const { centerHz, bandwidthHz } = band;
   const dbPerHz = (level[1] - level[0]) / (toHz - fromHz);
-  return (omega) => {
-    const x = (omega * bandwidthHz) / (2 * centerHz);
-    const root = Math.sqrt(1 + x * x);
-    const hz = x >= 0 ? centerHz * (root + x) : centerHz / (root - x);
-    const hzPerOmega = bandwidthHz / (1 + (centerHz / hz) ** 2);
-    return { value: level[0] + dbPerHz * (hz - fromHz), slope: dbPerHz * hzPerOmega };
-  };
+  return (omega) => level[0] + dbPerHz * (hzFromOmega(band, omega) - fromHz);
 }
 
-function raised(level: MaskPiece['level'], by: number): number | LevelOverOmega {
-  if (typeof level === 'number') return level + by;
-  return (omega) => {
-    const { value, slope } = level(omega);
-    return { value: value + by, slope };
-  };
+function raised(level: MaskPiece['level'], by: number): MaskPiece['level'] {
+  return typeof level === 'number' ? level + by : (omega) => level(omega) + by;
 }
 
 const greatest = (level: Level): number => (typeof level === 'number' ? level : Math.max(...level));

@@ -13,8 +13,8 @@ import { firstOrder, searchFrom } from './search.js';
  * rejection lines is kept with the fewest zeros and with more, then the next order likewise. Pairs +-w
  * are added to the fewest zeros of an order where they cost below 0.1 dB. Zeros that gain below 0.3 dB or lie beyond |omega| = 6 are dropped, and designs that
  * miss another line of the mask (return loss, insertion loss, variations) are excluded, each with the reason in words. With an
- * unloaded Q the zeros are placed again on the lossy response, with a local certificate. Cost: some 10 ms lossless, some
- * 100 ms with loss.
+ * unloaded Q the zeros are placed again on the lossy response, with a local certificate. Cost: 10 to 150 ms lossless,
+ * 20 to 300 ms with loss, most of it verdicts on the mask.
  *
  * A level relative to the center counts, in the lossless search, from the ripple of the band, which is at most its loss there.
  *

@@ -26,11 +26,6 @@ export function omegaFromLine(t: number): number {
   return Math.sign(t) * (1 + 2 / Math.expm1(4 * Math.abs(t)));
 }
 
-/** `d omega/dt = -2/sinh^2(2t)`. */
-export function omegaSlope(t: number): number {
-  return -2 / Math.sinh(2 * t) ** 2;
-}
-
 /**
  * The same for pairs +-w: with `u = -ln(1 - 1/w^2)/4 >= 0` the two zeros of a pair at v together add `g(u - v)`, and m zeros
  * at infinity add `(m/2)*g(u)` (from tanh(t - s)*tanh(t + s) = tanh(u - v), `exp(2u) = cosh(2t)`).
@@ -45,12 +40,6 @@ export function pairLineFromOmega(omega: number): number {
 /** Positive frequency of a pair at u >= 0. */
 export function omegaFromPairLine(u: number): number {
   return u === 0 ? Number.POSITIVE_INFINITY : 1 / Math.sqrt(-Math.expm1(-4 * u));
-}
-
-/** `d|omega|/du = -2*|omega|*(omega^2 - 1)`. */
-export function pairOmegaSlope(u: number): number {
-  const omega = omegaFromPairLine(u);
-  return -2 * omega * (omega - 1) * (omega + 1);
 }
 
 /** `acosh` of the filtering function at t; infinite on a zero. */

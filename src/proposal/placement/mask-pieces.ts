@@ -1,15 +1,8 @@
-import {
-  lineFromOmega,
-  omegaFromLine,
-  omegaFromPairLine,
-  omegaSlope,
-  pairLineFromOmega,
-  pairOmegaSlope,
-} from './line.js';
+import { lineFromOmega, omegaFromLine, omegaFromPairLine, pairLineFromOmega } from './line.js';
 import type { Segment } from './segments.js';
 
-/** A level in dB at a normalized frequency, and its derivative there. */
-export type LevelOverOmega = (omega: number) => { readonly value: number; readonly slope: number };
+/** A level in dB over normalized frequency. */
+export type LevelOverOmega = (omega: number) => number;
 
 /** A stretch of rejection on one side of the band, normalized frequencies; +-Infinity for an open end. */
 export interface MaskPiece {
@@ -24,21 +17,18 @@ export interface Coordinate {
   readonly fromOmega: (omega: number) => number;
   /** Frequency at a place; of a pair the positive one. */
   readonly toOmega: (t: number) => number;
-  readonly slope: (t: number) => number;
   readonly pairs: boolean;
 }
 
 export const SINGLE: Coordinate = {
   fromOmega: lineFromOmega,
   toOmega: omegaFromLine,
-  slope: omegaSlope,
   pairs: false,
 };
 
 export const PAIRS: Coordinate = {
   fromOmega: pairLineFromOmega,
   toOmega: omegaFromPairLine,
-  slope: pairOmegaSlope,
   pairs: true,
 };
 
@@ -50,7 +40,7 @@ export function segmentsOf(pieces: readonly MaskPiece[], coordinate: Coordinate)
     return {
       low: Math.min(...ends),
       high: Math.max(...ends),
-      level: typeof level === 'number' ? level : slopedOver(level, coordinate, side),
+      level: typeof level === 'number' ? level : (t: number) => level(side * coordinate.toOmega(t)),
       source,
     };
   });
@@ -59,11 +49,4 @@ export function segmentsOf(pieces: readonly MaskPiece[], coordinate: Coordinate)
 /** 1 for a piece above the band, -1 below. */
 export function sideOf({ fromOmega, toOmega }: Pick<MaskPiece, 'fromOmega' | 'toOmega'>): 1 | -1 {
   return fromOmega >= 1 && toOmega >= 1 ? 1 : -1;
-}
-
-function slopedOver(level: LevelOverOmega, coordinate: Coordinate, side: 1 | -1): Segment['level'] {
-  return (t) => {
-    const { value, slope } = level(side * coordinate.toOmega(t));
-    return { value, slope: slope * side * coordinate.slope(t) };
-  };
 }

@@ -1,5 +1,5 @@
-/** A level that changes along the line: value in dB and derivative with respect to the coordinate. */
-export type SlopedLevel = (t: number) => { readonly value: number; readonly slope: number };
+/** A level, dB, that changes along the line. */
+export type SlopedLevel = (t: number) => number;
 
 /** A stretch of mask on the line, ends included; `source` says which line of the mask it comes from. */
 export interface Segment {
@@ -11,7 +11,7 @@ export interface Segment {
 
 /** Level of a segment at t, dB. */
 export function levelAt({ level }: Segment, t: number): number {
-  return typeof level === 'number' ? level : level(t).value;
+  return typeof level === 'number' ? level : level(t);
 }
 
 /**
