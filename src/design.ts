@@ -1,4 +1,4 @@
-import { butterworth, coefficients, generalizedChebyshev, type PolynomialCoefficients } from './approximation/index.js';
+import { approximate, coefficients, type PolynomialCoefficients, zerosAskedFor } from './approximation/index.js';
 import { denormalize, evaluateMask, type HandOver } from './bandpass/index.js';
 import { certify } from './certification/index.js';
 import type { Certificate, CouplingMatrix, FilterPolynomials, MaskRow, Rotation } from './forms/index.js';
@@ -52,7 +52,7 @@ export function designChecked(specification: Specification): Design {
   refuseUncertified(certificates, specification, (tried) => synthesize(tried).certificates);
   return {
     version: VERSION,
-    specification,
+    specification: withZeros(specification, polynomials),
     polynomials,
     coefficients: coefficients(polynomials),
     transversal: start,
@@ -77,6 +77,12 @@ function maskRows(
   return evaluateMask(typeof unloadedQ === 'number' ? polynomials : matrix, { ...band, unloadedQ }, mask);
 }
 
+/** The specification that documents tell: with the transmission zeros also where the family placed them and nobody asked. */
+function withZeros(specification: Specification, { transmissionZeros }: FilterPolynomials): Specification {
+  if (zerosAskedFor(specification) !== undefined) return specification;
+  return Object.freeze({ ...specification, transmissionZeros });
+}
+
 /** Transfer function, matrices and certificates, whether these hold or not. */
 function synthesize(specification: Specification): {
   polynomials: FilterPolynomials;
@@ -87,19 +93,15 @@ function synthesize(specification: Specification): {
   const polynomials = approximate(specification);
   const start = transversal(polynomials);
   const reduced = shape(start, specification.topology);
+  const askedZeros = zerosAskedFor(specification);
   const certificates = certify(polynomials, reduced.matrix, {
     before: start,
     rotations: reduced.rotations,
     leftover: reduced.leftover,
     structure: specification.topology,
-    askedZeros: specification.transmissionZeros,
+    ...(askedZeros === undefined ? {} : { askedZeros }),
   });
   return { polynomials, start, reduced, certificates };
-}
-
-function approximate({ family, order, returnLossDb, transmissionZeros }: Specification): FilterPolynomials {
-  if (family === 'butterworth') return butterworth({ order });
-  return generalizedChebyshev({ order, returnLossDb: returnLossDb as number, transmissionZeros });
 }
 
 function shape(start: CouplingMatrix, topology: Specification['topology']): Reduced {

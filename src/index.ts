@@ -4,8 +4,28 @@
  *
  * @packageDocumentation
  */
-export type { GeneralizedChebyshevRequest, PolynomialCoefficients, TransmissionZero } from './approximation/index.js';
-export { butterworth, chebyshev, coefficients, generalizedChebyshev } from './approximation/index.js';
+export type {
+  BesselRequest,
+  EllipticRequest,
+  GeneralizedChebyshevRequest,
+  InverseChebyshevRequest,
+  PolynomialCoefficients,
+  PrototypeElements,
+  PrototypeRequest,
+  TransmissionZero,
+} from './approximation/index.js';
+export {
+  bandstop,
+  bessel,
+  butterworth,
+  chebyshev,
+  coefficients,
+  elliptic,
+  generalizedChebyshev,
+  inlineMatrix,
+  inverseChebyshev,
+  prototypeElements,
+} from './approximation/index.js';
 export type {
   CouplingRow,
   HandOver,
@@ -67,6 +87,7 @@ export type {
   MaskLineInput,
   PassbandInput,
   PortCouplings,
+  ReflectionSide,
   Specification,
   SpecificationFamily,
   SpecificationInput,

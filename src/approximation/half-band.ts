@@ -33,7 +33,7 @@ export function halfBandRoots(
     if (angle === undefined) return undefined;
     const oneMinus = 2 * Math.sin(phi / 2) ** 2;
     roots.push({
-      zero: belowEdge(0, oneMinus),
+      zero: rootBelowEdge(0, oneMinus),
       oneMinus,
       onePlus: 2 * Math.cos(phi / 2) ** 2,
       pole: poleAt(angle),
@@ -64,11 +64,11 @@ function startAngle(phase: BandPhase, low: number, target: number): number {
 /** `s = j*cos(z)`, reflected into the left half plane; `1 - Re cos(z)` is formed without cancellation. */
 function poleAt(z: Complex): FineRoot {
   const offset = 2 * Math.sin(z.re / 2) ** 2 * Math.cosh(z.im) - 2 * Math.sinh(z.im / 2) ** 2;
-  return belowEdge(-Math.sin(z.re) * Math.sinh(z.im), offset);
+  return rootBelowEdge(-Math.sin(z.re) * Math.sinh(z.im), offset);
 }
 
 /** A root at `re + j*(1 - offset)` with what rounding of the imaginary part leaves over (Knuth's two-sum). */
-function belowEdge(re: number, offset: number): FineRoot {
+export function rootBelowEdge(re: number, offset: number): FineRoot {
   const im = 1 - offset;
   const part = im - 1;
   return { re, im, imRest: 1 - (im - part) + (-offset - part) };

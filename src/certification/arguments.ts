@@ -2,7 +2,14 @@ import type { Complex, CouplingMatrix, FilterPolynomials } from '../forms/index.
 import { FilterFailure } from '../numerics/index.js';
 import type { CertificationContext } from './context.js';
 
-const FAMILIES: readonly unknown[] = ['generalizedChebyshev', 'butterworth', 'lossless'];
+const FAMILIES: readonly unknown[] = [
+  'generalizedChebyshev',
+  'butterworth',
+  'inverseChebyshev',
+  'elliptic',
+  'bessel',
+  'lossless',
+];
 
 const STRUCTURES: readonly unknown[] = ['folded', 'arrow', 'inline', 'transversal'];
 

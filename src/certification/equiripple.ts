@@ -17,7 +17,7 @@ const GOLDEN = 0.6180339887498949;
  */
 export function equiripple(polynomials: FilterPolynomials): Certificate[] {
   const { family, order, returnLossDb } = polynomials;
-  if (family !== 'generalizedChebyshev') return [];
+  if (family !== 'generalizedChebyshev' && family !== 'elliptic') return [];
   // Without its level an equiripple response cannot be certified; leaving the check out would let it pass.
   if (returnLossDb === undefined)
     return [atMost('C4 ripple level against the return loss, dB', Number.NaN, LEVEL_LIMIT_DB)];

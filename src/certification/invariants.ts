@@ -8,19 +8,30 @@ const DRIFT_LIMIT = 1e-11;
 /**
  * C7 for a rotated matrix: what a change of the resonators' basis cannot change, before and after.
  *
- * Eigenvalues of the resonator block, relative to its norm; `m_x^T M^k m_y` for x, y = source, load and k = 0 .. 2N-1,
+ * Eigenvalues of the resonator block, relative to its norm, or to the width that the ports give the broadest resonance where
+ * that is larger (one resonator at the center has an eigenvalue of rounding size); `m_x^T M^k m_y` for x, y = source, load and k = 0 .. 2N-1,
  * relative to `|m_x| |m_y| |M|^k`; the three port entries. Together they fix the response.
  */
 export function invariants(before: CouplingMatrix, after: CouplingMatrix): Certificate[] {
   const old = symmetricEigenvalues(resonatorBlock(before));
   const now = symmetricEigenvalues(resonatorBlock(after));
-  const norm = old.reduce((largest, x) => Math.max(largest, Math.abs(x)), 0) || 1;
+  const norm =
+    Math.max(
+      old.reduce((largest, x) => Math.max(largest, Math.abs(x)), 0),
+      widest(before),
+    ) || 1;
   const drift = old.reduce((worst, x, i) => Math.max(worst, Math.abs(x - (now[i] ?? Number.NaN))), 0);
   return [
     atMost('C7 drift of the eigenvalues', drift / norm, DRIFT_LIMIT),
     atMost('C7 drift of the Markov numbers', markovDrift(before, after, norm), DRIFT_LIMIT),
     atMost('C7 drift of the port entries', portDrift(before, after), DRIFT_LIMIT),
   ];
+}
+
+/** Square of the largest port coupling: half the width in omega of that resonator loaded by its port. */
+function widest(matrix: CouplingMatrix): number {
+  const couplings = [...portColumn(matrix, 0), ...portColumn(matrix, matrix.order + 1)];
+  return couplings.reduce((largest, m) => Math.max(largest, m * m), 0);
 }
 
 function resonatorBlock(matrix: CouplingMatrix): number[][] {

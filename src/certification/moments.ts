@@ -1,7 +1,11 @@
 import type { Certificate, Complex, CouplingMatrix, FilterPolynomials } from '../forms/index.js';
+import { polesByRounding } from './fitted-poles.js';
 import { atMost, EPSILON } from './verdict.js';
 
-/** Units of rounding, relative to the sum of all magnitudes in the identity. */
+/**
+ * Units of rounding, relative to the sum of all magnitudes in the identity; for the poles plus what rounding of F and P moves
+ * them by, since a matrix has the poles that F and P fix.
+ */
 const ROUNDING_LIMIT = 30;
 
 /**
@@ -16,10 +20,10 @@ const ROUNDING_LIMIT = 30;
 export function powerSums(polynomials: FilterPolynomials, matrix: CouplingMatrix): Certificate[] {
   const { order, poles, reflectionZeros } = polynomials;
   const sums = portSums(matrix);
-  const certificates = identities('poles', poles, traces(sums, -1));
+  const certificates = identities('poles', poles, traces(sums, -1), polesByRounding(polynomials));
   // Fewer reflection zeros than the order: S11 vanishes at infinity, G does not exist and neither do the identities.
   if (reflectionZeros.length < order) return certificates;
-  return [...certificates, ...identities('reflection zeros', reflectionZeros, traces(sums, 1))];
+  return [...certificates, ...identities('reflection zeros', reflectionZeros, traces(sums, 1), [])];
 }
 
 interface PortSums {
@@ -106,16 +110,17 @@ function squareTrace(g: readonly [Complex, Complex, Complex], q: readonly [numbe
   };
 }
 
-function identities(name: string, roots: readonly Complex[], traced: Traces): Certificate[] {
+function identities(name: string, roots: readonly Complex[], traced: Traces, moves: readonly number[]): Certificate[] {
   let [re, im, squareRe, squareIm, size, squareSize] = [0, 0, 0, 0, 0, 0];
-  for (const root of roots) {
+  roots.forEach((root, k) => {
+    const move = moves[k] ?? 0;
     re += root.re;
     im += root.im;
     squareRe += root.re * root.re - root.im * root.im;
     squareIm += 2 * root.re * root.im;
-    size += Math.hypot(root.re, root.im);
-    squareSize += root.re * root.re + root.im * root.im;
-  }
+    size += Math.hypot(root.re, root.im) + move;
+    squareSize += root.re * root.re + root.im * root.im + 2 * Math.hypot(root.re, root.im) * move;
+  });
   const first = Math.hypot(traced.first.re + im, traced.first.im - re);
   const second = Math.hypot(traced.second.re + squareRe, traced.second.im + squareIm);
   return [

@@ -18,7 +18,8 @@ export interface RootResponse extends Response {
  * S of the product form at real omega, one quotient of differences after the other, never expanded; cost O(N) a point.
  *
  * `S11 = F/(epsilonR*E)`, `S21 = S12 = P/(epsilon*E)`, and S22 from losslessness: its zeros are the mirror images
- * `-conj f` of those of S11 and its leading constant is the same `1/epsilonR`.
+ * `-conj f` of those of S11 and its leading constant is the same `1/epsilonR`; with nf zeros, fewer than N, times (-1)^(N - nf):
+ * `S22 = -(S21/conj S21) conj S11`, and P has N zeros then, so that `lead^2 = -1`.
  */
 export function rootResponse(polynomials: FilterPolynomials, omega: Float64Array): RootResponse {
   const poles = split(polynomials.poles);
@@ -28,13 +29,15 @@ export function rootResponse(polynomials: FilterPolynomials, omega: Float64Array
   const lead = polynomials.transmissionLead;
   const gain = { re: lead.re / polynomials.epsilon, im: lead.im / polynomials.epsilon };
   const level = { re: 1 / polynomials.epsilonR, im: 0 };
+  const missing = polynomials.order - polynomials.reflectionZeros.length;
+  const mirroredLevel = { re: missing % 2 === 0 ? level.re : -level.re, im: 0 };
   const s21 = quotients(transmission, poles, gain, omega);
   return {
     omega,
     s11: quotients(reflection, poles, level, omega),
     s21,
     s12: s21,
-    s22: quotients(mirrored, poles, level, omega),
+    s22: quotients(mirrored, poles, mirroredLevel, omega),
     poleSpread: spread(poles, omega),
     reflectionSpread: spread(reflection, omega),
     transmissionSpread: spread(transmission, omega),

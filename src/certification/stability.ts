@@ -65,7 +65,7 @@ function signed(degree: number, size: number): number {
 }
 
 /** `prod_k (z - r_k)(z + conj r_k)` at z = pole i, over the product of its distances to all other poles and mirrored poles. */
-function overGaps(poles: readonly FineRoot[], i: number, roots: readonly FineRoot[]): Complex {
+export function overGaps(poles: readonly FineRoot[], i: number, roots: readonly FineRoot[]): Complex {
   const z = poles[i] ?? { re: Number.NaN, im: Number.NaN };
   let value: Complex = { re: 1, im: 0 };
   for (let k = 0; k < Math.max(poles.length, roots.length); k++) {

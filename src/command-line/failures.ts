@@ -21,12 +21,7 @@ const FILE_CODES: readonly string[] = [
 ];
 
 /** A result that could not be proven, or not be reached: good input, no answer. */
-const UNPROVEN_CODES: readonly string[] = [
-  'E_CERT',
-  'E_ILL_CONDITIONED',
-  'E_NO_CONVERGENCE',
-  'E_NOT_SYMMETRIC_RESPONSE',
-];
+const UNPROVEN_CODES: readonly string[] = ['E_CERT', 'E_ILL_CONDITIONED', 'E_NO_CONVERGENCE'];
 
 /** Thrown where the user's interrupt is noticed; what was begun has been taken away by then. */
 export class Interrupted extends Error {

@@ -37,8 +37,9 @@ Design file, the least:
   { "passband": { "lowerHz": "3822 MHz", "upperHz": "3858 MHz" },
     "order": 6, "returnLossDb": 22 }
 Further keys: name, notes, revision, date, family, transmissionZeros, topology,
-portCouplings, unloadedQ, mask, sweep. Frequencies are text with a unit or
-numbers of hertz.
+portCouplings, unloadedQ, mask, sweep; with some families rejectionDb,
+stopBandEdge, largestPairAtInfinity, reflectionSide. Frequencies are text with
+a unit or numbers of hertz.
 "irisloom schema" describes every key.
 
 Results:
@@ -72,7 +73,7 @@ Keys of the file:
                  as in a design file: the response that the matrix should have
 A result.json that "irisloom design" wrote is accepted as it is.
 
-Where the file states a response (a return loss, or the family butterworth), the
+Where the file states a response (a return loss, or a family without one), the
 matrix is certified against it, to 1e-9. The analysis is printed in any case; if
 a certificate fails, the exit status is 3. A matrix rounded to four decimals
 fails: state no response to look at it for its own sake.

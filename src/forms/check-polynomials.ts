@@ -21,8 +21,9 @@ export function checkPolynomials(polynomials: FilterPolynomials): FilterPolynomi
   if (!Number.isInteger(order) || order < 1)
     throw refusal('E_POLYNOMIALS', 'polynomials.order', order, 'a whole number from 1', 'correct the order');
   checkRoots('poles', poles, order, order);
-  checkRoots('reflectionZeros', reflectionZeros, order, order);
   checkRoots('transmissionZeros', transmissionZeros, 0, order);
+  checkRoots('reflectionZeros', reflectionZeros, transmissionZeros.length === order ? 0 : order, order);
+  checkBandstop(order, reflectionZeros);
   checkNumbers('transmissionLead', transmissionLead);
   for (const [name, value] of [
     ['epsilon', epsilon],
@@ -33,6 +34,22 @@ export function checkPolynomials(polynomials: FilterPolynomials): FilterPolynomi
     }
   }
   return polynomials;
+}
+
+/**
+ * Fewer reflection zeros than the order: a band-stop response, whose S11 vanishes at infinite frequency. The form holds one
+ * constant for S11 and S22, so they must be equal there: an even number is missing, and the others lie on the axis.
+ */
+function checkBandstop(order: number, zeros: readonly Complex[]): void {
+  const missing = order - zeros.length;
+  if (missing === 0 || (missing % 2 === 0 && zeros.every(({ re }) => re === 0))) return;
+  throw refusal(
+    'E_POLYNOMIALS',
+    'polynomials.reflectionZeros.length',
+    zeros.length,
+    `${order}, or an even number fewer on the imaginary axis`,
+    'match the order',
+  );
 }
 
 function checkRoots(name: string, roots: readonly Complex[], least: number, most: number): void {

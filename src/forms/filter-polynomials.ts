@@ -9,7 +9,7 @@ export interface FineRoot extends Complex {
 }
 
 /** Which law a transfer function obeys, and so which certificates apply; `lossless` = none but losslessness. */
-export type Family = 'generalizedChebyshev' | 'butterworth' | 'lossless';
+export type Family = 'generalizedChebyshev' | 'butterworth' | 'inverseChebyshev' | 'elliptic' | 'bessel' | 'lossless';
 
 /**
  * A lossless reciprocal two-port response in product form, low-pass prototype variable s = j*omega.
@@ -27,6 +27,12 @@ export interface FilterPolynomials {
   readonly transmissionLead: Complex;
   readonly epsilon: number;
   readonly epsilonR: number;
-  /** Return-loss level of the equiripple band, dB; absent where the family has none. */
+  /** Return-loss level of the equiripple band, or of the edges of a flat one, dB; absent where the family has none. */
   readonly returnLossDb?: number;
+  /** Rejection at the ripple peaks of the stop band, dB; absent where the family has none. */
+  readonly rejectionDb?: number;
+  /** Normalized frequency from which on the stop band keeps its rejection. */
+  readonly stopBandEdge?: number;
+  /** What the frequency scale of a flat-delay response is set by: half power at omega = 1, or the delay 1 at omega = 0. */
+  readonly edge?: 'halfPower' | 'unitDelay';
 }

@@ -51,7 +51,17 @@ export function doubledAdd(a: Doubled, b: Doubled): Doubled {
 
 /** A pair times a double. */
 function doubledTimes(a: Doubled, factor: number): Doubled {
-  return doubledDot(Float64Array.of(factor), Float64Array.of(a.hi), Float64Array.of(a.lo));
+  if (factor === 0 || a.hi === 0) return ZERO;
+  const product = factor * a.hi;
+  const xBig = SPLITTER * factor;
+  const xHigh = xBig - (xBig - factor);
+  const xLow = factor - xHigh;
+  const yBig = SPLITTER * a.hi;
+  const yHigh = yBig - (yBig - a.hi);
+  const yLow = a.hi - yHigh;
+  const rest = xLow * yLow - (product - xHigh * yHigh - xLow * yHigh - xHigh * yLow) + factor * a.lo;
+  const hi = product + rest;
+  return { hi, lo: product - hi + rest };
 }
 
 /** A complex number whose parts are pairs. */

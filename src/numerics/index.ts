@@ -1,6 +1,6 @@
 /** Numerics: arithmetic that knows no trade word.
  *  Takes    numbers, plain complex numbers, arrays of doubles
- *  Gives    complex arithmetic, monotone roots, doubled-precision sums, complex solves, symmetric eigenvalues, the failure class
+ *  Gives    complex arithmetic, monotone roots, doubled-precision sums and products, complex solves, symmetric eigenvalues, the failure class
  *  Refuses  through FilterFailure only
  *  Source   T. J. Dekker, A floating-point technique for extending the available precision, Numer. Math. 18, 1971 (from memory) */
 export {
@@ -23,6 +23,8 @@ export { inverseColumns } from './complex-solve.js';
 export type { Complex } from './complex-type.js';
 export type { Doubled } from './doubled.js';
 export { doubledAdd, doubledDivide, doubledDot, doubledMultiply, doubledSquareRoot } from './doubled.js';
+export type { DoubledProduct } from './doubled-product.js';
+export { doubledProduct, sumRest, timesConstant, timesLinear, timesPowerOfTwo } from './doubled-product.js';
 export type { FailureDetail } from './failure.js';
 export { FilterFailure, refusal } from './failure.js';
 export { EPS } from './limits.js';

@@ -12,15 +12,25 @@ export function scatteringOfPolynomials(polynomials: FilterPolynomials, s: Compl
   let s21 = scale(transmissionLead, 1 / epsilon);
   poles.forEach((pole, n) => {
     const below = complex(s.re - pole.re, above(s.im, pole));
-    const reflection = reflectionZeros[n] as FineRoot;
+    const reflection = reflectionZeros[n];
     const transmission = transmissionZeros[n];
-    s11 = multiply(s11, divide(complex(s.re - reflection.re, above(s.im, reflection)), below));
-    s22 = multiply(s22, divide(complex(s.re + reflection.re, above(s.im, reflection)), below));
-    const factor = transmission === undefined ? complex(1, 0) : complex(s.re - transmission.re, s.im - transmission.im);
+    const [left, right] =
+      reflection === undefined
+        ? [ONE, ONE]
+        : [
+            complex(s.re - reflection.re, above(s.im, reflection)),
+            complex(s.re + reflection.re, above(s.im, reflection)),
+          ];
+    s11 = multiply(s11, divide(left, below));
+    s22 = multiply(s22, divide(right, below));
+    const factor = transmission === undefined ? ONE : complex(s.re - transmission.re, s.im - transmission.im);
     s21 = multiply(s21, divide(factor, below));
   });
   return { s11, s21, s12: s21, s22 };
 }
+
+/** The factor of a zero at infinity. */
+const ONE: Complex = complex(1, 0);
 
 /**
  * Group delay of S21 at `s = loss + j*omega`, `-d phase/d omega = -sum Re 1/(s - z) + sum Re 1/(s - p)`.

@@ -2,6 +2,7 @@ import type { Band } from '../forms/index.js';
 import { readBand } from './band.js';
 import { dateFault } from './calendar-date.js';
 import { deepFreeze, definedOnly } from './defined.js';
+import { familyKeyFaults } from './family-keys.js';
 import type { Fault, Locate } from './faults.js';
 import { kindFault, refuseAny } from './faults.js';
 import { formFaults } from './form-rules.js';
@@ -23,17 +24,17 @@ function push(faults: Fault[], fault: Fault | undefined): void {
   if (fault !== undefined) faults.push(fault);
 }
 
-/** The return loss belongs to the equiripple families: required there, meaningless for half-power edges. */
+/** The return loss belongs to the families whose edges it marks: required there, meaningless for half-power edges. */
 function readReturnLoss(parts: Parts, isPresent: boolean, faults: Fault[]): void {
   if (parts.returnLossDb !== undefined) push(faults, returnLossFault(parts.returnLossDb));
   const path = ['returnLossDb'];
-  if (parts.family !== 'butterworth') {
+  if (parts.family !== 'butterworth' && parts.family !== 'bessel') {
     const misspelled = faults.some((fault) => fault.code === 'E_UNKNOWN_KEY' && fault.limit === 'returnLossDb');
     if (isPresent || misspelled) return;
     faults.push(kindFault(path, undefined, VOCABULARY.returnLossDb?.allowed ?? '', 'add "returnLossDb"'));
   } else if (isPresent) {
     const advice = 'remove it, or choose another family';
-    const allowed = 'no return loss with family "butterworth", whose band edges are half-power points';
+    const allowed = `no return loss with family "${parts.family}", whose band edges are half-power points`;
     faults.push({ code: 'E_RL_RANGE', path, found: String(parts.returnLossDb), allowed, advice });
   }
 }
@@ -51,6 +52,7 @@ function readPartZeros(parts: Parts, band: Band | undefined, unsound: readonly F
 function readParts({ parts, unsound }: Structured, faults: Fault[]): Specification {
   const { name, notes, revision, date, order = 0, family = 'generalizedChebyshev', returnLossDb, unloadedQ } = parts;
   const { topology = 'folded', portCouplings = 'any' } = parts;
+  const { rejectionDb, stopBandEdge, largestPairAtInfinity, reflectionSide } = parts;
   const isBad = (key: string): boolean => unsound.some(({ path }) => path.length === 0 || path[0] === key);
   if (name !== undefined) push(faults, nameFault(name));
   if (notes !== undefined) push(faults, notesFault(notes));
@@ -59,11 +61,13 @@ function readParts({ parts, unsound }: Structured, faults: Fault[]): Specificati
   const read = parts.passband === undefined ? undefined : readBand(parts.passband, faults);
   if (parts.order !== undefined) push(faults, orderFault(order));
   if (!isBad('family')) readReturnLoss(parts, returnLossDb !== undefined || isBad('returnLossDb'), faults);
+  if (!isBad('family')) faults.push(...familyKeyFaults(parts, isBad));
   const zeros = readPartZeros(parts, read?.band, unsound);
   faults.push(...zeros.faults);
   if (order > 0 && !['family', 'topology', 'portCouplings', 'transmissionZeros'].some(isBad)) {
     const count = parts.transmissionZeros?.length ?? 0;
-    faults.push(...formFaults({ order, zeros: count, family, topology, portCouplings }));
+    const isMoved = largestPairAtInfinity === true;
+    faults.push(...formFaults({ order, zeros: count, family, isMoved, topology, portCouplings }));
   }
   if (unloadedQ !== undefined) readUnloadedQ(unloadedQ, parts.order, faults);
   const mask = readMask(parts.mask ?? [], read?.band, faultyElements('mask', unsound), faults);
@@ -75,7 +79,8 @@ function readParts({ parts, unsound }: Structured, faults: Fault[]): Specificati
     ...levelRemarks(returnLossDb),
     ...lossRemarks(unloadedQ, band),
   ];
-  const optional = definedOnly({ name, notes, revision, date, returnLossDb, unloadedQ, sweep });
+  const ofFamily = { returnLossDb, rejectionDb, stopBandEdge, largestPairAtInfinity, reflectionSide };
+  const optional = definedOnly({ name, notes, revision, date, ...ofFamily, unloadedQ, sweep });
   return { ...optional, band, order, family, transmissionZeros: zeros.zeros, topology, portCouplings, mask, remarks };
 }
 
@@ -111,7 +116,7 @@ function inOrder(faults: readonly Fault[], locate: Locate | undefined): readonly
  * @returns a deep-frozen copy with frequencies in hertz and zeros in the s-plane, and remarks on what was adjusted
  * @throws FilterFailure with one code, or with the first code and all faults (20 at most) in `faults`: E_MISSING,
  *   E_UNKNOWN_KEY, E_FORBIDDEN_KEY, E_TYPE, E_NOT_FINITE, E_CHOICE, E_QUANTITY, E_NUMBER_OVERFLOW, E_NAME, E_DATE, E_BAND,
- *   E_ORDER_RANGE, E_RL_RANGE, E_ZERO_COUNT, E_ZERO_RANGE, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR,
+ *   E_ORDER_RANGE, E_RL_RANGE, E_REJECTION_RANGE, E_STOP_BAND, E_FAMILY_KEY, E_ZERO_COUNT, E_ZERO_RANGE, E_ZERO_IN_PASSBAND, E_ZERO_ON_EDGE, E_ZERO_PAIR,
  *   E_ZERO_TOPOLOGY, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
  * @example
  * const checked = checkSpecification({

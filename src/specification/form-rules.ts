@@ -6,6 +6,8 @@ export interface FormRequest {
   readonly order: number;
   readonly zeros: number;
   readonly family: SpecificationFamily;
+  /** An elliptic response of even order with its largest pair of zeros at infinity. */
+  readonly isMoved: boolean;
   readonly topology: Topology;
   readonly portCouplings: PortCouplings;
 }
@@ -17,41 +19,67 @@ function zerosText(count: number): string {
 /** How many zeros fewer than the order the ports leave room for. */
 const PORT_COST: Readonly<Record<PortCouplings, number>> = { any: 0, noDirect: 1, single: 2 };
 
+/** Families with a stop band of their own place their zeros themselves: an even number, the order less one for odd orders. */
+function placesZeros(family: SpecificationFamily): boolean {
+  return family === 'inverseChebyshev' || family === 'elliptic';
+}
+
+/** How many finite zeros the response has: those asked for, or those that its family places. */
+function countOf({ order, zeros, family, isMoved }: FormRequest): number {
+  if (!placesZeros(family)) return zeros;
+  if (order % 2 === 1) return order - 1;
+  return family === 'elliptic' && isMoved ? order - 2 : order;
+}
+
+/** What to do about zeros that are too many: they can be removed only where they were asked for. */
+function fewer({ order, family, isMoved }: FormRequest, surplus: number): string {
+  if (!placesZeros(family)) return `remove ${surplus}`;
+  if (family === 'elliptic' && order % 2 === 0 && !isMoved && surplus <= 2) return 'set largestPairAtInfinity to true';
+  return 'choose another family';
+}
+
 function familyFault({ zeros, family }: FormRequest): Fault | undefined {
   if (family === 'generalizedChebyshev' || zeros === 0) return undefined;
   return {
     code: 'E_ZERO_COUNT',
     path: ['transmissionZeros'],
     found: `${zerosText(zeros)} with family "${family}"`,
-    allowed: 'none: this family has all its zeros at infinity',
+    allowed: placesZeros(family)
+      ? 'none: this family places its own'
+      : 'none: this family has all its zeros at infinity',
     advice: 'remove the zeros, or set family to "generalizedChebyshev"',
     value: zeros,
     limit: 0,
   };
 }
 
-function inlineFault({ order, zeros, topology }: FormRequest): Fault | undefined {
+function inlineFault(request: FormRequest): Fault | undefined {
+  const { order, topology, family } = request;
+  const zeros = countOf(request);
   if (topology !== 'inline' || zeros === 0) return undefined;
   return {
     code: 'E_TOPOLOGY_ZEROS',
     path: ['topology'],
     found: `${zerosText(zeros)} for an in-line chain, whose shortest path from source to load passes k = ${order} resonators`,
     allowed: `at most N-k = ${order}-${order} = 0 zeros`,
-    advice: `remove ${zerosText(zeros)}, or set topology to "folded"`,
+    advice: `${placesZeros(family) ? 'choose another family' : `remove ${zerosText(zeros)}`}, or set topology to "folded"`,
     value: zeros,
     limit: 0,
   };
 }
 
-function portAdvice(order: number, zeros: number, portCouplings: PortCouplings, limit: number): string {
-  const remove = `remove ${zeros - limit}`;
+function portAdvice(request: FormRequest, zeros: number, limit: number): string {
+  const { order, portCouplings } = request;
+  const remove = fewer(request, zeros - limit);
   const wider = portCouplings === 'single' && zeros <= order - 1 ? '"noDirect" or "any"' : '"any"';
   const why =
     zeros === order ? ' to turn the direct source-load coupling on' : ' to let the ports touch more resonators';
   return `set portCouplings to ${wider}${why}, or ${remove}`;
 }
 
-function portFault({ order, zeros, portCouplings }: FormRequest): Fault | undefined {
+function portFault(request: FormRequest): Fault | undefined {
+  const { order, portCouplings } = request;
+  const zeros = countOf(request);
   const limit = Math.max(0, order - PORT_COST[portCouplings]);
   if (zeros <= limit) return undefined;
   const kind =
@@ -61,14 +89,16 @@ function portFault({ order, zeros, portCouplings }: FormRequest): Fault | undefi
     path: ['portCouplings'],
     found: `${zerosText(zeros)} for order ${order} with ${kind}`,
     allowed: `at most N-${PORT_COST[portCouplings]} = ${limit}`,
-    advice: portAdvice(order, zeros, portCouplings, limit),
+    advice: portAdvice(request, zeros, limit),
     value: zeros,
     limit,
   };
 }
 
 /** A form whose ports touch several resonators by definition contradicts `single`. */
-function singleFault({ order, zeros, topology, portCouplings }: FormRequest): Fault | undefined {
+function singleFault(request: FormRequest): Fault | undefined {
+  const { order, topology, portCouplings } = request;
+  const zeros = countOf(request);
   if (portCouplings !== 'single' || order === 1) return undefined;
   const spread = topology === 'transversal' || (topology === 'arrow' && zeros > 0);
   if (!spread) return undefined;

@@ -2,7 +2,7 @@
  *  Takes    bytes | design-file text (JSON) | plain object; frequencies in hertz or as text with a unit
  *  Gives    Specification: every default filled in, hertz, zeros in the normalized s-plane, remarks; JSON Schema; JSON with places
  *  Refuses  E_ENCODING, E_FILE_SIZE, E_JSON_*, E_FORBIDDEN_KEY, E_NUMBER_OVERFLOW, E_MISSING, E_UNKNOWN_KEY, E_TYPE, E_NOT_FINITE,
- *           E_CHOICE, E_QUANTITY, E_NAME, E_DATE, E_BAND, E_ORDER_RANGE, E_RL_RANGE, E_ZERO_*, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
+ *           E_CHOICE, E_QUANTITY, E_NAME, E_DATE, E_BAND, E_ORDER_RANGE, E_RL_RANGE, E_REJECTION_RANGE, E_STOP_BAND, E_FAMILY_KEY, E_ZERO_*, E_TOPOLOGY_ZEROS, E_Q_RANGE, E_MASK, E_SWEEP
  *  Source   T. Bray (ed.), RFC 8259, 2017 (JSON); F. Yergeau, RFC 3629, 2003 (UTF-8) */
 export { checkSpecification } from './check.js';
 export { checkBand, checkMask, checkUnloadedQ } from './doors.js';
@@ -23,6 +23,7 @@ export type {
   MaskLineInput,
   PassbandInput,
   PortCouplings,
+  ReflectionSide,
   Specification,
   SpecificationFamily,
   SpecificationInput,
@@ -31,5 +32,6 @@ export type {
   Topology,
   ZeroInput,
 } from './specification.js';
+export { checkRejection, checkStopBandEdge, REJECTION_DB } from './stop-band.js';
 export type { CheckedZeros } from './zeros/zeros.js';
 export { checkTransmissionZeros } from './zeros/zeros.js';

@@ -21,6 +21,15 @@ function level(
   return described(z.union([z.number(), z.tuple([z.number(), z.number()])]), key);
 }
 
+const FAMILIES = [
+  'generalizedChebyshev',
+  'chebyshev',
+  'butterworth',
+  'inverseChebyshev',
+  'elliptic',
+  'bessel',
+] as const;
+
 const nonNegative = { minimum: 0 };
 const quality = z.number().check(z.meta({ exclusiveMinimum: 0 }));
 
@@ -69,13 +78,15 @@ export const specificationSchema: z.ZodMiniType<SpecificationInput> = z.strictOb
   revision: z.optional(described(z.string(), 'revision', { maxLength: 20 })),
   date: z.optional(described(z.string(), 'date', { format: 'date' })),
   passband,
-  family: z.optional(
-    described(z.enum(['generalizedChebyshev', 'chebyshev', 'butterworth']), 'family', {
-      default: 'generalizedChebyshev',
-    }),
-  ),
+  family: z.optional(described(z.enum(FAMILIES), 'family', { default: 'generalizedChebyshev' })),
   order: described(z.number(), 'order', { type: 'integer', minimum: 1, maximum: 100 }),
   returnLossDb: z.optional(described(z.number(), 'returnLossDb', { minimum: 0.01, maximum: 100 })),
+  rejectionDb: z.optional(described(z.number(), 'rejectionDb', { minimum: 0.1, maximum: 300 })),
+  stopBandEdge: z.optional(described(z.number(), 'stopBandEdge', { exclusiveMinimum: 1, maximum: 10_000 })),
+  largestPairAtInfinity: z.optional(described(z.boolean(), 'largestPairAtInfinity', { default: false })),
+  reflectionSide: z.optional(
+    described(z.enum(['left', 'right', 'alternating']), 'reflectionSide', { default: 'left' }),
+  ),
   transmissionZeros: z.optional(described(z.array(zero), 'transmissionZeros', { default: [], maxItems: 100 })),
   topology: z.optional(
     described(z.enum(['folded', 'arrow', 'inline', 'transversal']), 'topology', { default: 'folded' }),

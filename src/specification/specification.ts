@@ -1,7 +1,16 @@
 import type { Band, Complex, MaskLine } from '../forms/index.js';
 
 /** Families that a specification can ask for; `chebyshev` is the all-pole one. */
-export type SpecificationFamily = 'generalizedChebyshev' | 'chebyshev' | 'butterworth';
+export type SpecificationFamily =
+  | 'generalizedChebyshev'
+  | 'chebyshev'
+  | 'butterworth'
+  | 'inverseChebyshev'
+  | 'elliptic'
+  | 'bessel';
+
+/** In which half plane the reflection zeros of a flat-delay response lie. */
+export type ReflectionSide = 'left' | 'right' | 'alternating';
 
 /** Forms of the coupling matrix that a specification can ask for. */
 export type Topology = 'folded' | 'arrow' | 'inline' | 'transversal';
@@ -26,13 +35,21 @@ export interface Specification {
   readonly revision?: string;
   /** Calendar date, YYYY-MM-DD. */
   readonly date?: string;
-  /** Geometric center and width (equiripple, or half-power for `butterworth`). */
+  /** Geometric center and width (equiripple, or half-power for `butterworth` and `bessel`). */
   readonly band: Band;
   readonly order: number;
   readonly family: SpecificationFamily;
-  /** dB, positive; absent for `butterworth` only. */
+  /** dB, positive; absent for `butterworth` and `bessel` only. */
   readonly returnLossDb?: number;
-  /** Finite zeros, s-plane, normalized. */
+  /** Rejection of the stop band, dB: `inverseChebyshev`, and `elliptic` unless its edge is given. */
+  readonly rejectionDb?: number;
+  /** Normalized edge of the stop band: `elliptic` only. */
+  readonly stopBandEdge?: number;
+  /** Even orders of `elliptic`: the largest pair of transmission zeros lies at infinity. */
+  readonly largestPairAtInfinity?: boolean;
+  /** `bessel` only. */
+  readonly reflectionSide?: ReflectionSide;
+  /** Finite zeros, s-plane, normalized; those of families that place their own are filled in by the design. */
   readonly transmissionZeros: readonly Complex[];
   readonly topology: Topology;
   readonly portCouplings: PortCouplings;
@@ -92,6 +109,10 @@ export interface SpecificationInput {
   readonly family?: SpecificationFamily | undefined;
   readonly order: number;
   readonly returnLossDb?: number | undefined;
+  readonly rejectionDb?: number | undefined;
+  readonly stopBandEdge?: number | undefined;
+  readonly largestPairAtInfinity?: boolean | undefined;
+  readonly reflectionSide?: ReflectionSide | undefined;
   readonly transmissionZeros?: readonly ZeroInput[] | undefined;
   readonly topology?: Topology | undefined;
   readonly portCouplings?: PortCouplings | undefined;

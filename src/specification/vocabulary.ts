@@ -26,7 +26,7 @@ export const VOCABULARY: Readonly<Record<string, Term>> = {
   },
   passband: {
     meaning:
-      'The passband: lowerHz and upperHz, or centerHz and bandwidthHz. Its width is the equiripple width (half-power for butterworth).',
+      'The passband: lowerHz and upperHz, or centerHz and bandwidthHz. Its width is the equiripple width (half-power for butterworth and bessel, where the return loss is reached for inverseChebyshev).',
     allowed: 'an object with lowerHz and upperHz, or with centerHz and bandwidthHz',
   },
   lowerHz: { meaning: 'Lower edge of the passband, hertz or text with a unit.', allowed: FREQUENCY_ALLOWED },
@@ -38,12 +38,13 @@ export const VOCABULARY: Readonly<Record<string, Term>> = {
   bandwidthHz: { meaning: 'Width of the passband, hertz or text with a unit.', allowed: FREQUENCY_ALLOWED },
   family: {
     meaning:
-      'Family of the transfer function: generalizedChebyshev (default), chebyshev (all-pole), butterworth (all-pole, half-power edges).',
-    allowed: '"generalizedChebyshev", "chebyshev" or "butterworth"',
+      'Family of the transfer function: generalizedChebyshev (default), chebyshev (all-pole), butterworth (all-pole, half-power edges), inverseChebyshev (flat pass band, equal ripple in the stop band), elliptic (equal ripple in both), bessel (all-pole, flat delay, half-power edges).',
+    allowed: '"generalizedChebyshev", "chebyshev", "butterworth", "inverseChebyshev", "elliptic" or "bessel"',
   },
   order: { meaning: 'Number of resonators.', allowed: `a number, whole, 1 to ${MAX_ORDER}` },
   returnLossDb: {
-    meaning: 'Return loss, dB, positive: of the equiripple band, or on a mask line the least return loss.',
+    meaning:
+      'Return loss, dB, positive: of the equiripple band (at the edges of a flat one), or on a mask line the least return loss.',
     allowed: 'a positive number of dB',
   },
   transmissionZeros: {
@@ -73,7 +74,26 @@ export const VOCABULARY: Readonly<Record<string, Term>> = {
     meaning: 'center: levels are relative to the loss at the center frequency. Absent: absolute, to available power.',
     allowed: '"center"',
   },
-  rejectionDb: { meaning: 'Least rejection over the span, dB, or a pair [at fromHz, at toHz].', allowed: LEVEL },
+  rejectionDb: {
+    meaning:
+      'Rejection of the stop band of inverseChebyshev and elliptic, dB; on a mask line the least rejection over the span, dB, or a pair [at fromHz, at toHz].',
+    allowed: 'a number of dB, or on a mask line a pair [at fromHz, at toHz]',
+  },
+  stopBandEdge: {
+    meaning:
+      'Where the stop band of elliptic starts, normalized (the pass band ends at 1); give this or rejectionDb, the other follows.',
+    allowed: 'a normalized frequency above 1',
+  },
+  largestPairAtInfinity: {
+    meaning:
+      'Even orders of elliptic: true moves the largest pair of transmission zeros to infinity, so that no direct coupling is needed. Default: false.',
+    allowed: 'true or false',
+  },
+  reflectionSide: {
+    meaning:
+      'Where the reflection zeros of bessel lie: left (default) or right half plane, or alternating, pair by pair. The delay is the same; the couplings differ.',
+    allowed: '"left", "right" or "alternating"',
+  },
   insertionLossDb: {
     meaning: 'Greatest insertion loss over the span, dB, or a pair [at fromHz, at toHz].',
     allowed: LEVEL,
@@ -105,6 +125,10 @@ export const KEYS: Readonly<Record<string, readonly string[]>> = {
     'family',
     'order',
     'returnLossDb',
+    'rejectionDb',
+    'stopBandEdge',
+    'largestPairAtInfinity',
+    'reflectionSide',
     'transmissionZeros',
     'topology',
     'portCouplings',

@@ -20,14 +20,17 @@ export function eliminateDoubled(
     Array.from(row, (value) => (value === 0 ? ZERO : { hi: value, lo: 0 })),
   );
   const rotations: Rotation[] = [];
-  for (const { element, pivot, against } of steps) {
+  for (const { element, pivot } of steps) {
     const [kept, turned] = element;
+    const partner = pivot[0] === turned ? pivot[1] : pivot[0];
     const killed = at(rows, kept, turned);
     if (killed.hi === 0) continue;
-    const { cosine, sine } = annihilating(at(rows, kept, against), killed);
-    turnLines(rows, against, turned, cosine, sine);
+    const { cosine, sine } = annihilating(at(rows, kept, partner), killed);
+    turnLines(rows, partner, turned, cosine, sine);
     put(rows, kept, turned, ZERO);
-    rotations.push({ pivot, angle: Math.atan2(sine.hi, cosine.hi) });
+    // A turn of (j, i) is the opposite turn of (i, j).
+    const angle = Math.atan2(sine.hi, cosine.hi);
+    rotations.push({ pivot, angle: pivot[0] === partner ? angle : -angle });
   }
   return { rows: rows.map((row) => Float64Array.from(row, ({ hi, lo }) => hi + lo)), rotations };
 }

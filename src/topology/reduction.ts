@@ -53,7 +53,19 @@ function eliminateCorrected(original: Rows, steps: readonly EliminationStep[]): 
     turnBasis(basis, pivot, rotation.angle);
     return rotation;
   });
-  return { rows: refine(original, basis, steps) ?? rows, rotations };
+  const refined = refine(original, basis, steps);
+  // Couplings over many decades: the correction does not settle, or settles where the rotations do not lead. Then the
+  // elimination itself runs in doubled precision.
+  const isFar = refined === undefined || distanceOf(refined, rows) > FARTHEST_CORRECTION * normOf(original);
+  return isFar ? eliminateDoubled(original, steps) : { rows: refined, rotations };
+}
+
+/** Rounding of an elimination moves an entry by far less than this share of the norm; its certificate allows ten times as much. */
+const FARTHEST_CORRECTION = 1e-11;
+
+/** Largest difference of two matrices' entries. */
+function distanceOf(a: Rows, b: Rows): number {
+  return Math.max(...a.map((row, i) => Math.max(...row.map((value, j) => Math.abs(value - (b[i]?.[j] as number))))));
 }
 
 /** `Q <- R Q`: row i of the basis holds the new resonator i in terms of the old ones. */

@@ -17,6 +17,7 @@ const ORDER = [
   'bandpass',
   'certification',
   'measurement',
+  'proposal',
   'report',
   'command-line',
 ];

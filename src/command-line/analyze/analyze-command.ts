@@ -1,4 +1,4 @@
-import { butterworth, generalizedChebyshev } from '../../approximation/index.js';
+import { approximate, zerosAskedFor } from '../../approximation/index.js';
 import { denormalize, evaluateMask, type LossyBand } from '../../bandpass/index.js';
 import { certify, certifyMatrix } from '../../certification/index.js';
 import { type Certificate, edgesOfBand, omegaFromHz } from '../../forms/index.js';
@@ -18,13 +18,10 @@ const UNIT_BAND: LossyBand = { centerHz: 1e9, bandwidthHz: 1e9 };
 
 function certificatesOf({ matrix, specification, isStated, hasForm }: MatrixFile): readonly Certificate[] {
   if (!isStated) return certifyMatrix(matrix);
-  const { family, order, returnLossDb = 0, transmissionZeros, topology } = specification;
-  const polynomials =
-    family === 'butterworth'
-      ? butterworth({ order })
-      : generalizedChebyshev({ order, returnLossDb, transmissionZeros });
-  const structure = hasForm ? { structure: topology } : {};
-  return certify(polynomials, matrix, { ...structure, askedZeros: transmissionZeros });
+  const structure = hasForm ? { structure: specification.topology } : {};
+  const asked = zerosAskedFor(specification);
+  const askedZeros = asked === undefined ? {} : { askedZeros: asked };
+  return certify(approximate(specification), matrix, { ...structure, ...askedZeros });
 }
 
 function factsOf(file: MatrixFile, band: LossyBand): Pick<Analysis, 'worstReturnLoss' | 'centerLossDb' | 'dips'> {

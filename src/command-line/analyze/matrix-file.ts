@@ -21,7 +21,17 @@ export interface MatrixFile {
   readonly hasBand: boolean;
 }
 
-const RESPONSE_KEYS = ['family', 'order', 'returnLossDb', 'transmissionZeros', 'topology'] as const;
+const RESPONSE_KEYS = [
+  'family',
+  'order',
+  'returnLossDb',
+  'rejectionDb',
+  'stopBandEdge',
+  'largestPairAtInfinity',
+  'reflectionSide',
+  'transmissionZeros',
+  'topology',
+] as const;
 const BAND_KEYS = ['unloadedQ', 'mask'] as const;
 const KEYS = ['matrix', 'name', 'notes', 'passband', ...BAND_KEYS, ...RESPONSE_KEYS] as const;
 
@@ -51,9 +61,12 @@ function needsBand(members: Members): boolean {
   return inHertz || BAND_KEYS.some((key) => members[key] !== undefined);
 }
 
+/** Families that need no level to be stated. */
+const HALF_POWER = ['butterworth', 'bessel'] as const;
+
 /** Whether the members say what response the matrix should have. */
 function statesResponse({ family, returnLossDb, transmissionZeros }: Members): boolean {
-  return returnLossDb !== undefined || transmissionZeros !== undefined || family === 'butterworth';
+  return returnLossDb !== undefined || transmissionZeros !== undefined || HALF_POWER.some((name) => name === family);
 }
 
 /** The members as a whole specification: stand-ins for what is not stated, so that one check tells every fault. */
@@ -86,6 +99,12 @@ function readOwn(reading: Reading, members: Members): MatrixFile | undefined {
   return { matrix, specification, isStated, hasForm: topology !== undefined, hasBand: passband !== undefined };
 }
 
+/** A design states the zeros that its family placed; who asks for the family does not. */
+function withoutOwnZeros(members: Members): Members {
+  const { transmissionZeros: _, ...others } = members;
+  return members.family === 'elliptic' || members.family === 'inverseChebyshev' ? others : members;
+}
+
 function readResult(reading: Reading, members: Members): MatrixFile | undefined {
   checkKeys(reading, members, [], RESULT_KEYS);
   const matrix = readMatrix(reading, members.matrix, ['matrix']);
@@ -94,7 +113,7 @@ function readResult(reading: Reading, members: Members): MatrixFile | undefined 
   if (matrix !== undefined) checkOrder(reading, stated, matrix, ['specification']);
   const { band, remarks: _, ...rest } = stated;
   const { positionOf, faults } = reading;
-  const whole = { ...rest, passband: band };
+  const whole = { ...withoutOwnZeros(rest), passband: band };
   const specification = locating(positionOf, ['specification'], faults, () => checkSpecification(whole));
   if (matrix === undefined || specification === undefined) return undefined;
   return { matrix, specification, isStated: true, hasForm: true, hasBand: true };

@@ -1,4 +1,4 @@
-import { butterworth, generalizedChebyshev } from '../../approximation/index.js';
+import { approximate } from '../../approximation/index.js';
 import type { CouplingMatrix } from '../../forms/index.js';
 import {
   checkSpecification,
@@ -26,7 +26,17 @@ export interface RotationFile {
 }
 
 const KEYS = ['name', 'notes', 'matrix', 'response', 'steps', 'pattern'];
-const RESPONSE_KEYS = ['passband', 'family', 'order', 'returnLossDb', 'transmissionZeros'];
+const RESPONSE_KEYS = [
+  'passband',
+  'family',
+  'order',
+  'returnLossDb',
+  'rejectionDb',
+  'stopBandEdge',
+  'largestPairAtInfinity',
+  'reflectionSide',
+  'transmissionZeros',
+];
 const ANY_BAND = { lowerHz: 1, upperHz: 2 };
 
 /** The transversal matrix of a response that is stated as in a design file. */
@@ -41,10 +51,7 @@ function readResponse(reading: Reading, value: JsonValue | undefined): CouplingM
   const whole = inHertz ? known : { passband: ANY_BAND, ...known };
   const { positionOf, faults } = reading;
   const checked = locating(positionOf, path, faults, () => checkSpecification(whole));
-  if (checked === undefined) return undefined;
-  const { family, order, returnLossDb = 0, transmissionZeros } = checked;
-  if (family === 'butterworth') return transversal(butterworth({ order }));
-  return transversal(generalizedChebyshev({ order, returnLossDb, transmissionZeros }));
+  return checked === undefined ? undefined : transversal(approximate(checked));
 }
 
 function readStart(reading: Reading, members: Members): CouplingMatrix | undefined {
