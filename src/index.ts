@@ -60,6 +60,21 @@ export type { NumberList, ReImSamples, TwoPortData } from './measurement/index.j
 export { formatTouchstone } from './measurement/index.js';
 export type { FailureDetail, PolynomialRoot } from './numerics/index.js';
 export { FilterFailure, polynomialRoots } from './numerics/index.js';
+export type {
+  ActiveMargin,
+  ExcludedDesign,
+  LobeRequest,
+  MaskCost,
+  PlaceZerosRequest,
+  Proposal,
+  ProposedDesign,
+  ProposeRequest,
+  RejectionPiece,
+  SmallerDesign,
+  WantedMargins,
+  ZeroPlacement,
+} from './proposal/index.js';
+export { placeZeros, placeZerosForLobes, propose } from './proposal/index.js';
 export type { DesignReport, DesignSource, Drawing, Markup, Paint, Picture } from './report/index.js';
 export {
   bandPicture,

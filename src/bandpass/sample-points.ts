@@ -4,7 +4,7 @@ import type { Landmark } from '../response/index.js';
 /** Points round each landmark, in half widths: dense at its center, out to 40 half widths. */
 const AROUND: readonly number[] = Array.from({ length: 33 }, (_, n) => Math.tan(((n - 16) / 16) * 1.546));
 
-/** Points spread over a span, dense at its ends. */
+/** Points spread over a span, dense at its ends, and as dense in the far stop band as its slow change there asks. */
 const SPREAD = 129;
 
 /** Narrowest half width a landmark is resolved with, as a fraction of the unit band: a lossless zero has none of its own. */
@@ -21,9 +21,20 @@ export function samplePoints(band: Band, landmarks: readonly Landmark[], fromHz:
     const hz = hzFromOmega(band, omega);
     if (hz > fromHz && hz < toHz) points.add(hz);
   };
-  for (let n = 1; n < SPREAD - 1; n++) put(low + ((high - low) * (1 - Math.cos((Math.PI * n) / (SPREAD - 1)))) / 2);
+  const [left, right] = [shrunk(low), shrunk(high)];
+  for (let n = 1; n < SPREAD - 1; n++)
+    put(stretched(left + ((right - left) * (1 - Math.cos((Math.PI * n) / (SPREAD - 1)))) / 2));
   for (const { omega, halfWidth } of landmarks) {
     for (const offset of AROUND) put(omega + offset * Math.max(halfWidth, NARROWEST));
   }
   return Float64Array.from(points).sort();
+}
+
+/** All of the frequency axis in (-1, 1): near the band like omega, far out like its inverse, as the response itself. */
+function shrunk(omega: number): number {
+  return omega / (1 + Math.abs(omega));
+}
+
+function stretched(share: number): number {
+  return share / (1 - Math.abs(share));
 }

@@ -8,7 +8,7 @@ export interface WorstPoint {
 
 /**
  * Smallest value of a margin over sorted sample frequencies: every sample that is no higher than its neighbors is followed
- * down between them.
+ * down between them, the first and the last one too: a margin may fall just inside the end of its span.
  */
 export function worstPoint(points: Float64Array, margins: Float64Array, marginAt: (hz: number) => number): WorstPoint {
   let worst: WorstPoint = { hz: points[0] as number, margin: margins[0] as number };
@@ -18,9 +18,9 @@ export function worstPoint(points: Float64Array, margins: Float64Array, marginAt
   for (let n = 0; n < points.length; n++) {
     const here = margins[n] as number;
     keep(points[n] as number, here);
-    if (n === 0 || n === points.length - 1) continue;
-    if (here > (margins[n - 1] as number) || here > (margins[n + 1] as number)) continue;
-    const found = localMinimum(marginAt, points[n - 1] as number, points[n + 1] as number);
+    const [before, after] = [Math.max(n - 1, 0), Math.min(n + 1, points.length - 1)];
+    if (before === after || here > (margins[before] as number) || here > (margins[after] as number)) continue;
+    const found = localMinimum(marginAt, points[before] as number, points[after] as number);
     keep(found.x, found.value);
   }
   return worst;

@@ -5,6 +5,8 @@ import {
   folded,
   generalizedChebyshev,
   type MaskLine,
+  omegaFromHz,
+  scatteringAt,
   sweepHz,
   transversal,
 } from '../../src/index.js';
@@ -156,5 +158,27 @@ describe('evaluateMask(model, band, mask)', () => {
     for (const mask of [null, [{}], [{ fromHz: 2, toHz: 1, rejectionDb: 3 }], [{ fromHz: 1e9, rejectionDb: -3 }]]) {
       expect(() => evaluateMask(matrix, band, mask as never)).toThrow(/E_/);
     }
+  });
+});
+
+describe('an open line whose worst point lies just inside its end', () => {
+  it('is judged there: 17.5666 dB at 1964.778 MHz, not the 17.5774 dB of the end', () => {
+    const response = generalizedChebyshev({
+      order: 8,
+      returnLossDb: 16.206276041921228,
+      transmissionZeros: [-1.5732421454678804, 1.4180524369432335],
+    });
+    const band = { centerHz: 2e9, bandwidthHz: 40256782.277119085 };
+    const toHz = 1964981178.6919346;
+    const [row] = evaluateMask(response, band, [{ toHz, rejectionDb: 50.438974769786 }]);
+    // A dense look at the same response near the end, by the closed form of its roots.
+    const attenuation = (hz: number): number => {
+      const { re, im } = scatteringAt(response, omegaFromHz(band, hz)).s21;
+      return -20 * Math.log10(Math.hypot(re, im));
+    };
+    const near = Array.from({ length: 4001 }, (_, n) => attenuation(toHz - n * 500));
+    expect(row!.predicted).toBeLessThanOrEqual(Math.min(...near) + 1e-9);
+    expect(row!.predicted).toBeGreaterThan(Math.min(...near) - 1e-4);
+    expect(row!.margin).toBeCloseTo(17.56661, 4);
   });
 });

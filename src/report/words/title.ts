@@ -56,6 +56,9 @@ const FAMILIES: Readonly<Record<SpecificationFamily, string>> = {
   generalizedChebyshev: 'generalized Chebyshev',
   chebyshev: 'Chebyshev',
   butterworth: 'Butterworth (maximally flat)',
+  inverseChebyshev: 'inverse Chebyshev',
+  elliptic: 'elliptic',
+  bessel: 'Bessel (maximally flat delay)',
 };
 
 /** The family of the response in words. */
