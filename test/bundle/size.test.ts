@@ -9,10 +9,10 @@ interface Ceiling {
 
 /** About a tenth above what was measured: a bundle grows by intent, not by accident. */
 const CEILINGS: Readonly<Record<string, Ceiling>> = {
-  // Measured on 1 December 2026: 183,095 bytes, 57,920 gzipped.
-  design: { bytes: 201_000, gzippedBytes: 64_000 },
-  // Measured on 1 December 2026: 41,728 bytes, 15,237 gzipped.
-  folded: { bytes: 46_000, gzippedBytes: 16_800 },
+  // Measured on 1 December 2026: 214.2 kB, 68.6 kB gzipped; 183 kB before the further families and S11 other than S22.
+  design: { bytes: 235_000, gzippedBytes: 75_000 },
+  // Measured on 1 December 2026: 52.6 kB, 19.3 kB gzipped; 42 kB before synthesis took S11 other than S22.
+  folded: { bytes: 58_000, gzippedBytes: 21_200 },
 };
 
 describe('bundles for browsers', () => {
