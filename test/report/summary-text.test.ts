@@ -147,3 +147,12 @@ describe('delays of a narrow band', () => {
     expect(text).toMatch(/^source +1 +[\d.]+ +(?:[1-9]\d{1,2})\.\d{3} /m);
   });
 });
+
+describe('families that place their own zeros', () => {
+  it('are named with the levels of both bands', () => {
+    const text = summaryText(sampleDesign({ family: 'elliptic', order: 5, rejectionDb: 50 }));
+    expect(text).toContain('Order 5, folded, elliptic, return loss 20 dB, stop band 50 dB, lossless');
+    const byEdge = summaryText(sampleDesign({ family: 'elliptic', order: 5, stopBandEdge: 1.25 }));
+    expect(byEdge).toContain('elliptic, return loss 20 dB, stop band from w = 1.25, lossless');
+  });
+});

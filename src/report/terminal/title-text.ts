@@ -7,13 +7,14 @@ import type { Paint } from './paint.js';
 
 /** What the design is, in four lines. */
 export function titleLines(specification: Specification, unit: FrequencyUnit, paint: Paint): readonly string[] {
-  const { name, band, order, family, returnLossDb, topology, unloadedQ } = specification;
+  const { name, band, order, family, topology, unloadedQ } = specification;
   const zeros = zerosText(specification, unit);
-  const edges = returnLossDb === undefined ? `${familyText(family)}, ` : '';
+  // Of the equiripple families the zeros below say which it is.
+  const kind = /chebyshev/i.test(family) && family !== 'inverseChebyshev' ? '' : `${familyText(family)}, `;
   return [
     ...wrapped(cleanLine(name ?? UNNAMED)).map(paint.strong),
     ...wrapped(bandText(band, unit)),
-    ...wrapped(`Order ${order}, ${topology}, ${edges}${levelText(returnLossDb)}, ${qualityText(unloadedQ)}`),
+    ...wrapped(`Order ${order}, ${topology}, ${kind}${levelText(specification)}, ${qualityText(unloadedQ)}`),
     ...wrapped(zeros),
   ];
 }

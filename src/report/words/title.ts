@@ -47,9 +47,16 @@ export function qualityText(unloadedQ: Specification['unloadedQ']): string {
   return least === most ? `unloaded Q ${least}` : `unloaded Q ${least} to ${most}`;
 }
 
-/** The level that the band edges stand for. */
-export function levelText(returnLossDb: number | undefined): string {
-  return returnLossDb === undefined ? 'half-power edges' : `return loss ${trimmed(returnLossDb, 4)} dB`;
+/** What the band edges stand for, and the stop band of a family that has one. */
+export function levelText({
+  returnLossDb,
+  rejectionDb,
+  stopBandEdge,
+}: Pick<Specification, 'returnLossDb' | 'rejectionDb' | 'stopBandEdge'>): string {
+  const edges = returnLossDb === undefined ? 'half-power edges' : `return loss ${trimmed(returnLossDb, 4)} dB`;
+  const stop = rejectionDb === undefined ? '' : `, stop band ${trimmed(rejectionDb, 4)} dB`;
+  const from = stopBandEdge === undefined ? '' : `, stop band from w = ${trimmed(stopBandEdge, 6)}`;
+  return `${edges}${stop}${from}`;
 }
 
 const FAMILIES: Readonly<Record<SpecificationFamily, string>> = {

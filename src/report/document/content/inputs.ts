@@ -28,8 +28,7 @@ function lossText({ unloadedQ }: Specification): string {
 
 /** The design file, as it was understood. */
 export function inputTable({ specification }: DesignReport, source?: DesignSource): Table {
-  const { name, revision, date, band, family, order, returnLossDb, topology, portCouplings, mask, sweep } =
-    specification;
+  const { name, revision, date, band, family, order, topology, portCouplings, mask, sweep } = specification;
   const unit = unitOf(band);
   const optional = (head: string, line: string | undefined): readonly Row[] =>
     line === undefined || line === '' ? [] : [{ cells: [head, userText(line)] }];
@@ -44,7 +43,7 @@ export function inputTable({ specification }: DesignReport, source?: DesignSourc
       ...optional('Revision', revision),
       ...optional('Date', date),
       stated('Passband', bandText(band, unit)),
-      stated('Family', `${familyText(family)}, ${levelText(returnLossDb)}`),
+      stated('Family', `${familyText(family)}, ${levelText(specification)}`),
       stated('Order', String(order)),
       stated('Zeros', zerosText(specification, unit)),
       stated('Topology', `${topology}; ${PORT_COUPLINGS[portCouplings]}`),

@@ -49,7 +49,7 @@ export function titleFacts(specification: Specification): readonly string[] {
   const unit = unitOf(band);
   const { lowerHz, upperHz } = edgesOfBand(band);
   const zeros = transmissionZeros.length;
-  const edges = returnLossDb === undefined ? HALF_POWER : `, ${levelText(returnLossDb)}`;
+  const edges = returnLossDb === undefined ? HALF_POWER : `, ${levelText(specification)}`;
   return [
     `${frequencyText(lowerHz, unit)}-${frequencyText(upperHz, unit)} ${unit.name}${edges}`,
     many(order, 'resonator'),
