@@ -1,5 +1,16 @@
 import { loadavg } from 'node:os';
-import { arrow, certify, design, folded, generalizedChebyshev, reportHtml, sweep, transversal } from '../dist/index.js';
+import {
+  arrow,
+  bessel,
+  certify,
+  design,
+  elliptic,
+  folded,
+  generalizedChebyshev,
+  reportHtml,
+  sweep,
+  transversal,
+} from '../dist/index.js';
 import { denseSweep } from './dense-baseline.mjs';
 import { fixedLoop, medians } from './measure.mjs';
 
@@ -66,6 +77,15 @@ for (const order of orders) {
 say('specification to arrow matrix, order 40', `${round(designs['arrow 40'])} ms`, '-', true);
 const growth = Math.log(designs['folded 80'] / designs['folded 10']) / Math.log(8);
 say('growth from order 10 to 80', `order^${round(growth)}`, '<= 2.6', growth <= 2.6);
+
+const flat = { 12: bessel({ order: 12, edge: 'halfPower' }), 25: bessel({ order: 25, edge: 'halfPower' }) };
+const others = await medians({
+  'elliptic response, order 12': () => elliptic({ order: 12, returnLossDb: 22, rejectionDb: 60 }),
+  'Bessel response, order 12': () => bessel({ order: 12, edge: 'halfPower' }),
+  'transversal matrix, S11 other than S22, order 12': () => transversal(flat[12]),
+  'transversal matrix, S11 other than S22, order 25': () => transversal(flat[25]),
+});
+for (const [what, time] of Object.entries(others)) say(what, `${round(time)} ms`, '-', true);
 
 const forty = responseOf(40);
 const fortyStart = transversal(forty);
