@@ -7,6 +7,7 @@ import { sweepGeneral } from './general-kernel.js';
 import { sweepLosslessSymmetric } from './lossless-kernel.js';
 import { checkFrequencies, checkLoss, isMatrix, type Model } from './model.js';
 import { modeForm, poleForm } from './pole-form.js';
+import { polynomialKernel } from './polynomial-kernel.js';
 import { delayOfPolynomials, scatteringOfPolynomials } from './polynomial-response.js';
 import { eliminationPlan } from './sparse-factor.js';
 import { sweepSparse } from './sparse-kernel.js';
@@ -70,9 +71,11 @@ function polynomialSweeper(
       'sweep the coupling matrix instead',
     );
   }
+  const kernel = polynomialKernel(polynomials, loss);
   return (omega) => {
     const out = emptyCurves(omega.length, false);
     omega.forEach((w, n) => {
+      if (kernel(w, out, n)) return;
       storePoint(out, n, {
         ...scatteringOfPolynomials(polynomials, complex(loss, w)),
         groupDelay: delayOfPolynomials(polynomials, w, loss),
