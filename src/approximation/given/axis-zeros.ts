@@ -3,10 +3,10 @@ import { EPS } from '../../numerics/index.js';
 import { lookingPoints } from './peak.js';
 import { type PowerSum, powerRatio, sumAt } from './power-sum.js';
 
-/** How much power a root may cost that is moved to the axis: several together, and one alone. */
+/** What the data leave open: power of the sum up to `at` a frequency, as a share of its first power; `lift` is the larger of that and what was added to it. */
 export interface AxisRoom {
-  readonly rounding: number;
-  readonly single: number;
+  readonly lift: number;
+  readonly at: (omega: number) => number;
 }
 
 /**
@@ -15,19 +15,35 @@ export interface AxisRoom {
  * Runs of neighbors are tried from the longest down: m roots become one m-fold zero at their mean when the sum vanishes there
  * within the room, and they either lie on the half circle that a lift makes of such a zero, or the zero changes the power by
  * no more than the room at any frequency looked at. A zero alone goes to where the sum is smallest, if it is within the room
- * there. All others are corrected once more without the lift. Cost O(N^4) at worst.
+ * there. All others are corrected once more without the lift. Where the data leave so much open that the power of the result is
+ * another one, no zero is placed alone, or the lifted roots stay: they have the power of the data to the size of the lift. Cost O(N^4) at worst.
  */
 export function axisZeros(sum: PowerSum, lifted: readonly FineRoot[], room: AxisRoom): readonly FineRoot[] {
-  const merged = mergedRuns(sum, lifted, room.rounding);
+  const test = fitTest(sum, lifted.length);
+  const merged = mergedRuns(sum, lifted, room, test);
   const placed = merged.map((root) => {
     if (root.re === 0) return root;
     const im = smallestNear(sum, root);
+    if (im === undefined || shareAt(sum, im) > room.at(im)) return root;
     // A root as far from the axis as its lift explains: there the sum has grown by no more than the lift.
-    const isNear = im !== undefined && Math.max(shareAt(sum, im), shareAt(sum, im - root.re)) <= room.single;
-    return isNear ? { re: 0, im } : root;
+    return shareAt(sum, im - root.re) <= EXPLAINED * room.lift ? { re: 0, im } : root;
   });
-  return placed.map((root) => (root.re === 0 ? root : corrected(sum, root)));
+  const finish = (roots: readonly FineRoot[]): readonly FineRoot[] =>
+    roots.map((root) => (root.re === 0 ? root : corrected(sum, root)));
+  const finished = finish(placed);
+  if (test(finished) <= LARGEST_CHANGE * room.lift) return finished;
+  const unplaced = finish(merged);
+  return test(unplaced) <= test(lifted) ? unplaced : lifted;
 }
+
+/** Units of the lift that a root it moved may show, its own curvature and the rounding of the data included. */
+const EXPLAINED = 4;
+
+/**
+ * Lifts by which roots together may change the power: each adds its own over the power that is reflected, in a band of 60 dB
+ * a million lifts; beyond it the roots are not those of the data.
+ */
+const LARGEST_CHANGE = 1e3;
 
 /** The sum at a real frequency as a share of its first power. */
 function shareAt(sum: PowerSum, omega: number): number {
@@ -36,17 +52,21 @@ function shareAt(sum: PowerSum, omega: number): number {
   return (2 * Math.abs(value.re)) / size;
 }
 
-function mergedRuns(sum: PowerSum, lifted: readonly FineRoot[], room: number): readonly FineRoot[] {
-  const test = fitTest(sum, lifted.length);
+function mergedRuns(
+  sum: PowerSum,
+  lifted: readonly FineRoot[],
+  room: AxisRoom,
+  test: (roots: readonly FineRoot[]) => number,
+): readonly FineRoot[] {
   let roots = [...lifted].sort((a, b) => a.im - b.im);
   for (let length = roots.length; length >= 2; length--) {
     for (let start = 0; start + length <= roots.length; start++) {
       const run = roots.slice(start, start + length);
       if (run.some(({ re }) => re === 0)) continue;
       const im = run.reduce((total, root) => total + root.im, 0) / length;
-      if (!(shareAt(sum, im) <= room)) continue;
+      if (!(shareAt(sum, im) <= room.at(im))) continue;
       const tried = roots.map((root, n) => (n >= start && n < start + length ? { re: 0, im } : root));
-      if (isHalfCircle(run, im) || test(tried) <= room) roots = tried;
+      if (isHalfCircle(run, im) || test(tried) <= EXPLAINED * room.lift) roots = tried;
     }
   }
   return roots;
@@ -105,8 +125,8 @@ function smallestNear(sum: PowerSum, root: FineRoot): number | undefined {
   return x;
 }
 
-/** Corrections after the lift is taken off: quadratic, from the size of a lift. */
-const CORRECTIONS = 4;
+/** Corrections after the lift is taken off: each halves the distance from the axis at most, the last ones are quadratic. */
+const CORRECTIONS = 12;
 
 /** A root off the axis without the lift; left where it is when its step is no small one. */
 function corrected(sum: PowerSum, start: FineRoot): FineRoot {
@@ -116,11 +136,11 @@ function corrected(sum: PowerSum, start: FineRoot): FineRoot {
     const square = slope.re * slope.re + slope.im * slope.im;
     const re = (value.re * slope.re + value.im * slope.im) / square;
     const im = (value.im * slope.re - value.re * slope.im) / square;
-    if (!(Math.hypot(re, im) <= LARGEST_SHARE * -start.re)) return start;
+    if (!(Math.hypot(re, im) <= LARGEST_SHARE * at.im)) return start;
     at = { re: at.re - re, im: at.im - im };
   }
   return { re: -at.im, im: at.re };
 }
 
-/** Of the distance from the axis: beyond it Newton's iteration might go to another root. */
-const LARGEST_SHARE = 0.05;
+/** Of the distance from the axis: next to its mirror image a lifted root goes down by half of it, never by more. */
+const LARGEST_SHARE = 0.6;

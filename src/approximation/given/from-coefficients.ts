@@ -1,4 +1,5 @@
-import { type Complex, complex, divide, magnitude, refusal } from '../../numerics/index.js';
+import type { FineRoot } from '../../forms/index.js';
+import { type Complex, complex, divide, EPS, magnitude, refusal } from '../../numerics/index.js';
 import { checkRequest } from '../request.js';
 import { readCoefficients, rootsOf } from './coefficient-roots.js';
 import { fittedResponse, type GivenResponse } from './from-roots.js';
@@ -11,7 +12,7 @@ export interface CoefficientsRequest {
   readonly e?: readonly (number | Complex)[];
   /** F; absent when `e` is given and the reflection zeros are to be found. */
   readonly f?: readonly (number | Complex)[];
-  /** P, default 1. */
+  /** P; without it there is no finite transmission zero. */
   readonly p?: readonly (number | Complex)[];
   /** `S21 = P/(epsilon*E)`, default 1. */
   readonly epsilon?: number;
@@ -60,8 +61,25 @@ export function responseFromCoefficients(request: CoefficientsRequest): GivenRes
       ...(f === undefined ? {} : { epsilonR: readPositive('epsilonR', request.epsilonR ?? 1) * share(f) }),
       ...(tolerance === undefined ? {} : { tolerance }),
     },
-    { lead: leadOf(divide(lead(p), lead(f ?? e)), order + transmissionZeros.length) },
+    {
+      ...(request.p === undefined
+        ? {}
+        : { lead: leadOf(divide(lead(p), lead(f ?? e)), order + transmissionZeros.length) }),
+      open: e === undefined || poles === undefined ? 0 : openShare(e, poles),
+    },
   );
+}
+
+/** Share of power that rounding of the coefficients of E leaves open: `4 eps sum |c_k omega^k| / |E|`, on every resonance. */
+function openShare(e: readonly Complex[], poles: readonly FineRoot[]): number {
+  return poles.reduce((worst, { im }) => {
+    const sum = e.reduceRight((total, { re, im: part }) => total * Math.abs(im) + Math.hypot(re, part), 0);
+    const size = poles.reduce(
+      (product, pole) => product * Math.hypot(pole.re, pole.im - im),
+      magnitude(e.at(-1) as Complex),
+    );
+    return Math.max(worst, (4 * EPS * sum) / size);
+  }, 0);
 }
 
 /** Phases may be off by the rounding of six digits. */

@@ -25,8 +25,8 @@ export interface Transmission {
 export function reflectionHalf(transmission: Transmission, excess: number, tolerance: number): readonly FineRoot[] {
   const { poles, transmissionZeros, epsilon } = transmission;
   const taken = { constant: negated(inverseSquare(epsilon)), roots: transmissionZeros };
-  const rounding = LIFT_UNITS * Math.max(...lookingPoints(poles).map((omega) => roundingOf(poles, omega)));
-  const lift = Math.max(rounding, 2 * excess);
+  const atPoles = Math.max(...lookingPoints(poles).map((omega) => roundingOf(poles, omega)));
+  const lift = LIFT_UNITS * Math.max(atPoles, excess);
   const lifted: PowerSum = {
     first: { constant: doubledAdd(ONE, { hi: lift, lo: 0 }), roots: poles },
     second: taken,
@@ -35,13 +35,13 @@ export function reflectionHalf(transmission: Transmission, excess: number, toler
   const starts = poles.map(({ re, im }, n) => ({ re: re * (0.5 + 0.01 * n), im: im - 0.003 * n * re }));
   const exact: PowerSum = { first: { constant: ONE, roots: poles }, second: taken };
   return axisZeros(exact, halfRoots(lifted, starts), {
-    rounding: ALLOWED * rounding,
-    single: ALLOWED * Math.max(rounding, excess, tolerance),
+    lift: Math.max(lift, tolerance),
+    at: (omega) => ALLOWED * Math.max(roundingOf(poles, omega), excess, tolerance),
   });
 }
 
 /** Lift in units of the rounding of the data: enough that no double root splits along the axis. */
 const LIFT_UNITS = 2;
 
-/** A root on the axis may cost this many lifts of power. */
-const ALLOWED = 8;
+/** A sum that should vanish may be off by this many roundings of the poles: theirs, and as much for zeros and constant. */
+const ALLOWED = 2;
