@@ -6,12 +6,21 @@
  */
 export type {
   BesselRequest,
+  CoefficientsRequest,
   EllipticRequest,
   GeneralizedChebyshevRequest,
+  GivenResponse,
   InverseChebyshevRequest,
+  MagnitudeRequest,
+  Moves,
   PolynomialCoefficients,
+  Predistortion,
+  PredistortionRequest,
   PrototypeElements,
   PrototypeRequest,
+  ReflectionSides,
+  RootsRequest,
+  SquarePolynomial,
   TransmissionZero,
 } from './approximation/index.js';
 export {
@@ -24,7 +33,11 @@ export {
   generalizedChebyshev,
   inlineMatrix,
   inverseChebyshev,
+  predistort,
   prototypeElements,
+  responseFromCoefficients,
+  responseFromMagnitude,
+  responseFromRoots,
 } from './approximation/index.js';
 export type {
   CouplingRow,
