@@ -151,7 +151,7 @@ const nearest = (roots: readonly Complex[], { re, im }: Complex): number =>
 
 /**
  * What rounding of the data moves a reflection zero by: the power |S11|^2 is known to eps times the sizes of the poles over their
- * distances, on the resonance where that is most; divided by its slope at the zero, the zero's own mirror image included.
+ * distances, on the resonance where that is most; divided by its slope at the zero, the zero's own mirror image included. Its own rounding at least.
  */
 function roomFor(zero: Complex, each: LosslessCase): number {
   const polynomials = polynomialsOf(each);
@@ -163,5 +163,5 @@ function roomFor(zero: Complex, each: LosslessCase): number {
     const isSelf = other.re === zero.re && other.im === zero.im;
     slope *= ((isSelf ? 1 : to(other, 1)) * to(other, -1)) / (to(pole, 1) * to(pole, -1));
   });
-  return (16 * EPS * largestRounding(polynomials)) / slope;
+  return (16 * EPS * largestRounding(polynomials)) / slope + 2 * EPS * Math.hypot(zero.re, zero.im);
 }
