@@ -13,7 +13,7 @@ import type { Complex, FilterPolynomials } from '../../../src/forms/index.js';
 import { sweep } from '../../../src/response/index.js';
 import { transversal } from '../../../src/synthesis/index.js';
 import { errorOf, LOSSLESS, type LosslessCase, polynomialsOf } from '../../support/lossless-reference.js';
-import { differenceOf, rootError } from './compare.js';
+import { differenceOf, GRID, rootError } from './compare.js';
 
 // Oracles: the closed forms of the families (their roots are computed on ways of their own), and the references of more than
 // 100 digits in fixtures/reference, whose generator expands polynomials and shares nothing with this code.
@@ -165,3 +165,21 @@ function roomFor(zero: Complex, each: LosslessCase): number {
   });
   return (16 * EPS * largestRounding(polynomials)) / slope + 2 * EPS * Math.hypot(zero.re, zero.im);
 }
+
+describe('poles of so high a return loss that they leave reflection zeros open', () => {
+  it.each([4, 8, 12])('give them to 1e-11 at 60 dB, and the right |S21| at 100 dB: order %i', (order) => {
+    const level = chebyshev({ order, returnLossDb: 60 });
+    const found = responseFromRoots({ poles: level.poles, epsilon: level.epsilon });
+    expect(rootError(found.reflectionZeros, level.reflectionZeros)).toBeLessThan(1e-11);
+    const high = chebyshev({ order, returnLossDb: 100 });
+    const open = sweep(responseFromRoots({ poles: high.poles, epsilon: high.epsilon }), GRID).s21;
+    const right = sweep(high, GRID).s21;
+    const off = GRID.map((_, n) =>
+      Math.abs(
+        Math.hypot(open.re[n] as number, open.im[n] as number) -
+          Math.hypot(right.re[n] as number, right.im[n] as number),
+      ),
+    );
+    expect(Math.max(...off)).toBeLessThan(2e-11);
+  });
+});
