@@ -13,7 +13,7 @@ import type { Complex, FilterPolynomials } from '../../../src/forms/index.js';
 import { sweep } from '../../../src/response/index.js';
 import { transversal } from '../../../src/synthesis/index.js';
 import { errorOf, LOSSLESS, type LosslessCase, polynomialsOf } from '../../support/lossless-reference.js';
-import { differenceOf, rootError } from './compare.js';
+import { differenceOf, GRID, rootError } from './compare.js';
 
 // Oracles: the closed forms of the families (their roots are computed on ways of their own), and the references of more than
 // 100 digits in fixtures/reference, whose generator expands polynomials and shares nothing with this code.
@@ -151,7 +151,7 @@ const nearest = (roots: readonly Complex[], { re, im }: Complex): number =>
 
 /**
  * What rounding of the data moves a reflection zero by: the power |S11|^2 is known to eps times the sizes of the poles over their
- * distances, on the resonance where that is most; divided by its slope at the zero, the zero's own mirror image included.
+ * distances, on the resonance where that is most; divided by its slope at the zero, the zero's own mirror image included. Its own rounding at least.
  */
 function roomFor(zero: Complex, each: LosslessCase): number {
   const polynomials = polynomialsOf(each);
@@ -163,5 +163,23 @@ function roomFor(zero: Complex, each: LosslessCase): number {
     const isSelf = other.re === zero.re && other.im === zero.im;
     slope *= ((isSelf ? 1 : to(other, 1)) * to(other, -1)) / (to(pole, 1) * to(pole, -1));
   });
-  return (16 * EPS * largestRounding(polynomials)) / slope;
+  return (16 * EPS * largestRounding(polynomials)) / slope + 2 * EPS * Math.hypot(zero.re, zero.im);
 }
+
+describe('poles of so high a return loss that they leave reflection zeros open', () => {
+  it.each([4, 8, 12])('give them to 1e-11 at 60 dB, and the right |S21| at 100 dB: order %i', (order) => {
+    const level = chebyshev({ order, returnLossDb: 60 });
+    const found = responseFromRoots({ poles: level.poles, epsilon: level.epsilon });
+    expect(rootError(found.reflectionZeros, level.reflectionZeros)).toBeLessThan(1e-11);
+    const high = chebyshev({ order, returnLossDb: 100 });
+    const open = sweep(responseFromRoots({ poles: high.poles, epsilon: high.epsilon }), GRID).s21;
+    const right = sweep(high, GRID).s21;
+    const off = GRID.map((_, n) =>
+      Math.abs(
+        Math.hypot(open.re[n] as number, open.im[n] as number) -
+          Math.hypot(right.re[n] as number, right.im[n] as number),
+      ),
+    );
+    expect(Math.max(...off)).toBeLessThan(2e-11);
+  });
+});
