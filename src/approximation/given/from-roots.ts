@@ -1,10 +1,11 @@
 import { checkPolynomials, type FilterPolynomials, type FineRoot } from '../../forms/index.js';
-import type { Complex } from '../../numerics/index.js';
+import { type Complex, EPS } from '../../numerics/index.js';
 import type { TransmissionZero } from '../generalized-chebyshev.js';
 import { checkRequest } from '../request.js';
 import { transmissionLead } from '../transmission-lead.js';
 import { movesOf, type Parts, SIX_DIGITS } from './fit.js';
 import { fittedParts } from './fitted-parts.js';
+import { refuseOpenZeros } from './open-zeros.js';
 import { type ReadRequest, readRequest } from './read-request.js';
 import { mirroredPairs, readPositive } from './read-roots.js';
 import type { ReflectionSides } from './sides.js';
@@ -48,9 +49,10 @@ export interface GivenResponse extends FilterPolynomials {
  * are and fitted to each other to the last digit; `moved` says by how much each root moved. Poles are listed by falling
  * frequency; data exactly symmetric about omega = 0 give a response that is.
  *
- * Poles and transmission zeros alone leave reflection zeros open where the band reflects little more power than they are rounded
- * to: equal-ripple responses keep them to 1e-11 at 60 dB of return loss, but from 80 dB on they come out up to 1e-3 off, also
- * beside the axis; |S21| is right to 2e-11 all the same. Cost O(order^2) a sweep of about thirty, 15 ms at order 30; up to ten times that where zeros are open.
+ * Poles and transmission zeros alone leave reflection zeros open where the band reflects little more power than they are
+ * rounded to: equal-ripple responses keep them to 1e-11 at 60 dB of return loss; where a change in the last digit of the data
+ * moves S11 by more than 1e-7 they are refused (E_ILL_CONDITIONED). Cost O(order^2) a sweep of about thirty, 15 ms at order
+ * 30, twice that where reflection zeros are found.
  *
  * Refused: poles not on the left or a common root of F and P on the axis (E_NOT_HURWITZ), zeros without mirror image
  * (E_NOT_RECIPROCAL), |S21| above 1 or data that contradict each other, with the size (E_NOT_LOSSLESS), roots that
@@ -79,8 +81,23 @@ export interface Known {
   readonly open?: number;
 }
 
-/** A response from roots and what else is known. */
-export function fittedResponse(request: RootsRequest, { lead, open }: Known = {}): GivenResponse {
+/** A response from roots and what else is known; refused where the data leave the reflection zeros open. */
+export function fittedResponse(request: RootsRequest, known: Known = {}): GivenResponse {
+  const found = fittedToData(request, known);
+  const { poles, reflectionZeros, epsilon, epsilonR, tolerance = 0 } = request;
+  const isGiven = Array.isArray(reflectionZeros) && typeof reflectionZeros[0] === 'object';
+  if (poles === undefined || isGiven) return found;
+  const nudge = 1 + EPS;
+  const constants = {
+    ...(epsilon === undefined ? {} : { epsilon: epsilon * nudge }),
+    ...(epsilonR === undefined || epsilon !== undefined ? {} : { epsilonR: epsilonR * nudge }),
+  };
+  refuseOpenZeros(found, fittedToData({ ...request, ...constants }, known), tolerance);
+  return found;
+}
+
+/** The response itself, whatever the data leave open. */
+export function fittedToData(request: RootsRequest, { lead, open }: Known = {}): GivenResponse {
   const tolerance = request.tolerance === undefined ? undefined : readPositive('tolerance', request.tolerance);
   const given = readRequest(request);
   const transmissionZeros = mirroredPairs(given.transmissionZeros);

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { fittedToData } from '../../../src/approximation/given/from-roots.js';
 import {
   bandstop,
   bessel,
@@ -10,6 +11,7 @@ import {
   responseFromRoots,
 } from '../../../src/approximation/index.js';
 import type { Complex, FilterPolynomials } from '../../../src/forms/index.js';
+import { FilterFailure } from '../../../src/numerics/index.js';
 import { sweep } from '../../../src/response/index.js';
 import { transversal } from '../../../src/synthesis/index.js';
 import { errorOf, LOSSLESS, type LosslessCase, polynomialsOf } from '../../support/lossless-reference.js';
@@ -110,7 +112,7 @@ describe('against references of more than 100 digits', () => {
       const { reflectionZeros, transmissionZeros, poles, epsilon } = polynomialsOf(each);
       const sorted = [...reflectionZeros].sort((a, b) => b.im - a.im);
       const signs = sorted.map(({ re }) => (re > 0 ? 1 : -1));
-      const found = responseFromRoots({ poles, transmissionZeros, epsilon, reflectionZeros: signs });
+      const found = fittedToData({ poles, transmissionZeros, epsilon, reflectionZeros: signs });
       // Closer to the axis than rounding of the data moves it a zero is open: it may lie on it as well.
       const told = sorted.filter((zero) => roomFor(zero, each) < 0.25 * Math.abs(zero.re));
       const errors = told.map((zero) => nearest(found.reflectionZeros, zero) / roomFor(zero, each));
@@ -128,6 +130,25 @@ describe('against references of more than 100 digits', () => {
       expect(worst).toBeLessThan(2e-11);
     },
   );
+
+  it('from E and P are accepted only where S11 is right to 1e-6, and refused where the data leave it open', () => {
+    let [accepted, refused] = [0, 0];
+    for (const each of SIMPLE) {
+      const { reflectionZeros, transmissionZeros, poles, epsilon, transmissionLead } = polynomialsOf(each);
+      const signs = [...reflectionZeros].sort((a, b) => b.im - a.im).map(({ re }) => (re > 0 ? 1 : -1));
+      try {
+        const found = responseFromRoots({ poles, transmissionZeros, epsilon, reflectionZeros: signs });
+        expect(errorOf(transversal({ ...found, transmissionLead }), each), `case ${each.id}`).toBeLessThan(1e-6);
+        accepted += 1;
+      } catch (error) {
+        if (!(error instanceof FilterFailure)) throw error;
+        expect(error.code).toBe('E_ILL_CONDITIONED');
+        refused += 1;
+      }
+    }
+    expect(accepted).toBeGreaterThan(40);
+    expect(refused).toBeGreaterThan(5);
+  });
 
   it('tell seven zeros of ten', () => {
     expect(counts.told / counts.all).toBeGreaterThan(0.7);
@@ -172,7 +193,10 @@ describe('poles of so high a return loss that they leave reflection zeros open',
     const found = responseFromRoots({ poles: level.poles, epsilon: level.epsilon });
     expect(rootError(found.reflectionZeros, level.reflectionZeros)).toBeLessThan(1e-11);
     const high = chebyshev({ order, returnLossDb: 100 });
-    const open = sweep(responseFromRoots({ poles: high.poles, epsilon: high.epsilon }), GRID).s21;
+    expect(() => responseFromRoots({ poles: high.poles, epsilon: high.epsilon })).toThrow(
+      /^E_ILL_CONDITIONED poles: found S11 off by/,
+    );
+    const open = sweep(fittedToData({ poles: high.poles, epsilon: high.epsilon }), GRID).s21;
     const right = sweep(high, GRID).s21;
     const off = GRID.map((_, n) =>
       Math.abs(
