@@ -17,7 +17,7 @@ const KNOWN_TO: Readonly<Record<string, readonly SpecificationFamily[]>> = {
  * Largest orders of flat-delay designs: with all reflection zeros on one side the energy sits at one end of the filter, and
  * above these orders the matrix in doubles has too few digits left for its certificates (tests go to these orders).
  */
-const BESSEL_ORDER = { oneSided: 25, alternating: 60 };
+const BESSEL_ORDER = { oneSided: 48, alternating: 60 };
 
 /** Faults of the keys that belong to single families: strangers, missing ones, their ranges. `isBad` tells unsound keys. */
 export function familyKeyFaults(parts: Parts, isBad: (key: string) => boolean): readonly Fault[] {

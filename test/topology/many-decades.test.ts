@@ -3,7 +3,7 @@ import { bessel, certify, folded, transversal } from '../../src/index.js';
 
 describe('folded(matrix) over many decades of coupling', () => {
   // Flat-delay ladders fall off by many decades: the corrected elimination did not settle there and left what must vanish.
-  it.each([20, 30, 40])('order %i of the flat-delay family folds, certified', (order) => {
+  it.each([20, 30, 40, 48])('order %i of the flat-delay family folds, certified', (order) => {
     const response = bessel({ order, edge: 'halfPower' });
     const start = transversal(response);
     const { matrix, rotations, leftover } = folded(start);

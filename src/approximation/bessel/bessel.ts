@@ -24,7 +24,7 @@ export const MAX_BESSEL_ORDER = 60;
  * `order` 1 to 60. Seen from its ports the filter is not symmetric: S11 and S22 differ in phase (above order 1), and all
  * reflection zeros but the one at the center lie off the axis, in mirrored pairs of which either half may belong to S11:
  * `left` (default) puts all into the left half plane, `right` exchanges the ports, `alternating` changes side from pair to pair.
- * With all zeros on one side the energy sits at one end of the filter; matrices in doubles are certified to order 25 then, and
+ * With all zeros on one side the energy sits at one end of the filter; matrices in doubles are certified to order 48 then, and
  * to order 60 with alternating zeros. Cost O(order^2) whole-number products, 0.2 s at order 60.
  *
  * @throws FilterFailure E_ORDER_RANGE, E_CHOICE, E_TYPE, E_NOT_FINITE, E_MISSING

@@ -78,12 +78,13 @@ function drawing(design: DesignReport, data: CurveData, format: Format): Drawing
   const foot = plot.bottom + flagStrip(flags);
   const scale = ruler(plot, foot, design.specification.transmissionZeros);
   const map = labelMap(plot);
-  takeWalls(map, plot, walls);
   for (const curve of [curves.s21, curves.s11, ...curves.lossless]) takeLine(map, curve);
   for (const { lid } of lids) takeBox(map, lidBox(plot, lid));
   takeFlags(map, plot, points);
-  const asked = lidTexts(map, plot, lids, 'return loss ≥');
+  // Labels of walls stand inside the walls: before these are taken.
   const wallTexts = wallLabels(map, plot, walls);
+  takeWalls(map, plot, walls);
+  const asked = lidTexts(map, plot, lids, 'return loss ≥');
   const body = plotFrame(
     plot,
     plot.top,

@@ -3,7 +3,7 @@ import { hatchFill } from '../../svg/hatch.js';
 import { element, fragment, type Markup } from '../../svg/markup.js';
 import { label } from '../../svg/words.js';
 import { textSize } from './curve-name.js';
-import { type Box, type LabelMap, takeBox } from './label-map.js';
+import { type Box, claim, type LabelMap, takeBox } from './label-map.js';
 import { limitWords } from './limit-words.js';
 import { type Plot, xOf, yOf } from './plot.js';
 import type { Point } from './thin.js';
@@ -75,17 +75,22 @@ export function takeWalls(map: LabelMap, plot: Plot, walls: readonly Wall[]): vo
     takeBox(map, { left, right, top: plot.top - 6, bottom: yOf(plot, -Math.max(...depths)) + 2 });
 }
 
-/** Side of a wall's label that is inside it and inside no deeper wall. */
-function labelBox(plot: Plot, wall: Wall, walls: readonly Wall[], text: string): Box | undefined {
-  if (wall.isPost) return undefined;
+/** Where a wall's label would be inside it and inside no deeper wall, the best place first. */
+function labelBoxes(plot: Plot, wall: Wall, walls: readonly Wall[], text: string): readonly Box[] {
+  if (wall.isPost) return [];
   const deeper = walls.filter((other) => other !== wall && Math.min(...other.depths) >= Math.min(...wall.depths));
   const from = Math.max(wall.left, ...deeper.filter(({ left }) => left <= wall.left).map(({ right }) => right));
   const to = Math.min(wall.right, ...deeper.filter(({ right }) => right >= wall.right).map(({ left }) => left));
   const [width, height] = textSize([text]);
-  if (to - from < width + 12) return undefined;
-  const bottom = yOf(plot, -Math.min(...wall.depths)) - 6;
-  const middle = (from + to) / 2;
-  return { left: middle - width / 2, right: middle + width / 2, top: bottom - height, bottom };
+  if (to - from < width + 12) return [];
+  const lowest = yOf(plot, -Math.min(...wall.depths)) - 6;
+  const middles = [(from + to) / 2, from + width / 2 + 6, to - width / 2 - 6];
+  return [0, 18, 40, 70].flatMap((lift) =>
+    middles.map((middle) => {
+      const bottom = lowest - lift;
+      return { left: middle - width / 2, right: middle + width / 2, top: bottom - height, bottom };
+    }),
+  );
 }
 
 /** What a limit asks, in words. */
@@ -119,15 +124,11 @@ export function placedText({ box, lines, isMet }: PlacedText, classes: string): 
   return fragment(...lines.map((text, n) => label(middle, box.top + ASCENT + LINE_HEIGHT * n, text, all, 'mid')));
 }
 
-/** Labels inside the walls that have the room. */
+/** Labels inside the walls that have the room, clear of what the map holds: a curve runs through the wall that it misses. */
 export function wallLabels(map: LabelMap, plot: Plot, walls: readonly Wall[]): readonly PlacedText[] {
-  const placed = walls.flatMap((wall) => {
+  return walls.flatMap((wall) => {
     const text = wallText(wall);
-    const box = labelBox(plot, wall, walls, text);
-    return box === undefined || box.top < plot.top + 4 || box.bottom > plot.bottom
-      ? []
-      : [{ box, lines: [text], isMet: true }];
+    const box = labelBoxes(plot, wall, walls, text).find((each) => each.top >= plot.top + 4 && claim(map, each));
+    return box === undefined ? [] : [{ box, lines: [text], isMet: true }];
   });
-  for (const { box } of placed) takeBox(map, box);
-  return placed;
 }

@@ -362,3 +362,26 @@ it('a limit is never shown rounded', () => {
   );
   expect(wide.body.markup).toContain('of 33.9996 at');
 });
+
+it('the label of a wall that the curve runs through stands clear of the curve', () => {
+  const design = sampleDesign({
+    passband: { lowerHz: '1710 MHz', upperHz: '1785 MHz' },
+    order: 8,
+    returnLossDb: 21,
+    transmissionZeros: [1.18, 1.35, -1.6],
+    mask: [
+      { fromHz: '1805 MHz', toHz: '1880 MHz', rejectionDb: 70 },
+      { toHz: '1690 MHz', rejectionDb: 30 },
+    ],
+  });
+  const { markup } = responsePicture(design).wide.body;
+  const [, x, y] = /<text x="([\d.]+)" y="([\d.]+)" class="[^"]*">reject ≥ 70 dB</.exec(markup)!;
+  const [points = []] = pathsOf(markup, 'thick s-transmission');
+  // A text of this size is at least 80 px wide and 12 px high, its base at y.
+  const [left, right, top, bottom] = [Number(x) - 40, Number(x) + 40, Number(y) - 11, Number(y) + 3];
+  const along = points.slice(1).flatMap(([bx, by], n) => {
+    const [ax, ay] = points[n]!;
+    return Array.from({ length: 50 }, (_, k) => [ax + ((bx - ax) * k) / 50, ay + ((by - ay) * k) / 50] as const);
+  });
+  expect(along.filter(([px, py]) => px > left && px < right && py > top && py < bottom)).toHaveLength(0);
+});
